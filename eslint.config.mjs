@@ -8,10 +8,18 @@ const FOCUSED = ['describe.only', 'it.only', 'test.only'].map((call) => ({
   message: 'A focused test silently skips all others.',
 }));
 
+/** import * as z keeps 365 kB out of the browser bundle. */
+const ZOD = {
+  selector:
+    "ImportDeclaration[source.value='zod'] :matches(ImportSpecifier, ImportDefaultSpecifier)",
+  message: "Write import * as z from 'zod'.",
+};
+
 /** The database has one door: everything else goes through Database.transaction or Database.read. */
 const DOOR = [
   {
-    selector: "CallExpression[callee.property.name='transaction'][callee.object.name=/[dD]ataSource$/]",
+    selector:
+      "CallExpression[callee.property.name='transaction'][callee.object.name=/[dD]ataSource$/]",
     message: 'Use Database.transaction: the driver shares one connection (see DEVELOPERS.md).',
   },
 ];
@@ -42,19 +50,7 @@ export default tseslint.config(
       'max-lines-per-function': ['error', { max: 60, skipBlankLines: true, skipComments: true }],
       complexity: ['error', 15],
       'no-console': 'error',
-      'no-restricted-syntax': ['error', ...FOCUSED],
-      'no-restricted-imports': [
-        'error',
-        {
-          paths: [
-            {
-              name: 'zod',
-              importNames: ['z', 'default'],
-              message: "import * as z from 'zod' keeps the bundle small.",
-            },
-          ],
-        },
-      ],
+      'no-restricted-syntax': ['error', ...FOCUSED, ZOD],
       '@typescript-eslint/restrict-template-expressions': ['error', { allowNumber: true }],
       '@typescript-eslint/no-extraneous-class': ['error', { allowWithDecorator: true }],
       '@typescript-eslint/consistent-type-definitions': ['error', 'interface'],
@@ -84,7 +80,7 @@ export default tseslint.config(
   {
     files: ['server/**/*.ts'],
     ignores: ['server/persistence/database.ts'],
-    rules: { 'no-restricted-syntax': ['error', ...FOCUSED, ...DOOR] },
+    rules: { 'no-restricted-syntax': ['error', ...FOCUSED, ZOD, ...DOOR] },
   },
   {
     files: ['src/**/*.ts'],

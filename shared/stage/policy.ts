@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { celsius, currentOrZero, factor, fraction, line, power, resistance, voltage } from './ranges.ts';
+import { currentOrZero, factor, fraction, line, resistance, voltage } from './ranges.ts';
 
 export const SERIES = ['E3', 'E6', 'E12', 'E24', 'E48', 'E96', 'E192'] as const;
 
@@ -90,6 +90,8 @@ export const PolicyOfFile = z
   })
   .transform((given): Policy => {
     const base = SHIPPED_POLICIES.find((policy) => policy.name === given.name) ?? GENERAL_PRACTICE;
-    const set = Object.fromEntries(Object.entries(given).filter(([, value]) => value !== undefined));
+    const set = Object.fromEntries(
+      Object.entries(given).filter(([, value]) => value !== undefined),
+    );
     return { ...base, ...set };
   });

@@ -47,7 +47,7 @@ export const count = z
 export const optional = <T extends z.ZodType>(schema: T) => schema.nullable().default(null);
 
 /** A smallest and a largest value, in that order. */
-export const span = <T extends z.ZodNumber>(schema: T) =>
+export const span = (schema: z.ZodNumber) =>
   z
     .strictObject({ min: schema, max: schema })
     .refine((value) => value.min <= value.max, { error: 'expected min not above max' });
