@@ -83,8 +83,13 @@ export const Lock = z.object({
   meaning: z.string(),
   /** SHA-256, hex, over the canonical JSON (RFC 8785) of what was locked. */
   hash: z.string(),
+  /** Whether the hash recomputed for this reply is still the signed one. */
+  intact: z.boolean(),
 });
 export type Lock = z.infer<typeof Lock>;
+
+/** Who took a revision back, when and why. */
+const Reason = z.object({ by: PersonRef, atMs: TimeMs, reason: z.string() });
 
 /** One revision of a stage. The ETag of this resource guards every change to it. */
 export const Revision = z
@@ -110,6 +115,10 @@ export const Revision = z
     submittedBy: PersonRef.nullable(),
     checkedAtMs: TimeMs.nullable(),
     checkedBy: PersonRef.nullable(),
+    /** The last return to draft, until it is submitted again. */
+    returned: Reason.nullable(),
+    withdrawn: Reason.nullable(),
+    /** The check of the latest submission. */
     check: CheckRecord.nullable(),
     findings: z.array(ReviewFinding),
     lock: Lock.nullable(),

@@ -64,10 +64,11 @@ export function moveRefusal(
   if (!(rule.from as readonly StoredState[]).includes(state)) {
     return { rule: 'state', reason: `The revision is ${STATE_WORDS[state].toLowerCase()}.` };
   }
-  if (!roles.includes(rule.role)) {
-    return { rule: 'role', reason: `Only a ${rule.role} of the project can do this.` };
+  if (!roles.includes(rule.role)) return wrongRole(rule.role);
+  if (rule.role === 'designer') {
+    if (move === 'withdraw' || !people.checkers.includes(personId)) return null;
+    return { rule: 'own-check', reason: 'You checked this revision; another person submits it.' };
   }
-  if (rule.role === 'designer') return null;
   if (people.authors.includes(personId)) {
     return { rule: 'own-work', reason: 'You worked on this revision; another person decides.' };
   }
@@ -75,6 +76,12 @@ export function moveRefusal(
     return { rule: 'own-check', reason: 'You checked this revision; another person locks it.' };
   }
   return null;
+}
+
+/** The refusal of somebody who lacks a role, with its sentence. */
+export function wrongRole(role: ProjectRole): MoveRefusal {
+  const article = role === 'designer' || role === 'checker' ? 'a' : 'an';
+  return { rule: 'role', reason: `Only ${article} ${role} of the project can do this.` };
 }
 
 const LETTERS = 'ABCDEFGHJKLMNPRTUVWY';
