@@ -1,0 +1,30 @@
+import type { ProjectRole } from '../../shared/review/revision-state.ts';
+import type { Actor } from '../audit/act.ts';
+import { ApiError } from './api-error.ts';
+
+/**
+ * Who may call a route. Every route declares one; without it the route does not exist.
+ *
+ * `{ project }` names what the caller must be in the project the request is about: the service decides it
+ * (404 for whoever is no member, 403 for a member without the role), the role matrix of the suites reads it.
+ * An administrator counts as a member who manages, but holds no role by that.
+ */
+export type Access =
+  | 'public'
+  | 'signed-in'
+  | 'administrator'
+  | 'administrator-or-loopback'
+  | { readonly project: 'member' | 'manager' | readonly ProjectRole[] };
+
+/** @throws {ApiError} not-signed-in or not-permitted */
+export function requireAccess(access: Access, actor: Actor | null, fromLoopback: boolean): void {
+  if (access === 'public') return;
+  if (access === 'administrator-or-loopback' && fromLoopback) return;
+  if (actor === null) throw new ApiError('not-signed-in', 'Sign in to go on.');
+  const administratorOnly = access === 'administrator' || access === 'administrator-or-loopback';
+  if (administratorOnly && !actor.administrator) {
+    throw new ApiError('not-permitted', 'Only an administrator can do this.', {
+      rule: 'administrator',
+    });
+  }
+}

@@ -1,0 +1,72 @@
+import './express-user.ts';
+import type { Request, RequestHandler, Response, Router } from 'express';
+import type { Actor } from '../audit/act.ts';
+import { requireAccess } from './access.ts';
+import { ApiError } from './api-error.ts';
+import type { Answer, Call, Endpoint } from './endpoint.ts';
+import { readInput } from './read-input.ts';
+import { requestIdOf } from './request-log.ts';
+import { readQuery } from './read-query.ts';
+import { etagOf, parseIfMatch } from './versioned.ts';
+import type { Route } from '../../shared/contract/route.ts';
+import type { Access } from './access.ts';
+
+const declared = new WeakMap<RequestHandler, Endpoint>();
+
+/** The declaration behind a handler found in a router; undefined for one that was put there by hand. */
+export function endpointOf(handler: RequestHandler): Endpoint | undefined {
+  return declared.get(handler);
+}
+
+/** Registers the endpoints; the only place where routes get into the router. */
+export function mount(router: Router, endpoints: readonly Endpoint[], now: () => number): void {
+  for (const item of endpoints) {
+    const handler: RequestHandler = async (request, response) => {
+      const call = toCall(item, request, response, now());
+      send(item.route, response, await item.handle(call));
+    };
+    declared.set(handler, item);
+    const method = item.route.method.toLowerCase() as 'get' | 'post' | 'put' | 'patch' | 'delete';
+    router[method](item.route.path, handler);
+  }
+}
+
+function toCall(
+  { route, access }: Endpoint,
+  request: Request,
+  response: Response,
+  atMs: number,
+): Call<Route, Access> {
+  const actor: Actor | null = request.user ?? null;
+  requireAccess(access, actor, isLoopback(request.socket.remoteAddress));
+  return {
+    ...{ actor, requestId: requestIdOf(request), atMs },
+    params: readInput(route.params, { ...request.params }, '/params'),
+    query: readInput(route.query, readQuery(request.originalUrl), '/query'),
+    body: readInput(route.body, bodyOf(route, request), ''),
+    ifMatch: route.guarded === true ? parseIfMatch(request.get('If-Match')) : null,
+    http: { request, response },
+  } as Call<Route, Access>;
+}
+
+function bodyOf(route: Route, request: Request): unknown {
+  const body: unknown = request.body;
+  if (route.body !== undefined && body === undefined) {
+    throw new ApiError('unreadable-body', 'The request has no body: send JSON.');
+  }
+  return body ?? {};
+}
+
+function send(route: Route, response: Response, answer: Answer<Route>): void {
+  if (answer.etag) response.set('ETag', etagOf(answer.etag));
+  if (route.reply === null) {
+    response.status(route.status ?? 204).end();
+    return;
+  }
+  // our own mistake here is a 500, not the caller's 422
+  response.status(route.status ?? 200).json(route.reply.parse(answer.body));
+}
+
+export function isLoopback(address: string | undefined): boolean {
+  return address === '127.0.0.1' || address === '::1' || address === '::ffff:127.0.0.1';
+}
