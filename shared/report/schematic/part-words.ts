@@ -1,0 +1,71 @@
+import { formatNumber, formatPercent, formatQuantity } from '../../units/engineering-notation.ts';
+import type { Run } from './drawing.ts';
+import type { SchematicDesignators, SchematicSubject } from './schematic-subject.ts';
+
+/** `V` with a subscript. */
+export const symbolRuns = (letter: string, sub: string): readonly Run[] => [
+  { text: letter },
+  { text: sub, sub: true },
+];
+
+const FALLBACK: Readonly<Record<keyof SchematicDesignators, readonly Run[]>> = {
+  baseResistor: symbolRuns('R', 'B'),
+  shuntResistor: symbolRuns('R', 'BE'),
+  pullUp: symbolRuns('R', 'PU'),
+  speedUpCapacitor: symbolRuns('C', 'B'),
+  load: symbolRuns('R', 'L'),
+  clamp: [{ text: 'D' }],
+  clampZener: [{ text: 'DZ' }],
+  drive: [{ text: 'U' }],
+};
+
+/** The designator of the board's drawing, else the symbol of the trade. */
+export function designatorRuns(
+  subject: SchematicSubject,
+  part: keyof SchematicDesignators,
+): readonly Run[] {
+  const given = subject.designators[part];
+  if (given !== null && given !== '') return [{ text: given }];
+  return part === 'load' && subject.stage.load.kind === 'coil' ? [{ text: 'K' }] : FALLBACK[part];
+}
+
+/** `620 Ω ±5 %` */
+export function resistorText(valueOhm: number | null, tolerance: number): string {
+  if (valueOhm === null) return 'not sized';
+  return `${formatQuantity(valueOhm, 'Ohm')} ±${formatPercent(tolerance)}`;
+}
+
+/** Figures of the load, one line each, at most three. */
+export function loadLines({ stage }: SchematicSubject): readonly string[] {
+  const { load } = stage;
+  switch (load.kind) {
+    case 'coil': {
+      const resistance = resistorText(load.resistanceOhm, load.tolerance);
+      return load.inductanceH === null
+        ? [resistance]
+        : [resistance, formatQuantity(load.inductanceH, 'H')];
+    }
+    case 'resistor':
+      return [resistorText(load.resistanceOhm, load.tolerance)];
+    case 'led-string':
+      return [`${load.count} LEDs`, resistorText(load.resistanceOhm, load.tolerance)];
+    case 'lamp':
+      return [formatQuantity(load.nominalV, 'V'), formatQuantity(load.currentA, 'A')];
+    case 'logic-input':
+      return [resistorText(load.pullUpOhm, load.tolerance)];
+  }
+}
+
+/** Splits a part number that is too long for one line; what still does not fit ends in an ellipsis. */
+export function wrapped(text: string, perLine: number): readonly string[] {
+  if (text.length <= perLine) return [text];
+  const rest = text.slice(perLine);
+  return [text.slice(0, perLine), rest.length <= perLine ? rest : `${rest.slice(0, perLine - 1)}…`];
+}
+
+/** A node voltage; from 10 mV up in volts, so that voltages of one drawing compare at sight. */
+export function voltText(valueV: number): string {
+  return Math.abs(valueV) < 0.01
+    ? formatQuantity(valueV, 'V')
+    : `${formatNumber(valueV, { pad: true })}\u00a0V`;
+}

@@ -1,0 +1,103 @@
+import type { CornerFigures } from '../../../../shared/checks/evaluation.ts';
+import { StageInput, type StageFile } from '../../../../shared/stage/stage-input.ts';
+
+export const RELAY_DRIVER: StageFile = {
+  format: 'sinkwell-stage/1',
+  reference: 'Q12',
+  title: 'Agitator contactor pilot relay',
+  topology: 'low-side-npn',
+  supplyV: { min: 21.6, max: 26.4 },
+  ambientDegC: { min: -20, max: 60 },
+  drive: {
+    kind: 'push-pull',
+    railV: { min: 3, max: 3.6 },
+    high: { dropV: 0.6, currentA: 0.008 },
+    low: { levelV: 0.4, currentA: 0.008, unloadedV: 0.1 },
+    sourceLimitA: 0.02,
+    sinkLimitA: 0.02,
+  },
+  load: {
+    kind: 'coil',
+    resistanceOhm: 1440,
+    tolerance: 0.1,
+    referenceDegC: 20,
+    temperatureRiseK: 20,
+    inductanceH: 4,
+    operateV: 16.8,
+    releaseV: 2.4,
+    maximumV: null,
+  },
+  baseResistor: { valueOhm: 620, tolerance: 0.05, ratingW: 0.1 },
+  shuntResistor: { valueOhm: 22000, tolerance: 0.05, ratingW: 0.1 },
+  clamp: { kind: 'diode', forwardV: 1, currentRatingA: 0.2 },
+  transistor: {
+    partNumber: '2N3904',
+    polarity: 'npn',
+    limits: { vceoV: 40, icA: 0.2, powerW: 0.625, tjMaxDegC: 150 },
+    thermal: { rthJaKPerW: 200 },
+    gain: [],
+    saturation: [],
+    baseEmitter: [],
+  },
+  policy: { name: 'General practice' },
+};
+
+/** A parsed stage made from the relay driver. */
+export const stageWith = (change: Partial<StageFile> = {}): StageInput =>
+  StageInput.parse({ ...RELAY_DRIVER, ...change });
+
+export const PULL_UP_DRIVE: StageFile['drive'] = {
+  kind: 'open-collector',
+  railV: { min: 4.75, max: 5.25 },
+  low: { levelV: 0.4, currentA: 0.004 },
+  sourceLimitA: null,
+  sinkLimitA: 0.01,
+  pullUp: { valueOhm: 4700, tolerance: 0.05, ratingW: 0.1 },
+};
+
+export const FIGURES: CornerFigures = {
+  corner: {
+    supply: 'max',
+    ambient: 'min',
+    drive: 'weak',
+    rb: '+',
+    rbe: '-',
+    load: '-',
+    gain: 'min',
+  },
+  supplyV: 26.4,
+  ambientDegC: -20,
+  outputV: 2.79,
+  driveA: 0.00276,
+  ibA: 0.00271,
+  shuntA: 48e-6,
+  icA: 0.024,
+  vceV: 0.235,
+  vbeV: 0.995,
+  forcedBeta: 8.9,
+  overdriveFactor: 5.73,
+  powerW: 0.0083,
+  tjDegC: -18,
+  saturated: true,
+};
+
+export const DESIGNATORS = {
+  baseResistor: 'R30',
+  shuntResistor: 'R31',
+  pullUp: 'R29',
+  speedUpCapacitor: 'C8',
+  load: 'K4',
+  clamp: 'D7',
+  clampZener: 'D8',
+  drive: 'U4',
+};
+export const NO_DESIGNATORS = {
+  baseResistor: null,
+  shuntResistor: null,
+  pullUp: null,
+  speedUpCapacitor: null,
+  load: null,
+  clamp: null,
+  clampZener: null,
+  drive: null,
+};
