@@ -1,7 +1,6 @@
 import * as z from 'zod';
+import { SERIES_NAMES } from '../units/preferred-values.ts';
 import { currentOrZero, factor, fraction, line, resistance, voltage } from './ranges.ts';
-
-export const SERIES = ['E3', 'E6', 'E12', 'E24', 'E48', 'E96', 'E192'] as const;
 
 const limits = {
   overdriveFactor: factor,
@@ -23,7 +22,7 @@ const limits = {
   offCurrentA: currentOrZero,
   averagingHz: z.number({ error: 'expected a frequency in Hz' }).min(0).max(1e9),
   overdrivenRatio: factor,
-  series: z.enum(SERIES, { error: `expected one of ${SERIES.join(', ')}` }),
+  series: z.enum(SERIES_NAMES, { error: `expected one of ${SERIES_NAMES.join(', ')}` }),
   smallestOhm: resistance,
   largestOhm: resistance,
 };
