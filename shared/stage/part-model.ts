@@ -1,0 +1,48 @@
+import { baseEmitterTable, type BaseEmitterTable } from '../physics/base-emitter.ts';
+import { gainTable, type GainTable } from '../physics/gain.ts';
+import {
+  cutOffAnchor,
+  type CutOffAnchor,
+  leakageTable,
+  type LeakageTable,
+} from '../physics/leakage.ts';
+import { saturationLine, type SaturationLine } from '../physics/saturation.ts';
+import { thermalResistanceInUse } from '../physics/thermal.ts';
+import type { Policy } from './policy.ts';
+import type { TransistorData } from './transistor-data.ts';
+
+/** A transistor's rows made into the tables and lines the calculation reads; null where rows are missing. */
+export interface PartModel {
+  readonly gain: GainTable | null;
+  readonly saturation: SaturationLine | null;
+  readonly baseEmitter: BaseEmitterTable;
+  readonly hasVbe: boolean;
+  readonly leakage: LeakageTable | null;
+  /** null where the sheet gives no collector current rating. */
+  readonly anchor: CutOffAnchor | null;
+  /** VBE at constant current, V/K. */
+  readonly vbeTempcoVPerK: number;
+  /** K/W; null where the sheet gives neither a thermal resistance nor a power. */
+  readonly rthJaKPerW: number | null;
+}
+
+/** A Darlington has two junctions in series and two gains in a row. */
+const DARLINGTON_JUNCTIONS = 2;
+
+/** The part as the policy's temperature laws and substitutes read it. */
+export function partModel(part: TransistorData, policy: Policy): PartModel {
+  const junctions = part.darlington ? DARLINGTON_JUNCTIONS : 1;
+  const vbeMinV = policy.vbeMinV * junctions;
+  const baseEmitter = baseEmitterTable(part.baseEmitter, vbeMinV);
+  const { limits } = part;
+  return {
+    gain: gainTable(part.gain, part.saturation, policy.gainExponent * junctions),
+    saturation: saturationLine(part.saturation, part.model?.betaR ?? null, part.darlington),
+    baseEmitter,
+    hasVbe: baseEmitter.maximum.icA.length > 0,
+    leakage: leakageTable(part.leakage, policy.leakageDoublingK),
+    anchor: limits.icA === null ? null : cutOffAnchor(part.baseEmitter, limits.icA, vbeMinV),
+    vbeTempcoVPerK: policy.vbeTempcoVPerK * junctions,
+    rthJaKPerW: thermalResistanceInUse(part.thermal.rthJaKPerW, limits.powerW, limits.tjMaxDegC),
+  };
+}

@@ -1,0 +1,112 @@
+import { maximumVbeV, minimumVbeV } from '../physics/base-emitter.ts';
+import { maximumGain, minimumGain } from '../physics/gain.ts';
+import { pieceAt } from '../physics/saturation.ts';
+import { type ClampVoltages, clampVoltages } from './clamp-voltages.ts';
+import { collectorPath, loadDegC } from './collector-path.ts';
+import { cornerSpace, type CornerSpace } from './corners.ts';
+import { type DriveSource, driveSource } from './drive-source.ts';
+import { partModel, type PartModel } from './part-model.ts';
+import type { StageInput } from './stage-input.ts';
+
+/** What does not depend on RB at one load condition: full load current and the part's figures there, 25 °C. */
+export interface LoadCondition {
+  readonly supplyV: number;
+  readonly ambientDegC: number;
+  readonly coilDegC: number;
+  readonly availableV: number;
+  readonly loadOhm: number;
+  /** Load current with VCE = 0, A. */
+  readonly fullA: number;
+  readonly gainMin: number;
+  readonly gainMax: number;
+  readonly vbeMinV: number;
+  readonly vbeMaxV: number;
+  /** Piece of the saturation line at `fullA`. */
+  readonly piece: number;
+}
+
+/** A stage made ready for its corners: tables compiled once, nothing looked up by name inside the loop. */
+export interface StageModel {
+  readonly input: StageInput;
+  readonly part: PartModel;
+  readonly corners: CornerSpace;
+  /** By supply, ambient, load and instant: bit 3, 2, 1, 0. */
+  readonly conditions: readonly LoadCondition[];
+  /** By supply and drive: bit 1, 0. */
+  readonly drives: readonly DriveSource[];
+  /** Ends of RBE, Ω; Infinity where none is fitted. */
+  readonly shuntOhm: readonly [number, number];
+  /** null for loads that are no coil, and for coils without clamp. */
+  readonly clamp: ClampVoltages | null;
+  /** Share of the time conduction loss counts. */
+  readonly conductionShare: number;
+  readonly nominal: { readonly condition: LoadCondition; readonly drive: DriveSource };
+}
+
+const ENDS = [0, 1] as const;
+
+/** Everything of a stage that its base resistor does not change. */
+export function stageModel(input: StageInput): StageModel {
+  const { shuntResistor, supplyV, ambientDegC, policy, drive } = input;
+  const part = partModel(input.transistor, policy);
+  const supplies = [supplyV.min, supplyV.max] as const;
+  const ambients = [ambientDegC.min, ambientDegC.max] as const;
+  const conditions = ENDS.flatMap((s) =>
+    ENDS.flatMap((a) =>
+      ENDS.flatMap((l) =>
+        ENDS.map((t) =>
+          loadCondition(input, part, supplies[s], ambients[a], l === 0 ? -1 : 1, t === 1),
+        ),
+      ),
+    ),
+  );
+  const drives = ENDS.flatMap((s) => [
+    driveSource(input, supplies[s], drive.railV.min, false, 1),
+    driveSource(input, supplies[s], drive.railV.max, true, -1),
+  ]);
+  const shunt = shuntResistor ?? { valueOhm: Infinity, tolerance: 0 };
+  const middleV = (supplyV.min + supplyV.max) / 2;
+  const room = Math.min(ambientDegC.max, Math.max(ambientDegC.min, 25));
+  return {
+    input,
+    part,
+    corners: cornerSpace(shuntResistor === null ? ['rbe'] : []),
+    conditions,
+    drives,
+    shuntOhm: [shunt.valueOhm * (1 - shunt.tolerance), shunt.valueOhm * (1 + shunt.tolerance)],
+    clamp: input.load.kind === 'coil' ? clampVoltages(input) : null,
+    conductionShare:
+      input.frequencyHz > 0 && input.frequencyHz >= policy.averagingHz ? input.duty : 1,
+    nominal: {
+      condition: loadCondition(input, part, middleV, room, 0, true),
+      drive: driveSource(input, middleV, (drive.railV.min + drive.railV.max) / 2, false, 0),
+    },
+  };
+}
+
+function loadCondition(
+  input: StageInput,
+  part: PartModel,
+  supplyV: number,
+  ambientDegC: number,
+  sign: number,
+  settled: boolean,
+): LoadCondition {
+  const coilDegC = loadDegC(input, ambientDegC, settled);
+  const { availableV, loadOhm } = collectorPath(input, supplyV, sign, coilDegC);
+  const fullA = Math.max(0, availableV) / loadOhm;
+  const { gain, baseEmitter, saturation } = part;
+  return {
+    supplyV,
+    ambientDegC,
+    coilDegC,
+    availableV,
+    loadOhm,
+    fullA,
+    gainMin: gain === null ? Infinity : minimumGain(gain, fullA),
+    gainMax: gain === null ? Infinity : maximumGain(gain, fullA),
+    vbeMinV: minimumVbeV(baseEmitter, fullA),
+    vbeMaxV: maximumVbeV(baseEmitter, fullA),
+    piece: saturation === null ? 0 : pieceAt(saturation, fullA),
+  };
+}
