@@ -1,0 +1,98 @@
+import { cornerNamed, cornerNumber } from '../stage/corners.ts';
+import { OperatingPoint } from '../stage/operating-point.ts';
+import type { StageInput } from '../stage/stage-input.ts';
+import { stageModel } from '../stage/stage-model.ts';
+import type { Corner, CornerFigures, Nominal } from './evaluation.ts';
+
+/** The nominal figures have no corner. */
+const NOMINAL_CORNER: Corner = {};
+
+const UNKNOWN: Nominal = {
+  icA: null,
+  ibA: null,
+  driveA: null,
+  vceV: null,
+  vbeV: null,
+  rceSatOhm: null,
+  forcedBeta: null,
+  overdriveFactor: null,
+  powerW: null,
+  tjDegC: null,
+};
+
+/** A result without figures, for stages that cannot be judged. */
+export function unknownNominal(): Nominal {
+  return { ...UNKNOWN };
+}
+
+const finite = (value: number) => (Number.isFinite(value) ? value : null);
+
+/** The figures of a point as a result states them. */
+export function nominalOf(point: OperatingPoint): Nominal {
+  const { gain, saturation, hasVbe } = point.model.part;
+  return {
+    icA: finite(point.icA),
+    ibA: finite(point.ibA),
+    driveA: finite(point.driveA),
+    vceV: saturation === null ? null : finite(point.vceV),
+    vbeV: hasVbe ? finite(point.vbeV) : null,
+    rceSatOhm: saturation === null ? null : finite(point.rceSatOhm),
+    forcedBeta: finite(point.forcedBeta),
+    overdriveFactor: gain === null ? null : finite(point.overdrive),
+    powerW: finite(point.powerW),
+    tjDegC: finite(point.tjDegC),
+  };
+}
+
+function figuresOf(point: OperatingPoint, corner: Corner): CornerFigures {
+  const { condition } = point;
+  return {
+    corner,
+    supplyV: condition.supplyV,
+    ambientDegC: condition.ambientDegC,
+    outputV: outputV(point),
+    driveA: point.driveA,
+    ibA: point.ibA,
+    shuntA: point.rbeOhm === Infinity ? 0 : point.vbeV / point.rbeOhm,
+    icA: point.icA,
+    vceV: point.vceV,
+    vbeV: point.vbeV,
+    forcedBeta: finite(point.forcedBeta),
+    overdriveFactor: finite(point.overdrive) ?? 0,
+    powerW: point.powerW,
+    tjDegC: point.tjDegC,
+    saturated: point.saturated,
+  };
+}
+
+/** Voltage at the output while on, against the logic's return: high for an NPN, low for a PNP. */
+function outputV(point: OperatingPoint): number {
+  const acrossV = point.vbeV + point.driveA * point.rbOhm;
+  return point.model.input.topology === 'high-side-pnp'
+    ? point.condition.supplyV - acrossV
+    : acrossV;
+}
+
+/**
+ * The on state at one corner, for the drawing.
+ *
+ * @param corner ends by name, as a criterion reports them; what it leaves out stands at its first end
+ */
+export function figuresAtCorner(input: StageInput, corner: Corner): CornerFigures {
+  const point = new OperatingPoint(stageModel(input));
+  const { corners } = point.model;
+  const index = cornerNumber(corners, corner);
+  point.place(index, input.baseResistor.valueOhm ?? Infinity);
+  const { ambientDegC } = point.condition;
+  if (corner['instant'] === 'settled') point.settle(ambientDegC);
+  else point.solve(ambientDegC);
+  return figuresOf(point, cornerNamed(corners, index));
+}
+
+/** The on state at the middle of every tolerance, settled. */
+export function nominalFigures(input: StageInput): CornerFigures {
+  const point = new OperatingPoint(stageModel(input));
+  point.placeNominal(input.baseResistor.valueOhm ?? Infinity);
+  point.settle(point.condition.ambientDegC);
+  return figuresOf(point, NOMINAL_CORNER);
+}

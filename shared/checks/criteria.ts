@@ -1,0 +1,76 @@
+import type { Unit } from './evaluation.ts';
+
+export type CriterionGroup = 'on-state' | 'off-state' | 'turn-off' | 'switching' | 'data';
+
+/** What a criterion is called and how it reads; the symbol is split where a part is set below the line. */
+export interface CriterionWords {
+  readonly group: CriterionGroup;
+  readonly name: string;
+  readonly symbol: { readonly main: string; readonly sub: string } | null;
+  readonly relation: '>=' | '<=';
+  readonly unit: Unit;
+}
+
+const on = (
+  name: string,
+  relation: '>=' | '<=',
+  unit: Unit,
+  symbol: [string, string] | null = null,
+) => words('on-state', name, relation, unit, symbol);
+
+function words(
+  group: CriterionGroup,
+  name: string,
+  relation: '>=' | '<=',
+  unit: Unit,
+  symbol: [string, string] | null = null,
+): CriterionWords {
+  const parts = symbol === null ? null : { main: symbol[0], sub: symbol[1] };
+  return { group, name, symbol: parts, relation, unit };
+}
+
+/** Every criterion, in the order a result lists them. */
+export const CRITERIA = {
+  'overdrive-factor': on('Overdrive factor', '>=', '1', ['ODF', '']),
+  'forced-beta': on('Forced β', '<=', '1', ['β', 'f']),
+  'load-voltage': on('Coil voltage', '>=', 'V', ['V', 'coil']),
+  'saturation-voltage': on('VCE(sat)', '<=', 'V', ['V', 'CE(sat)']),
+  'drive-current': on('Drive current', '<=', 'A', ['I', 'R']),
+  'collector-current': on('Collector current', '<=', 'A', ['I', 'C']),
+  'junction-temperature': on('Junction temperature', '<=', '°C', ['T', 'J']),
+  dissipation: on('Dissipation', '<=', 'W', ['P', '']),
+  'base-current': on('Base current', '<=', 'A', ['I', 'B']),
+  'peak-current': on('Peak current', '<=', 'A', ['I', 'CM']),
+  'load-overvoltage': on('Coil overvoltage', '<=', 'V', ['V', 'coil']),
+  'holding-voltage': on('Holding voltage', '>=', 'V', ['V', 'hold']),
+  'rb-dissipation': on('RB dissipation', '<=', 'W', ['P', 'RB']),
+  'rbe-dissipation': on('RBE dissipation', '<=', 'W', ['P', 'RBE']),
+  'pull-up-dissipation': on('Pull-up dissipation', '<=', 'W', ['P', 'pull-up']),
+  'off-base-voltage': words('off-state', 'Off-state VBE', '<=', 'V', ['V', 'BE(off)']),
+  'off-collector-current': words('off-state', 'Off-state current', '<=', 'A', ['I', 'C(off)']),
+  'off-collector-voltage': words('off-state', 'Off-state VCE', '<=', 'V', ['V', 'CE(off)']),
+  'reset-off': words('off-state', 'VBE in reset', '<=', 'V', ['V', 'BE(reset)']),
+  'reset-off-current': words('off-state', 'Current in reset', '<=', 'A', ['I', 'C(reset)']),
+  'reverse-base-voltage': words('off-state', 'Reverse VBE', '<=', 'V', ['V', 'EB']),
+  'drive-maximum': words('off-state', 'Voltage at the output', '>=', 'V', ['V', 'O(max)']),
+  'peak-collector-voltage': words('turn-off', 'Peak VCE', '<=', 'V', ['V', 'CE(peak)']),
+  'surge-voltage': words('turn-off', 'VCE in a surge', '<=', 'V', ['V', 'CE(surge)']),
+  'release-time': words('turn-off', 'Release time', '<=', 's', ['t', 'rel']),
+  'clamp-current': words('turn-off', 'Clamp current', '<=', 'A', ['I', 'clamp']),
+  'clamp-power': words('turn-off', 'Clamp power', '<=', 'W', ['P', 'clamp']),
+  'storage-time': words('switching', 'Storage and fall time', '<=', 's', ['t', 's']),
+  'tested-range': words('data', 'Figures beyond tested rows', '<=', '1'),
+} as const satisfies Record<string, CriterionWords>;
+export type CriterionId = keyof typeof CRITERIA;
+
+const IDS = Object.keys(CRITERIA) as CriterionId[];
+
+/** All criterion ids in the order of the table. */
+export function criterionIds(): readonly CriterionId[] {
+  return IDS;
+}
+
+/** Place of a criterion in the table: what the corner loop knows it by. */
+export function criterionNumber(id: CriterionId): number {
+  return IDS.indexOf(id);
+}

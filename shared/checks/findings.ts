@@ -1,0 +1,159 @@
+import { isHighSide } from '../stage/drive-source.ts';
+import type { StageModel } from '../stage/stage-model.ts';
+import type { Criterion, Finding } from './evaluation.ts';
+import type { CornerTraits } from './stage-judge.ts';
+
+/** A finding, and whether the stage fails by it alone. */
+export interface Remark {
+  readonly finding: Finding;
+  readonly fails: boolean;
+}
+
+const note = (id: string, text: string): Remark => ({ finding: { id, text }, fails: false });
+const defect = (id: string, text: string): Remark => ({ finding: { id, text }, fails: true });
+
+/** Everything a designer should hear besides the criteria. */
+export function remarksOn(
+  model: StageModel,
+  traits: CornerTraits,
+  criteria: readonly Criterion[],
+): Remark[] {
+  return [
+    ...onDrive(model, traits),
+    ...onPartData(model, traits),
+    ...onOffState(model, criteria),
+    ...onClamp(model),
+  ];
+}
+
+function onDrive({ input }: StageModel, traits: CornerTraits): Remark[] {
+  const remarks: Remark[] = [];
+  const { policy } = input;
+  if (traits.runaway) {
+    remarks.push(
+      defect(
+        'thermal-runaway',
+        'No junction temperature below 400 °C balances the dissipation at some corner: lower the thermal resistance or the loss.',
+      ),
+    );
+  }
+  const lavish = policy.overdrivenRatio * policy.overdriveFactor;
+  if (traits.leastOverdrive > lavish) {
+    remarks.push(
+      note(
+        'overdriven',
+        `The least overdrive factor is above ${lavish}: a larger base resistor saves drive current and storage time.`,
+      ),
+    );
+  }
+  return remarks;
+}
+
+function onPartData({ input, part }: StageModel, traits: CornerTraits): Remark[] {
+  const remarks: Remark[] = [];
+  if (traits.beyondRows.length > 0) {
+    remarks.push(
+      note(
+        'outside-tested-range',
+        `Used above the last row the data sheet tests: ${traits.beyondRows.join(', ')}. Those figures are extrapolated.`,
+      ),
+    );
+  }
+  if (traits.beyondTestBeta) {
+    remarks.push(
+      note(
+        'forced-beta-beyond-the-data-sheet',
+        'IC/IB is above that of the VCE(sat) rows at some corner: VCE(sat) is corrected by the Ebers–Moll difference and not guaranteed. A smaller base resistor brings it back.',
+      ),
+    );
+  }
+  if (part.hasVbe && !part.baseEmitter.guaranteed) {
+    remarks.push(
+      note(
+        'vbe-sat-not-guaranteed',
+        `The data of ${input.transistor.partNumber} give no VBE(sat) maximum: VBE(on) or typical figures stand in, with an allowance.`,
+      ),
+    );
+  }
+  return remarks;
+}
+
+function onOffState(model: StageModel, criteria: readonly Criterion[]): Remark[] {
+  const { input } = model;
+  const remarks: Remark[] = [];
+  if (input.shuntResistor === null) {
+    remarks.push(
+      note(
+        'no-base-emitter-resistor',
+        'No resistor from base to emitter: nothing holds the base off while the output floats, and leakage comes out amplified.',
+      ),
+    );
+  }
+  const base = criteria.find(({ id }) => id === 'off-base-voltage');
+  if (base?.status === 'fail' && railTooLow(model)) remarks.push(cannotTurnOff(model));
+  return remarks;
+}
+
+/** Whether a push-pull output below the supply is what keeps a PNP on. */
+function railTooLow({ input }: StageModel): boolean {
+  const { drive, supplyV } = input;
+  const lower = !drive.railTracksSupply && drive.railV.min < supplyV.max;
+  return isHighSide(input) && drive.kind === 'push-pull' && lower;
+}
+
+function cannotTurnOff({ input, nominal }: StageModel): Remark {
+  const { drive, supplyV, baseResistor } = input;
+  const diodeV = 0.5;
+  const throughV = supplyV.max - nominal.condition.vbeMaxV - drive.railV.min - diodeV;
+  const clampA = Math.max(0, throughV) / (baseResistor.valueOhm ?? Infinity);
+  return note(
+    'rail-below-supply',
+    `The output's high level stays below the supply, so the PNP does not turn off. Up to ${(clampA * 1e3).toPrecision(3)} mA flow through the output's clamp diode, and the load switches on while the rail is down. Put an NPN in front, or an open-drain output rated for the supply.`,
+  );
+}
+
+function onClamp(model: StageModel): Remark[] {
+  const { input, clamp } = model;
+  if (input.load.kind !== 'coil') return [];
+  if (clamp === null) {
+    return [
+      defect(
+        'no-clamp',
+        'The coil has no clamp: its stored energy breaks the transistor down at turn-off. Fit a diode across the coil.',
+      ),
+    ];
+  }
+  if (clamp.standOffV !== null) {
+    return clamp.standOffV > input.supplyV.max
+      ? []
+      : [
+          defect(
+            'clamp-conducts-at-supply',
+            'The clamp across the transistor conducts at the highest supply: the load never switches off. Choose a higher voltage.',
+          ),
+        ];
+  }
+  return onDiode(input.clamp.reverseV, input.supplyV.max);
+}
+
+const REVERSE_FACTOR = 2;
+
+function onDiode(reverseV: number | null, supplyV: number): Remark[] {
+  const neededV = REVERSE_FACTOR * supplyV;
+  if (reverseV === null) {
+    return [
+      note(
+        'diode-reverse-voltage-unknown',
+        `The clamp diode's reverse rating is not stated: it should be at least twice the highest supply, ${neededV.toPrecision(3)} V.`,
+      ),
+    ];
+  }
+  return reverseV >= neededV
+    ? []
+    : [
+        defect(
+          'diode-reverse-voltage',
+          `The clamp diode's reverse rating of ${reverseV} V is below twice the highest supply, ${neededV.toPrecision(3)} V.`,
+        ),
+      ];
+}

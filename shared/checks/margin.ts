@@ -1,0 +1,58 @@
+import type { CriterionStatus, Unit, Verdict } from './evaluation.ts';
+
+/** Limits nearer to zero than this are counted as this much when a margin is formed. */
+const LEAST_LIMIT: Record<Unit, number> = {
+  '1': 0,
+  V: 0.05,
+  A: 10e-6,
+  W: 1e-3,
+  '°C': 1,
+  s: 1e-6,
+  Ohm: 0,
+};
+
+export function leastLimit(unit: Unit): number {
+  return LEAST_LIMIT[unit];
+}
+
+/**
+ * Distance of a figure to its limit as a fraction of the limit, positive when met.
+ *
+ * @param least smallest magnitude the limit counts with
+ * @returns −1 for a ≤ limit that is not positive; −Infinity for an infinite figure
+ */
+export function marginOf(
+  relation: '>=' | '<=',
+  value: number,
+  limit: number,
+  least: number,
+): number {
+  const size = Math.max(Math.abs(limit), least);
+  if (relation === '<=') return limit > 0 ? (limit - value) / size : -1;
+  if (size === 0) return value >= limit ? Infinity : -1;
+  return (value - limit) / size;
+}
+
+/** Status of a margin: at least the policy's band is a pass, met at all is marginal. */
+export function statusOf(
+  margin: number,
+  band: number,
+): Exclude<CriterionStatus, 'open' | 'stated'> {
+  if (margin >= band) return 'pass';
+  return margin >= 0 ? 'marginal' : 'fail';
+}
+
+const SEVERITY = ['pass', 'marginal', 'open', 'fail'] as const satisfies readonly Verdict[];
+
+/** The worst of several statuses; `stated` does not count, and nothing at all is a pass. */
+export function verdictOf(statuses: readonly CriterionStatus[]): Verdict {
+  return statuses.reduce<Verdict>(
+    (worst, status) => (status === 'stated' ? worst : worseOf(worst, status)),
+    'pass',
+  );
+}
+
+/** fail > open > marginal > pass. */
+export function worseOf(a: Verdict, b: Verdict): Verdict {
+  return SEVERITY.indexOf(a) >= SEVERITY.indexOf(b) ? a : b;
+}

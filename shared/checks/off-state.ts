@@ -1,0 +1,78 @@
+import { SHEET_DEG_C } from '../physics/constants.ts';
+import { isHighSide } from '../stage/drive-source.ts';
+import { OffState } from '../stage/off-state.ts';
+import type { OperatingPoint } from '../stage/operating-point.ts';
+import type { StageModel } from '../stage/stage-model.ts';
+import { criterionNumber } from './criteria.ts';
+import type { WorstCases } from './worst-cases.ts';
+
+const BASE = criterionNumber('off-base-voltage');
+const CURRENT = criterionNumber('off-collector-current');
+const VOLTAGE = criterionNumber('off-collector-voltage');
+const RESET = criterionNumber('reset-off');
+const RESET_CURRENT = criterionNumber('reset-off-current');
+const REVERSE = criterionNumber('reverse-base-voltage');
+const DRIVE_MAXIMUM = criterionNumber('drive-maximum');
+
+/** Share of the release current a switched-off coil may still carry. */
+const RELEASE_SHARE = 0.1;
+
+/** Share of the load current a switched-off resistor or lamp may still carry. */
+const LOAD_SHARE = 0.001;
+
+/** The criteria of the off state; `visit` takes in a settled corner at the highest supply. */
+export class OffStateChecks {
+  private readonly model: StageModel;
+  private readonly worst: WorstCases;
+  private readonly off: OffState;
+  private readonly drivesOpenDrain: boolean;
+  private readonly coilLimitA: number;
+
+  constructor(model: StageModel, worst: WorstCases) {
+    this.model = model;
+    this.worst = worst;
+    this.off = new OffState(model);
+    const { drive, load } = model.input;
+    this.drivesOpenDrain = isHighSide(model.input) && drive.kind === 'open-collector';
+    this.coilLimitA =
+      load.kind === 'coil' && load.releaseV !== null
+        ? (RELEASE_SHARE * load.releaseV) / load.resistanceOhm
+        : NaN;
+    if (this.off.resetOpen) worst.measureIn('reset-off', 'A');
+  }
+
+  /** Whether nothing but leakage reaches the base while off. */
+  get baseOpen(): boolean {
+    return this.off.baseOpen;
+  }
+
+  visit(point: OperatingPoint, corner: number): void {
+    const { worst, off } = this;
+    const { policy, transistor, drive } = this.model.input;
+    off.solve(point);
+    const vbeLimitV =
+      policy.offBaseV + this.model.part.vbeTempcoVPerK * (point.tjDegC - SHEET_DEG_C);
+    const currentLimitA = this.currentLimitA(point);
+    if (!off.baseOpen) worst.note(BASE, off.vbeV, vbeLimitV, corner);
+    worst.note(CURRENT, off.collectorA, currentLimitA, corner);
+    const { vceoV } = transistor.limits;
+    const vceLimitV = vceoV === null ? NaN : vceoV * policy.voltageDerating;
+    worst.note(VOLTAGE, point.condition.supplyV, vceLimitV, corner);
+    worst.note(REVERSE, off.reverseV, transistor.limits.veboV ?? NaN, corner);
+    if (this.drivesOpenDrain) {
+      worst.note(DRIVE_MAXIMUM, drive.maximumV ?? NaN, point.condition.supplyV, corner);
+    }
+    if (drive.reset !== null && !isHighSide(this.model.input)) {
+      if (off.resetOpen) worst.note(RESET, off.resetCollectorA, currentLimitA, corner);
+      else {
+        worst.note(RESET, off.resetVbeV, vbeLimitV, corner);
+        worst.note(RESET_CURRENT, off.resetCollectorA, currentLimitA, corner);
+      }
+    }
+  }
+
+  private currentLimitA(point: OperatingPoint): number {
+    if (this.model.input.load.kind === 'coil') return this.coilLimitA;
+    return Math.max(this.model.input.policy.offCurrentA, LOAD_SHARE * point.icA);
+  }
+}

@@ -1,0 +1,133 @@
+import { copperRatio } from '../physics/coil.ts';
+import { powerShare, resistorShare } from '../physics/thermal.ts';
+import { isHighSide } from '../stage/drive-source.ts';
+import type { OperatingPoint } from '../stage/operating-point.ts';
+import type { StageModel } from '../stage/stage-model.ts';
+import { criterionNumber } from './criteria.ts';
+import type { WorstCases } from './worst-cases.ts';
+
+const OVERDRIVE = criterionNumber('overdrive-factor');
+const FORCED_BETA = criterionNumber('forced-beta');
+const SATURATION = criterionNumber('saturation-voltage');
+const LOAD = criterionNumber('load-voltage');
+const OVERVOLTAGE = criterionNumber('load-overvoltage');
+const COLLECTOR = criterionNumber('collector-current');
+const PEAK = criterionNumber('peak-current');
+const BASE = criterionNumber('base-current');
+const DRIVE = criterionNumber('drive-current');
+const POWER = criterionNumber('dissipation');
+const JUNCTION = criterionNumber('junction-temperature');
+const RB_POWER = criterionNumber('rb-dissipation');
+const RBE_POWER = criterionNumber('rbe-dissipation');
+const PULL_UP_POWER = criterionNumber('pull-up-dissipation');
+
+/** A limit times its derating; NaN where none is printed. */
+const derated = (limit: number | null, derating: number) =>
+  limit === null ? NaN : limit * derating;
+
+/** The criteria of the on state; limits are worked out once, `visit` takes in one corner. */
+export class OnStateChecks {
+  private readonly model: StageModel;
+  private readonly worst: WorstCases;
+  private readonly collectorLimitA: number;
+  private readonly peakLimitA: number;
+  private readonly baseLimitA: number;
+  private readonly driveLimitA: number;
+  private readonly powerLimitW: number;
+  private readonly junctionLimitDegC: number;
+  private readonly rbLimitW: number;
+  private readonly rbeLimitW: number;
+  private readonly pullUpLimitW: number;
+  private readonly pullUpOhm: number;
+  private readonly pullUpFeedsBase: boolean;
+
+  constructor(model: StageModel, worst: WorstCases) {
+    this.model = model;
+    this.worst = worst;
+    const { policy, transistor, drive, baseResistor, shuntResistor } = model.input;
+    const { limits } = transistor;
+    const openCollector = drive.kind === 'open-collector';
+    this.pullUpFeedsBase = openCollector && !isHighSide(model.input);
+    this.collectorLimitA = derated(limits.icA, policy.currentDerating);
+    this.peakLimitA = derated(limits.icPeakA ?? limits.icA, policy.currentDerating);
+    this.baseLimitA = derated(limits.ibA, policy.currentDerating);
+    const pinLimitA =
+      isHighSide(model.input) || openCollector ? drive.sinkLimitA : drive.sourceLimitA;
+    this.driveLimitA = derated(pinLimitA, policy.driveDerating);
+    this.powerLimitW = derated(limits.powerW, policy.powerDerating);
+    this.junctionLimitDegC = limits.tjMaxDegC * policy.junctionDerating;
+    this.rbLimitW = derated(baseResistor.ratingW, policy.resistorDerating);
+    this.rbeLimitW = derated(shuntResistor?.ratingW ?? null, policy.resistorDerating);
+    this.pullUpLimitW = derated(drive.pullUp?.ratingW ?? null, policy.resistorDerating);
+    this.pullUpOhm = openCollector ? drive.pullUp.valueOhm * (1 - drive.pullUp.tolerance) : NaN;
+  }
+
+  visit(point: OperatingPoint, corner: number): void {
+    const { policy, transistor } = this.model.input;
+    const { worst } = this;
+    const { ambientDegC } = point.condition;
+    worst.note(OVERDRIVE, point.overdrive, policy.overdriveFactor, corner);
+    worst.note(FORCED_BETA, point.forcedBeta, this.forcedBetaLimit(point), corner);
+    worst.note(SATURATION, point.vceV, this.model.input.saturationLimitV ?? NaN, corner);
+    worst.note(COLLECTOR, point.icA, this.collectorLimitA, corner);
+    worst.note(PEAK, point.icA, this.peakLimitA, corner);
+    worst.note(BASE, point.ibA, this.baseLimitA, corner);
+    const share = powerShare(ambientDegC, transistor.limits.tjMaxDegC);
+    worst.note(POWER, point.powerW, this.powerLimitW * share, corner);
+    worst.note(JUNCTION, point.tjDegC, this.junctionLimitDegC, corner);
+    this.visitResistors(point, corner);
+    if (this.model.input.load.kind === 'coil') this.visitCoil(point, corner);
+  }
+
+  private forcedBetaLimit(point: OperatingPoint): number {
+    const { policy } = this.model.input;
+    const { saturation } = this.model.part;
+    if (!policy.guaranteedOnly || saturation === null) return policy.forcedBeta;
+    return Math.min(policy.forcedBeta, saturation.testBeta[point.piece] ?? Infinity);
+  }
+
+  private visitResistors(point: OperatingPoint, corner: number): void {
+    const { worst } = this;
+    const { drive, shuntResistor } = this.model.input;
+    const share = resistorShare(point.condition.ambientDegC);
+    const railV = drive.railTracksSupply ? point.condition.supplyV : drive.railV.max;
+    const driveA = this.pullUpFeedsBase ? railV / this.pullUpOhm : point.driveA;
+    worst.note(DRIVE, driveA, this.driveLimitA, corner);
+    worst.note(RB_POWER, point.driveA * point.driveA * point.rbOhm, this.rbLimitW * share, corner);
+    if (shuntResistor !== null) {
+      const powerW = (point.vbeV * point.vbeV) / point.rbeOhm;
+      worst.note(RBE_POWER, powerW, this.rbeLimitW * share, corner);
+    }
+    if (drive.kind === 'open-collector') {
+      const powerW = (railV * railV) / this.pullUpOhm;
+      worst.note(PULL_UP_POWER, powerW, this.pullUpLimitW * share, corner);
+    }
+  }
+
+  private visitCoil(point: OperatingPoint, corner: number): void {
+    const { load, frequencyHz, duty } = this.model.input;
+    if (load.kind !== 'coil') return;
+    const { supplyV, ambientDegC, coilDegC } = point.condition;
+    const coilV = point.condition.availableV - point.vceV;
+    if (frequencyHz > 0) this.worst.note(LOAD, duty * supplyV, load.holdV ?? NaN, corner);
+    else {
+      const operateDegC = load.operateReferenceDegC ?? load.referenceDegC;
+      const rise = Math.max(1, copperRatio(coilDegC, operateDegC));
+      this.worst.note(LOAD, coilV, (load.operateV ?? NaN) * rise, corner);
+    }
+    this.worst.note(OVERVOLTAGE, coilV, this.overvoltageLimitV(ambientDegC), corner);
+  }
+
+  /** What the coil may carry at an ambient: less where there is less room to its own limit. */
+  private overvoltageLimitV(ambientDegC: number): number {
+    const { load } = this.model.input;
+    if (load.kind !== 'coil' || load.maximumV === null) return NaN;
+    if (load.coilMaxDegC === null) return load.maximumV;
+    const room = load.coilMaxDegC - ambientDegC;
+    const referenceRoom = load.coilMaxDegC - (load.maximumReferenceDegC ?? load.referenceDegC);
+    if (room <= 0) return 0;
+    return referenceRoom <= 0
+      ? load.maximumV
+      : load.maximumV * Math.min(1, Math.sqrt(room / referenceRoom));
+  }
+}

@@ -1,0 +1,148 @@
+import { cornerNumber } from '../stage/corners.ts';
+import { OperatingPoint } from '../stage/operating-point.ts';
+import type { StageInput } from '../stage/stage-input.ts';
+import { type StageModel, stageModel } from '../stage/stage-model.ts';
+import type { Criterion } from './evaluation.ts';
+import { OffStateChecks } from './off-state.ts';
+import { OnStateChecks } from './on-state.ts';
+import { standOffState, standOnData } from './standings.ts';
+import { SwitchingChecks } from './switching.ts';
+import { TestedRange } from './tested-range.ts';
+import { TurnOffChecks } from './turn-off.ts';
+import { WorstCases } from './worst-cases.ts';
+
+/** Criteria that a few corners can already refute a base resistor by. */
+const PROBED = [
+  'overdrive-factor',
+  'forced-beta',
+  'drive-current',
+  'base-current',
+  'rb-dissipation',
+] as const;
+
+/** The hardest corners of least drive, most drive, and most current from a weak pin. */
+const PROBE_CORNERS = [
+  { drive: 'weak', rb: '+', rbe: '-', gain: 'min', vbe: 'max' },
+  { drive: 'strong', rb: '-', rbe: '+', gain: 'min', vbe: 'min' },
+  { drive: 'weak', rb: '-', rbe: '+', gain: 'min', vbe: 'min' },
+];
+
+/** What a run over the corners found besides the criteria. */
+export interface CornerTraits {
+  /** Quantities used above their last tested row. */
+  readonly beyondRows: readonly string[];
+  /** Whether a saturated corner is driven less than any data-sheet row. */
+  readonly beyondTestBeta: boolean;
+  readonly runaway: boolean;
+  readonly leastOverdrive: number;
+}
+
+/**
+ * Judges a stage at all corners for one base resistor after another. Everything RB does not change is worked
+ * out once, so a sizing run costs little more than its corners.
+ */
+export class StageJudge {
+  readonly model: StageModel;
+  readonly point: OperatingPoint;
+  private readonly worst = new WorstCases();
+  private readonly on: OnStateChecks;
+  private readonly off: OffStateChecks;
+  private readonly turnOff: TurnOffChecks;
+  private readonly switching: SwitchingChecks;
+  private readonly tested: TestedRange;
+  private readonly probes: readonly number[];
+  private beyondTestBeta = false;
+  private runaway = false;
+
+  constructor(input: StageInput) {
+    this.model = stageModel(input);
+    this.point = new OperatingPoint(this.model);
+    this.on = new OnStateChecks(this.model, this.worst);
+    this.off = new OffStateChecks(this.model, this.worst);
+    this.turnOff = new TurnOffChecks(this.model, this.worst);
+    this.switching = new SwitchingChecks(this.model, this.worst);
+    this.tested = new TestedRange(this.model);
+    this.probes = PROBE_CORNERS.flatMap((ends) =>
+      ['min', 'max'].flatMap((supply) =>
+        ['min', 'max'].flatMap((ambient) =>
+          ['-', '+'].map((load) =>
+            cornerNumber(this.model.corners, { ...ends, supply, ambient, load }),
+          ),
+        ),
+      ),
+    );
+  }
+
+  /** Every criterion of the stage with a base resistor of `rbOhm`, worst over all corners. */
+  criteria(rbOhm: number): Criterion[] {
+    this.run(rbOhm);
+    standOnData(this.model, this.worst, this.switching.known);
+    standOffState(this.model, this.worst, this.off.baseOpen);
+    const { corners, input } = this.model;
+    return [...this.worst.criteria(corners, input.policy.marginalBand), this.tested.criterion()];
+  }
+
+  /** What the last run found. */
+  traits(): CornerTraits {
+    return {
+      beyondRows: this.tested.exceeded(),
+      beyondTestBeta: this.beyondTestBeta,
+      runaway: this.runaway,
+      leastOverdrive: this.worst.worst('overdrive-factor'),
+    };
+  }
+
+  /**
+   * Smallest margin of what RB decides by nature, at a few cold-start corners: below 0 the value cannot pass,
+   * whatever the other corners say. Proves nothing where it is not.
+   */
+  probeMargin(rbOhm: number): number {
+    const { point, worst } = this;
+    worst.reset();
+    let beyondPin = false;
+    for (const corner of this.probes) {
+      point.place(corner, rbOhm);
+      point.solve(point.condition.ambientDegC);
+      this.on.visit(point, corner);
+      beyondPin ||= point.beyondPin;
+    }
+    const margin = Math.min(...PROBED.map((id) => worst.key(id)));
+    return beyondPin ? Math.min(margin, -Number.MIN_VALUE) : margin;
+  }
+
+  /** Settled junctions start from the dissipation of the same corner before it warmed up. */
+  private run(rbOhm: number): void {
+    const { point, model } = this;
+    const { count, shift } = model.corners;
+    const rth = model.part.rthJaKPerW ?? 0;
+    this.worst.reset();
+    this.turnOff.begin();
+    this.tested.begin();
+    this.beyondTestBeta = false;
+    this.runaway = false;
+    const switches = model.input.frequencyHz > 0;
+    for (let corner = 0; corner < count; corner++) {
+      const settled = ((corner >> shift.instant) & 1) === 1;
+      const startW = point.powerW;
+      point.place(corner, rbOhm);
+      const { ambientDegC } = point.condition;
+      if (settled) point.settle(ambientDegC + rth * startW);
+      else point.solve(ambientDegC);
+      this.on.visit(point, corner);
+      this.turnOff.visit(point, corner);
+      this.tested.visit(point);
+      if (switches) this.switching.visit(point, corner);
+      if (settled && ((corner >> shift.supply) & 1) === 1) this.off.visit(point, corner);
+      this.notice(point);
+    }
+  }
+
+  private notice(point: OperatingPoint): void {
+    const { saturation } = this.model.part;
+    if (point.runaway) this.runaway = true;
+    if (saturation === null || !point.saturated) return;
+    if (point.forcedBeta > (saturation.testBeta[point.piece] ?? Infinity)) {
+      this.beyondTestBeta = true;
+    }
+  }
+}

@@ -1,0 +1,114 @@
+import type { CoilLoad } from '../stage/load.ts';
+import type { StageInput } from '../stage/stage-input.ts';
+import type { StageModel } from '../stage/stage-model.ts';
+import type { WorstCases } from './worst-cases.ts';
+
+/** Says of each criterion what missing or substituted data leaves of its status. */
+export function standOnData(model: StageModel, worst: WorstCases, switchingKnown: boolean): void {
+  standOnPart(model, worst);
+  standOnRatings(model.input, worst);
+  if (model.input.load.kind === 'coil') standOnCoil(model.input, worst);
+  if (model.input.frequencyHz > 0) standOnSwitching(model.input, worst, switchingKnown);
+}
+
+function standOnPart({ part, input }: StageModel, worst: WorstCases): void {
+  if (!part.baseEmitter.guaranteed) {
+    worst.stand('overdrive-factor', 'at-best-marginal');
+    worst.stand('forced-beta', 'at-best-marginal');
+  }
+  if (part.gain === null) worst.stand('overdrive-factor', 'unknown');
+  if (part.saturation === null) {
+    worst.stand('forced-beta', 'at-best-open');
+    worst.stand('saturation-voltage', 'unknown');
+    worst.stand('dissipation', 'unknown');
+    worst.stand('junction-temperature', 'unknown');
+    if (input.load.kind === 'coil') worst.stand('load-voltage', 'unknown');
+  }
+  if (!part.hasVbe) {
+    worst.stand('overdrive-factor', 'unknown');
+    worst.stand('forced-beta', 'unknown');
+  }
+  if (part.rthJaKPerW === null) worst.stand('junction-temperature', 'unknown');
+}
+
+function standOnRatings(input: StageInput, worst: WorstCases): void {
+  const { limits } = input.transistor;
+  const { baseResistor, shuntResistor, drive } = input;
+  if (limits.icA === null) {
+    worst.stand('collector-current', 'at-best-open');
+    if (limits.icPeakA === null) worst.stand('peak-current', 'at-best-open');
+  }
+  if (limits.vceoV === null) {
+    worst.stand('off-collector-voltage', 'at-best-open');
+    if (input.supplyV.surge !== null) worst.stand('surge-voltage', 'at-best-open');
+  }
+  if (limits.powerW === null) worst.stand('dissipation', 'at-best-open');
+  if (baseResistor.ratingW === null) worst.stand('rb-dissipation', 'at-best-open');
+  if (shuntResistor !== null && shuntResistor.ratingW === null) {
+    worst.stand('rbe-dissipation', 'at-best-open');
+  }
+  if (drive.kind === 'open-collector' && drive.pullUp.ratingW === null) {
+    worst.stand('pull-up-dissipation', 'at-best-open');
+  }
+}
+
+/** What the off state needs to know of part, coil and reset. */
+export function standOffState(model: StageModel, worst: WorstCases, baseOpen: boolean): void {
+  const { part, input } = model;
+  const { load } = input;
+  const currentUnknown =
+    part.leakage === null || (baseOpen ? part.gain === null : part.anchor === null);
+  if (part.leakage === null && !baseOpen) worst.stand('off-base-voltage', 'unknown');
+  if (currentUnknown) worst.stand('off-collector-current', 'unknown');
+  else if (load.kind === 'coil' && load.releaseV === null) {
+    worst.stand('off-collector-current', 'at-best-open');
+  }
+  standReset(model, worst, currentUnknown);
+}
+
+function standReset({ part, input }: StageModel, worst: WorstCases, currentUnknown: boolean): void {
+  const { reset } = input.drive;
+  const pinUnknown = reset?.kind === 'pull-up' && reset.pullUpOhm === null;
+  if (worst.takesPart('reset-off') && (part.leakage === null || pinUnknown)) {
+    worst.stand('reset-off', 'unknown');
+  }
+  if (worst.takesPart('reset-off-current') && (currentUnknown || pinUnknown)) {
+    worst.stand('reset-off-current', 'unknown');
+  }
+}
+
+function standOnCoil(input: StageInput, worst: WorstCases): void {
+  const { load, frequencyHz, ambientDegC, transistor } = input;
+  if (load.kind !== 'coil') return;
+  if (frequencyHz === 0 && load.operateV === null && worst.standing('load-voltage') === 'judged') {
+    worst.stand('load-voltage', 'at-best-open');
+  }
+  if (transistor.limits.vceoV === null) worst.stand('peak-collector-voltage', 'at-best-open');
+  const ratedDegC = load.maximumReferenceDegC ?? load.referenceDegC;
+  if (load.maximumV !== null && load.coilMaxDegC === null && ambientDegC.max > ratedDegC) {
+    worst.stand('load-overvoltage', 'at-best-marginal');
+  }
+  standOnRelease(input, load, worst);
+}
+
+function standOnRelease({ clamp }: StageInput, load: CoilLoad, worst: WorstCases): void {
+  const timed = clamp.kind !== 'none' && load.inductanceH !== null && load.releaseV !== null;
+  if (clamp.kind !== 'none' && clamp.currentRatingA === null) {
+    worst.stand('clamp-current', 'at-best-open');
+  }
+  if (!timed) worst.stand('release-time', load.releaseTimeLimitSec === null ? 'stated' : 'unknown');
+}
+
+function standOnSwitching(input: StageInput, worst: WorstCases, known: boolean): void {
+  const { transistor, load, clamp } = input;
+  if (!known) worst.stand('storage-time', 'unknown');
+  if (transistor.switching?.trSec == null || transistor.switching.tfSec === null) {
+    for (const id of ['dissipation', 'junction-temperature'] as const) {
+      if (worst.standing(id) === 'judged') worst.stand(id, 'at-best-open');
+    }
+  }
+  if (load.kind === 'coil' && clamp.kind !== 'none') {
+    if (load.inductanceH === null) worst.stand('clamp-power', 'unknown');
+    else if (clamp.powerRatingW === null) worst.stand('clamp-power', 'at-best-open');
+  }
+}
