@@ -1,0 +1,9 @@
+import { loadBundled } from './bundle-engine.mjs';
+
+try {
+  const { check } = await loadBundled('server/cli/check.ts');
+  process.exitCode = await check(process.argv.slice(2));
+} catch (error) {
+  process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
+  process.exitCode = 2;
+}

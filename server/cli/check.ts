@@ -1,0 +1,81 @@
+import { readFile } from 'node:fs/promises';
+import { text } from 'node:stream/consumers';
+import { judgeStage } from '../../shared/sizing/judge-stage.ts';
+import { stageResult } from '../../shared/sizing/result.ts';
+import { StageInput } from '../../shared/stage/stage-input.ts';
+import { stageIssues } from '../../shared/stage/stage-issues.ts';
+
+const USAGE = 'Usage: npm run --silent check -- FILE [FILE …]   (- reads standard input)';
+
+/** Exit codes: every stage pass or marginal · one failing or open · one file that cannot be read. */
+const MET = 0;
+const NOT_MET = 1;
+const UNREADABLE = 2;
+
+/** A file that is no stage file; the message is what standard error says. */
+class Unreadable extends Error {}
+
+/**
+ * Judges stage files: one `sinkwell-result/1` per file and line on standard output, errors on standard error.
+ *
+ * @param args file names; `-` is standard input
+ * @returns the exit code
+ */
+export async function check(args: readonly string[]): Promise<number> {
+  const option = args.find((arg) => arg.startsWith('-') && arg !== '-');
+  if (option !== undefined) return refuse(optionRefusal(option));
+  if (args.length === 0) return refuse(`Name at least one stage file.\n${USAGE}`);
+  let code = MET;
+  for (const file of args) code = Math.max(code, await checkFile(file));
+  return code;
+}
+
+function optionRefusal(option: string): string {
+  return /^--(samples|seed)\b/.test(option)
+    ? `${option}: Monte-Carlo statistics are not available in this version.`
+    : `${option}: unknown option.\n${USAGE}`;
+}
+
+function refuse(reason: string): number {
+  process.stderr.write(`${reason}\n`);
+  return UNREADABLE;
+}
+
+async function checkFile(file: string): Promise<number> {
+  try {
+    const judged = judgeStage(await readStage(file));
+    process.stdout.write(`${JSON.stringify(stageResult(judged))}\n`);
+    const { verdict } = judged.evaluation;
+    return verdict === 'pass' || verdict === 'marginal' ? MET : NOT_MET;
+  } catch (error) {
+    if (error instanceof Unreadable) return refuse(error.message);
+    throw error;
+  }
+}
+
+async function readStage(file: string): Promise<StageInput> {
+  const parsed = StageInput.safeParse(parseJson(file, await readText(file)));
+  if (parsed.success) return parsed.data;
+  const lines = stageIssues(parsed.error).map(
+    ({ path, expected }) => `${file}: ${path}: ${expected}`,
+  );
+  throw new Unreadable(lines.join('\n'));
+}
+
+async function readText(file: string): Promise<string> {
+  try {
+    return file === '-' ? await text(process.stdin) : await readFile(file, 'utf8');
+  } catch (error) {
+    const code = error instanceof Error && 'code' in error ? String(error.code) : String(error);
+    throw new Unreadable(`${file}: $: expected a readable file (${code})`);
+  }
+}
+
+function parseJson(file: string, content: string): unknown {
+  try {
+    return JSON.parse(content.replace(/^\uFEFF/, ''));
+  } catch (error) {
+    const reason = error instanceof Error ? error.message : String(error);
+    throw new Unreadable(`${file}: $: expected a JSON document (${reason})`);
+  }
+}
