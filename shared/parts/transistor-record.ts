@@ -2,7 +2,7 @@ import * as z from 'zod';
 import { optional } from '../stage/ranges.ts';
 import { InputFigures } from './input-rows.ts';
 import { partHead } from './provenance.ts';
-import { LimitSet } from './transistor-limits.ts';
+import { LimitSet, limitSetName } from './transistor-limits.ts';
 import {
   BaseEmitterFigure,
   ClampDiode,
@@ -57,6 +57,16 @@ export const TransistorRecord = z
         input: null,
       });
     }
+    const names = [record.limits, ...record.alternatives].map(limitSetName);
+    record.alternatives.forEach((set, index) => {
+      if (names.indexOf(limitSetName(set)) === index + 1) return;
+      context.issues.push({
+        code: 'custom',
+        path: ['alternatives', index, 'maker'],
+        message: 'expected maker and mounting together to differ from every other set of limits',
+        input: set.maker,
+      });
+    });
     if (record.family === 'pre-biased' && !record.input?.r1) {
       context.issues.push({
         code: 'custom',
