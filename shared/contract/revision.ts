@@ -64,6 +64,7 @@ export const ACTIONS = [
   'save',
   'submit',
   'check',
+  'close',
   'pass',
   'return',
   'send-back',
