@@ -1,3 +1,4 @@
+import './express-user.ts';
 import { randomUUID } from 'node:crypto';
 import type { Request, RequestHandler } from 'express';
 import { type Logger, pino } from 'pino';
@@ -33,6 +34,8 @@ export function requestLog(logger: Logger): RequestHandler {
     genReqId: () => randomUUID(),
     quietReqLogger: true,
     customLogLevel: (_request, response) => (response.statusCode >= 500 ? 'error' : 'info'),
+    customErrorObject: (_request, _response, _error, line: object) => ({ ...line, err: undefined }),
+    customProps: (request) => ({ personId: (request as Request).user?.id }),
     serializers: {
       req: (request: { id: string; method: string; url: string }) => ({
         id: request.id,

@@ -80,3 +80,10 @@ export const confirmEmailChange = {
   body: z.strictObject({ token: Token }),
   reply: z.object({ changed: z.boolean() }),
 } as const satisfies Route;
+
+/** Pages of the application that mailed links open, the token behind a `#`: `/reset-password#<token>`. */
+export const LINK_PAGES = {
+  invitation: 'accept-invitation',
+  passwordReset: 'reset-password',
+  emailChange: 'confirm-email',
+} as const;

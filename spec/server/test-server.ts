@@ -47,9 +47,9 @@ export class TestServer {
       ...changes,
     };
     const database = await Database.open(path.join(folder, 'sinkwell.sqlite'));
-    const services = createServices(config, database, []);
     const lines: string[] = [];
     const logger = createLogger('info', { write: (line: string) => lines.push(line) });
+    const services = createServices(config, database, path.join(folder, 'mailbox'), logger);
     const { express, router } = createApp(services, ['test-'.repeat(8)], logger);
     const server = createServer(express);
     await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
@@ -117,6 +117,7 @@ export class TestServer {
   }
 
   async stop(): Promise<void> {
+    await this.services.outbox.stop();
     this.server.closeAllConnections();
     await new Promise((resolve) => this.server.close(resolve));
     await this.database.close();

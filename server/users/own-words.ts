@@ -1,0 +1,12 @@
+import type { EntityManager } from 'typeorm';
+import type { PersonEntity } from './person-entity.ts';
+import { WorkspaceEntity } from './workspace-entity.ts';
+
+/** What others know a person by and see every day: no part of a password's strength. */
+export async function ownWordsOf(
+  manager: EntityManager,
+  person: Pick<PersonEntity, 'name' | 'email'>,
+): Promise<string[]> {
+  const workspace = await manager.findOneBy(WorkspaceEntity, { id: 1 });
+  return [person.name, person.email, workspace?.name ?? ''];
+}
