@@ -94,7 +94,6 @@ function revision(source: NoteSource): BomRevision {
   };
 }
 
-/** Nobody approves a note that is not released. */
 function titleBlock(
   project: NoteProject,
   sources: readonly NoteSource[],
@@ -106,15 +105,14 @@ function titleBlock(
     department: project.department,
     title: project.title,
     supplementaryTitle: project.supplementaryTitle,
-    creator: names(sources.map((source) => source.designer)),
-    checker: names(sources.map((source) => source.checker)),
-    approver: released ? names(sources.map((source) => source.lock?.approver ?? null)) : null,
+    creators: names(sources.map((source) => source.designer)),
+    checkers: names(sources.map((source) => source.checker)),
+    approvers: released ? names(sources.map((source) => source.lock?.approver ?? null)) : [],
     documentType: 'BOM note',
     language: 'en',
   };
 }
 
-function names(people: readonly (string | null)[]): string | null {
-  const distinct = [...new Set(people.filter((person) => person !== null))];
-  return distinct.length === 0 ? null : distinct.join(', ');
+function names(people: readonly (string | null)[]): string[] {
+  return [...new Set(people.filter((person) => person !== null))];
 }

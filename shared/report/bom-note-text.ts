@@ -63,11 +63,15 @@ export function stagesText({ counts }: BomNote): string {
 export function dataText({ counts }: BomNote): { label: string; value: string } {
   const { partsChanged, partsUnverified } = counts;
   const label = partsUnverified === 0 ? 'Data, all verified' : 'Data';
-  const unverified =
-    partsUnverified === 0 ? [] : [`${countOf(partsUnverified, 'line')} unverified`];
-  const changed = partsChanged === 0 ? [] : [`${countOf(partsChanged, 'part')} changed since`];
-  const value = [...unverified, ...changed].join(', ');
-  return { label, value: value === '' ? 'unchanged since lock' : value };
+  if (partsUnverified === 0) {
+    const changed = `${countOf(partsChanged, 'part')} changed since lock`;
+    return { label, value: partsChanged === 0 ? 'unchanged since lock' : changed };
+  }
+  const value =
+    partsChanged === 0
+      ? `${countOf(partsUnverified, 'line')} unverified`
+      : `${partsUnverified} unverified, ${partsChanged} changed`;
+  return { label, value };
 }
 
 const countOf = (count: number, word: string) => `${count} ${word}${count === 1 ? '' : 's'}`;

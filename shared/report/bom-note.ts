@@ -58,9 +58,10 @@ export const BomTitleBlock = z.object({
   department: Text,
   title: z.string(),
   supplementaryTitle: Text,
-  creator: Text,
-  checker: Text,
-  approver: Text,
+  creators: z.array(z.string()),
+  checkers: z.array(z.string()),
+  /** Empty on what is not released: nobody approves that. */
+  approvers: z.array(z.string()),
   documentType: z.string(),
   language: z.string(),
 });

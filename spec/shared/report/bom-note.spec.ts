@@ -37,9 +37,9 @@ describe('BOM note', () => {
     });
     expect(note.revisions.map(({ reference }) => reference)).toEqual(['Q1', 'Q2', 'Q12']);
     expect(note.titleBlock).toMatchObject({
-      creator: 'A. Designer',
-      checker: 'B. Checker',
-      approver: 'C. Approver',
+      creators: ['A. Designer'],
+      checkers: ['B. Checker'],
+      approvers: ['C. Approver'],
     });
     expect([stagesText(note), statusText(note), occasionText(note)]).toEqual([
       '3, all locked',
@@ -55,7 +55,7 @@ describe('BOM note', () => {
     const note = buildBomNote(PROJECT, [Q1, Q12_IN_CHECK], PREVIEW);
 
     expect(note.released).toBe(false);
-    expect(note.titleBlock.approver).toBeNull();
+    expect(note.titleBlock.approvers).toEqual([]);
     expect([stagesText(note), statusText(note)]).toEqual(['2, of these 1 locked', 'Not released']);
     expect(note.cautions[0]).toEqual({
       text: 'Q12 B is in check. Nothing may be bought or built from this sheet.',
@@ -94,7 +94,7 @@ describe('BOM note', () => {
     expect(note.cautions[0]?.text).toBe(
       '2N3904: data changed after Q1 A was locked (part revision 2, now 3); a re-check is due.',
     );
-    expect(dataText(note).value).toBe('1 part changed since');
+    expect(dataText(note).value).toBe('1 part changed since lock');
   });
 
   it('labels unverified data', () => {
