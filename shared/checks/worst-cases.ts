@@ -53,7 +53,7 @@ export class WorstCases {
       : marginOf(atMost ? '<=' : '>=', value, limit, this.least[k] ?? 0);
     const before = this.keys[k] ?? Infinity;
     this.used[k] = 1;
-    if (key < before - SAME * Math.max(1, Math.abs(key)) || before === Infinity) {
+    if (key < before - SAME * Math.min(1e12, Math.max(1, Math.abs(key))) || before === Infinity) {
       this.keys[k] = key;
       this.value[k] = value;
       this.limit[k] = limit;

@@ -139,9 +139,10 @@ export class OperatingPoint {
   }
 
   /**
-   * Finds the junction temperature TJ = TA + RθJA·P and fills the figures there.
+   * Finds the junction temperature TJ = TA + RθJA·P and fills the figures there. Of several that balance, the
+   * lowest counts: it is the one a stage switched on at ambient comes to.
    *
-   * @param guessDegC where to start; the sooner found the nearer
+   * @param guessDegC where to start a saturated corner, which has one only; the sooner found the nearer
    */
   settle(guessDegC: number): void {
     const ambient = this.condition.ambientDegC;
@@ -149,6 +150,10 @@ export class OperatingPoint {
     this.runaway = false;
     let t0 = Math.min(Math.max(guessDegC, ambient), Math.max(ambient, RUNAWAY_DEG_C));
     this.solve(t0);
+    if (!this.saturated) {
+      this.scan(ambient, rth);
+      return;
+    }
     let gap0 = ambient + rth * this.powerW - t0;
     let t1 = t0 + gap0;
     for (let step = 0; step < SECANT_STEPS; step++) {
@@ -156,6 +161,7 @@ export class OperatingPoint {
       if (!(t1 >= ambient && t1 < RUNAWAY_DEG_C)) break;
       this.solve(t1);
       const gap1 = ambient + rth * this.powerW - t1;
+      if (!this.saturated) break;
       if (Math.abs(gap1) < NEAR_K) return;
       const next = t1 - (gap1 * (t1 - t0)) / (gap1 - gap0);
       t0 = t1;
