@@ -3,6 +3,7 @@ import type * as z from 'zod';
 import type { Route } from '../../shared/contract/route.ts';
 import type { Act, Actor } from '../audit/act.ts';
 import type { Access } from './access.ts';
+import type { FileAnswer } from './file-answer.ts';
 import type { Versioned } from './versioned.ts';
 
 type Parsed<S> = S extends z.ZodType ? z.output<S> : undefined;
@@ -22,7 +23,11 @@ export interface Call<R extends Route, A extends Access> extends Act<
 
 /** What a handler answers: the reply, and for a mutable resource what its ETag is made from. */
 export interface Answer<R extends Route> {
-  readonly body: R['reply'] extends z.ZodType ? z.input<R['reply']> : null;
+  readonly body: R extends { file: true }
+    ? FileAnswer
+    : R['reply'] extends z.ZodType
+      ? z.input<R['reply']>
+      : null;
   readonly etag?: Versioned;
 }
 

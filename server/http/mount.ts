@@ -4,6 +4,7 @@ import type { Actor } from '../audit/act.ts';
 import { requireAccess } from './access.ts';
 import { ApiError } from './api-error.ts';
 import type { Answer, Call, Endpoint } from './endpoint.ts';
+import { type FileAnswer, sendFile } from './file-answer.ts';
 import { readInput } from './read-input.ts';
 import { requestIdOf } from './request-log.ts';
 import { readQuery } from './read-query.ts';
@@ -59,6 +60,10 @@ function bodyOf(route: Route, request: Request): unknown {
 
 function send(route: Route, response: Response, answer: Answer<Route>): void {
   if (answer.etag) response.set('ETag', etagOf(answer.etag));
+  if (route.file === true) {
+    sendFile(response, answer.body as unknown as FileAnswer); // endpoint.ts has typed the handler
+    return;
+  }
   if (route.reply === null) {
     response.status(route.status ?? 204).end();
     return;

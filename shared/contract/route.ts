@@ -11,8 +11,10 @@ export interface Route {
   readonly params?: z.ZodType;
   readonly query?: z.ZodType;
   readonly body?: z.ZodType;
-  /** `null`: 204 without a body. */
+  /** `null`: 204 without a body, or a file. */
   readonly reply: z.ZodType | null;
+  /** Whether it answers with a file to save instead of JSON; `reply` is null then. */
+  readonly file?: boolean;
   /** 200, or 204 without a reply, unless named. */
   readonly status?: number;
   /** Whether the caller must send If-Match with the ETag it read: 428 without, 412 when stale. */

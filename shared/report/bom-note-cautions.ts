@@ -1,3 +1,4 @@
+import { CAUTIONS } from '../method/cautions.ts';
 import type { BomCaution } from './bom-note.ts';
 import type { MergedLine } from './bom-note-lines.ts';
 import { changedParts, type NoteSource, sourceName } from './bom-note-source.ts';
@@ -5,10 +6,7 @@ import { clampCautions } from './clamp-cautions.ts';
 import type { FittedPart } from './fitted-part.ts';
 import { listed, numbered } from './word-lists.ts';
 
-const STANDING = [
-  'Figures are no substitute for the current data sheet, measurement and a qualified person’s judgement.',
-  'Mains, safety functions, medical, vehicles: the applicable standards and local codes govern, and a licensed practitioner decides.',
-];
+const STANDING = CAUTIONS.filter(({ id }) => id === 'judgement' || id === 'governed-fields');
 
 /** What a reader must know before buying or building: first about these revisions, then what always holds. */
 export function noteCautions(
@@ -23,7 +21,11 @@ export function noteCautions(
     ...unnamed(lines),
     ...namedTwice(lines),
   ];
-  const standing = [...STANDING, ...clampCautions(lines), ...replacement(lines)];
+  const standing = [
+    ...STANDING.map(({ short }) => short),
+    ...clampCautions(lines),
+    ...replacement(lines),
+  ];
   return [
     ...own.map((text) => ({ text, flagged: true })),
     ...standing.map((text) => ({ text, flagged: false })),

@@ -24,7 +24,7 @@ export const BomLine = z.object({
   /** Empty where the library names none. */
   approvedSources: z.array(z.string()),
   partRevision: z.int().nullable(),
-  /** Whether any figure of the part is not verified: typed by hand, or of an unverified part revision. */
+  /** Whether it rests on an unverified part revision, or on transistor figures typed by hand. */
   unverified: z.boolean(),
 });
 export type BomLine = z.infer<typeof BomLine>;

@@ -10,7 +10,7 @@ import {
 
 /**
  * What takes the coil's energy: one part, or diode and Zener in series. Where the stage has both, the
- * library link of the clamp is the diode's, so the Zener's figures count as typed by hand.
+ * library link of the clamp is the diode's.
  */
 export function clampParts(source: NoteSource): FittedPart[] {
   const link = linkFields(source, 'clamp');
@@ -22,7 +22,7 @@ export function clampParts(source: NoteSource): FittedPart[] {
     case 'diode-zener':
       return [
         part(source, 'clamp', 'clamp diode', { ...diode(source), ...link }),
-        part(source, 'clampZener', 'clamp Zener', { ...zener(source), unverified: true }),
+        part(source, 'clampZener', 'clamp Zener', zener(source)),
       ];
     case 'zener-across-transistor':
       return [part(source, 'clamp', 'clamp Zener', { ...zener(source), ...link })];

@@ -35,13 +35,16 @@ export function purchase(
   };
 }
 
-/** What the library link of a role adds; figures without a link were typed by hand and count as unverified. */
+/**
+ * What the library link of a role adds. Load and clamp may be typed by hand: they are the stage's own
+ * requirement then. A transistor without a link rests on figures nobody verified.
+ */
 export function linkFields(source: NoteSource, role: string) {
   const link: LinkedPart | undefined = source.parts.find((part) => part.role === role);
   return {
     partNumber: link?.partNumber ?? null,
     partRevision: link?.revision ?? null,
-    unverified: link?.verified !== true,
+    unverified: link === undefined ? role === 'transistor' || role === 'preDriver' : !link.verified,
   };
 }
 

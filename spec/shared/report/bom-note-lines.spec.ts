@@ -137,7 +137,7 @@ describe('merged lines', () => {
       '1 | R8 | Resistor | 4.7 kΩ | ±5 % | –',
       '1 | C2 | Capacitor, speed-up | 470 pF | – | –',
       '1 | D3 | Diode, coil clamp | 75 V | 0.2 A | 1N4148W type',
-      '1 | D4 | Zener diode, coil clamp; data unverified | 22.8…25.6 V | 0.5 W | –',
+      '1 | D4 | Zener diode, coil clamp | 22.8…25.6 V | 0.5 W | –',
     ]);
   });
 
@@ -180,14 +180,14 @@ describe('merged lines', () => {
     expect(rows(source({ reference: 'Q3', load, clamp }, { load: 'H1' }))).toContain(row);
   });
 
-  it('labels a part without a verified library record, and says where a name is missing', () => {
+  it('labels transistor figures typed by hand, and says where a name is missing', () => {
     const typed = { ...source({ reference: 'Q3' }), parts: [] };
     expect(rows(typed)).toEqual([
       '1 | Q3 | Transistor, NPN; data unverified | 40 V | 0.2 A | 2N3904',
       '1 | RB of Q3 | Resistor | 620 Ω | ±5 %, 0.1 W | –',
       '1 | RBE of Q3 | Resistor | 22 kΩ | ±5 %, 0.1 W | –',
-      '1 | clamp diode of Q3 | Diode, coil clamp; data unverified | 75 V | 0.2 A | –',
-      '1 | load of Q3 | Coil (relay, valve); data unverified | 1.44 kΩ | ±10 %, 20 °C | –',
+      '1 | clamp diode of Q3 | Diode, coil clamp | 75 V | 0.2 A | –',
+      '1 | load of Q3 | Coil (relay, valve) | 1.44 kΩ | ±10 %, 20 °C | –',
     ]);
   });
 

@@ -153,7 +153,7 @@ describe('BOM note', () => {
 
   it('carries the standing cautions', () => {
     const text = cautions(Q1).join(' ');
-    expect(text).toContain('no substitute for the current data sheet');
+    expect(text).toContain('replace neither the current data sheet');
     expect(text).toContain('a licensed practitioner decides');
   });
 });
