@@ -104,8 +104,8 @@ export class OperatingPoint {
     this.fullDrop = true;
   }
 
-  /** Fills the figures for a junction at `tjDegC`. */
-  solve(tjDegC: number): void {
+  /** Fills the figures for a junction at `tjDegC`; tells whether the corner is saturated there. */
+  solve(tjDegC: number): boolean {
     const { fullA, availableV } = this.condition;
     this.tjDegC = tjDegC;
     this.vbeV = Math.max(0, this.vbe25V + this.vbeTempco * (tjDegC - SHEET_DEG_C));
@@ -136,6 +136,7 @@ export class OperatingPoint {
     this.powerW =
       this.model.conductionShare * (this.vceV * this.icA + this.vbeV * this.ibA) +
       switchingLossW(this);
+    return this.saturated;
   }
 
   /**
@@ -149,8 +150,7 @@ export class OperatingPoint {
     const rth = this.model.part.rthJaKPerW ?? 0;
     this.runaway = false;
     let t0 = Math.min(Math.max(guessDegC, ambient), Math.max(ambient, RUNAWAY_DEG_C));
-    this.solve(t0);
-    if (!this.saturated) {
+    if (!this.solve(t0)) {
       this.scan(ambient, rth);
       return;
     }
@@ -159,9 +159,8 @@ export class OperatingPoint {
     for (let step = 0; step < SECANT_STEPS; step++) {
       if (Math.abs(gap0) < NEAR_K) return;
       if (!(t1 >= ambient && t1 < RUNAWAY_DEG_C)) break;
-      this.solve(t1);
+      if (!this.solve(t1)) break;
       const gap1 = ambient + rth * this.powerW - t1;
-      if (!this.saturated) break;
       if (Math.abs(gap1) < NEAR_K) return;
       const next = t1 - (gap1 * (t1 - t0)) / (gap1 - gap0);
       t0 = t1;
