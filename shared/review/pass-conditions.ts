@@ -51,11 +51,13 @@ export function missingForPass(
   findings: readonly NumberedFinding[],
   reasonAbove: number,
 ): string[] {
-  const failing = criteria.some((criterion) => criterion.status === 'fail');
+  const unexplained =
+    (verdict === 'fail' || verdict === 'open') &&
+    !criteria.some((criterion) => criterion.status === verdict);
   const read = new Set(check?.read);
   const unread = criteria.filter((criterion) => !read.has(criterion.id)).length;
   return [
-    ...(verdict === 'fail' && !failing ? ['The verdict is fail: return the revision.'] : []),
+    ...(unexplained ? [`The verdict is ${verdict} for the whole stage: return the revision.`] : []),
     ...missingFigure(check, criteria, reasonAbove),
     ...criteria.flatMap((criterion) => missingJustification(criterion, check)),
     ...(unread === 0

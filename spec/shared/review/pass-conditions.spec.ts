@@ -61,7 +61,13 @@ describe('conditions of a pass', () => {
     ]);
   });
 
-  it('cannot be met by a verdict of fail without a failing criterion', () => {
-    expect(missing({}, { verdict: 'fail' })).toEqual(['The verdict is fail: return the revision.']);
-  });
+  it.each(['fail', 'open'])(
+    'cannot be met by a verdict of %s that no criterion carries',
+    (verdict) => {
+      const criteria = [{ id: 'overdrive-factor', value: 5.73, status: 'pass' }];
+      expect(missing({ read: ['overdrive-factor'] }, { verdict, criteria })).toEqual([
+        `The verdict is ${verdict} for the whole stage: return the revision.`,
+      ]);
+    },
+  );
 });
