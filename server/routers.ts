@@ -1,9 +1,14 @@
 import { auditEndpoints } from './audit/audit-endpoints.ts';
+import { checkEndpoints } from './checks/check-endpoints.ts';
 import type { Endpoint } from './http/endpoint.ts';
+import { policyEndpoints } from './policies/policy-endpoints.ts';
+import { projectEndpoints } from './projects/project-endpoints.ts';
+import { revisionEndpoints } from './revisions/revision-endpoints.ts';
 import type { Services } from './services.ts';
 import { sessionEndpoints } from './session/session-endpoints.ts';
 import { accountEndpoints } from './users/account-endpoints.ts';
 import { peopleEndpoints } from './users/people-endpoints.ts';
+import { stageEndpoints } from './stages/stage-endpoints.ts';
 
 /** Every route of the API, by resource. */
 export function allEndpoints(services: Services): Endpoint[] {
@@ -12,5 +17,10 @@ export function allEndpoints(services: Services): Endpoint[] {
     ...accountEndpoints(services),
     ...peopleEndpoints(services),
     ...auditEndpoints(services),
+    ...policyEndpoints(services),
+    ...projectEndpoints(services),
+    ...stageEndpoints(services),
+    ...revisionEndpoints(services),
+    ...checkEndpoints(services),
   ];
 }
