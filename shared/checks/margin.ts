@@ -18,19 +18,13 @@ export function leastLimit(unit: Unit): number {
 /**
  * Distance of a figure to its limit as a fraction of the limit, positive when met.
  *
+ * @param sign 1 for a figure that must not exceed its limit, −1 for one that must reach it
  * @param least smallest magnitude the limit counts with
- * @returns −1 for a ≤ limit that is not positive; −Infinity for an infinite figure
+ * @returns −1 for an upper limit that is not positive; −Infinity for an infinite figure
  */
-export function marginOf(
-  relation: '>=' | '<=',
-  value: number,
-  limit: number,
-  least: number,
-): number {
-  const size = Math.max(Math.abs(limit), least);
-  if (relation === '<=') return limit > 0 ? (limit - value) / size : -1;
-  if (size === 0) return value >= limit ? Infinity : -1;
-  return (value - limit) / size;
+export function marginOf(sign: number, value: number, limit: number, least: number): number {
+  if (sign > 0 && limit <= 0) return -1;
+  return (sign * (limit - value)) / Math.max(Math.abs(limit), least);
 }
 
 /** Status of a margin: at least the policy's band is a pass, met at all is marginal. */

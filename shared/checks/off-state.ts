@@ -60,7 +60,8 @@ export class OffStateChecks {
     worst.note(VOLTAGE, point.condition.supplyV, vceLimitV, corner);
     worst.note(REVERSE, off.reverseV, transistor.limits.veboV ?? NaN, corner);
     if (this.drivesOpenDrain) {
-      worst.note(DRIVE_MAXIMUM, drive.maximumV ?? NaN, point.condition.supplyV, corner);
+      const limitV = drive.maximumV === null ? NaN : point.condition.supplyV;
+      worst.note(DRIVE_MAXIMUM, drive.maximumV ?? NaN, limitV, corner);
     }
     if (drive.reset !== null && !isHighSide(this.model.input)) {
       if (off.resetOpen) worst.note(RESET, off.resetCollectorA, currentLimitA, corner);

@@ -23,7 +23,8 @@ export class WorstCases {
   private readonly limit = new Float64Array(IDS.length).fill(NaN);
   private readonly corner = new Int32Array(IDS.length).fill(NO_CORNER);
   private readonly used = new Uint8Array(IDS.length);
-  private readonly atMost = IDS.map((id) => CRITERIA[id].relation === '<=');
+  /** 1 for a ≤ criterion, −1 for a ≥ one. */
+  private readonly sign = Float64Array.from(IDS, (id) => (CRITERIA[id].relation === '<=' ? 1 : -1));
   private readonly least = Float64Array.from(IDS, (id) => leastLimit(CRITERIA[id].unit));
   private readonly units: Unit[] = IDS.map((id) => CRITERIA[id].unit);
   private readonly standings = new Map<number, Standing>();
@@ -46,11 +47,11 @@ export class WorstCases {
    * @param corner number of the corner; −1 for a figure that no corner moves
    */
   note(k: number, value: number, limit: number, corner: number): void {
-    const atMost = this.atMost[k] === true;
-    const unlimited = atMost ? -value : value;
+    const sign = this.sign[k] ?? 1;
+    // A limit of NaN leaves the figure itself to be compared.
     const key = Number.isNaN(limit)
-      ? unlimited
-      : marginOf(atMost ? '<=' : '>=', value, limit, this.least[k] ?? 0);
+      ? -sign * value
+      : marginOf(sign, value, limit, this.least[k] ?? 0);
     const before = this.keys[k] ?? Infinity;
     this.used[k] = 1;
     if (key < before - SAME * Math.min(1e12, Math.max(1, Math.abs(key))) || before === Infinity) {

@@ -52,6 +52,9 @@ export class OperatingPoint {
   private gain25 = 0;
   private vbe25V = 0;
   private highGain = false;
+  /** Temperature the gain ratio was last worked out for: cold starts all share one. */
+  private ratioDegC = NaN;
+  private ratio = 1;
 
   private readonly vbeTempco: number;
   private readonly exponent: number;
@@ -205,7 +208,12 @@ export class OperatingPoint {
   /** Minima take the cold penalty, maxima the hot one; neither takes a credit. */
   private gainFactor(tjDegC: number): number {
     const penalty = this.highGain ? tjDegC > SHEET_DEG_C : tjDegC < SHEET_DEG_C;
-    return penalty ? gainRatio(tjDegC, this.exponent) : 1;
+    if (!penalty) return 1;
+    if (tjDegC !== this.ratioDegC) {
+      this.ratioDegC = tjDegC;
+      this.ratio = gainRatio(tjDegC, this.exponent);
+    }
+    return this.ratio;
   }
 
   private driveCurrent(): number {

@@ -39,13 +39,13 @@ export function seriesDecade(series: SeriesName): number[] {
 /** All preferred values from `smallest` to `largest` inclusive, rising; SI units in, SI units out. */
 export function preferredValues(series: SeriesName, smallest: number, largest: number): number[] {
   const digits = SIGNIFICANTS[series];
-  const scale = digits[0] ?? 1;
+  const shift = Math.log10(digits[0] ?? 1);
   const values: number[] = [];
   const first = Math.floor(Math.log10(smallest)) - 1;
   for (let decade = first; Math.pow(10, decade) <= largest; decade++) {
     for (const digit of digits) {
       // Read from text, so that 4.7e3 is exactly the number a person types.
-      const value = Number(`${digit}e${decade}`) / scale;
+      const value = Number(`${digit}e${decade - shift}`);
       if (value >= smallest && value <= largest) values.push(value);
     }
   }

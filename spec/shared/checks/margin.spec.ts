@@ -1,0 +1,42 @@
+import { describe, expect, it } from 'vitest';
+import { marginOf, statusOf, verdictOf, worseOf } from '../../../shared/checks/margin.ts';
+
+describe('marginOf', () => {
+  it('is the distance to the limit as a fraction of it', () => {
+    expect(marginOf(1, 8, 10, 0)).toBeCloseTo(0.2, 12);
+    expect(marginOf(-1, 3, 2, 0)).toBeCloseTo(0.5, 12);
+    expect(marginOf(-1, 1, 2, 0)).toBeCloseTo(-0.5, 12);
+  });
+
+  it('counts a small limit with its least size', () => {
+    expect(marginOf(1, 0, 0.01, 0.05)).toBeCloseTo(0.2, 12);
+  });
+
+  it('is −1 for an upper limit that is not positive, whatever the figure', () => {
+    expect(marginOf(1, -5, 0, 0.05)).toBe(-1);
+    expect(marginOf(1, -5, -1, 0.05)).toBe(-1);
+  });
+});
+
+describe('statusOf', () => {
+  it.each([
+    [0.1, 'pass'],
+    [0.0999, 'marginal'],
+    [0, 'marginal'],
+    [-1e-12, 'fail'],
+    [-Infinity, 'fail'],
+  ])('of a margin of %d is %s', (margin, status) => {
+    expect(statusOf(margin, 0.1)).toBe(status);
+  });
+});
+
+describe('verdictOf', () => {
+  it('is fail before open before marginal before pass; stated does not count', () => {
+    expect(verdictOf(['pass', 'stated'])).toBe('pass');
+    expect(verdictOf(['pass', 'marginal', 'stated'])).toBe('marginal');
+    expect(verdictOf(['open', 'marginal'])).toBe('open');
+    expect(verdictOf(['open', 'fail', 'pass'])).toBe('fail');
+    expect(verdictOf([])).toBe('pass');
+    expect(worseOf('fail', 'open')).toBe('fail');
+  });
+});
