@@ -1,0 +1,149 @@
+/** A place where the rules leave a choice, what was chosen and why; shown on the method page. */
+export interface MethodDecision {
+  readonly id: string;
+  readonly title: string;
+  readonly text: string;
+}
+
+export const DECISIONS: readonly MethodDecision[] = [
+  {
+    id: 'base-current-at-full-load',
+    title: 'VBE, IB and hFE of a corner are taken once, at the full load current',
+    text: 'A corner has one base–emitter voltage, one base current and one gain: those at the load current with VCE = 0. They serve the saturation decision, forced β, the overdrive factor, the Ebers–Moll difference, the dissipation and, where the transistor is not saturated, IC = hFE·IB. The load current that VCE(sat) takes away moves VBE by well under 1 mV.',
+  },
+  {
+    id: 'conduction-off',
+    title: 'A corner that cannot turn on',
+    text: 'Where the shunt resistor takes all the drive current, IB and IC are 0, VCE is the whole supply, the overdrive factor is 0 and forced β infinite. The drive current is still counted with VBE at the base.',
+  },
+  {
+    id: 'gain-maximum-per-row',
+    title: 'A missing hFE maximum is three times the minimum as printed',
+    text: 'The factor is applied to each printed row before rows of equal current are merged and before minima measured at a higher VCE are cut, so that the maximum is never understated.',
+  },
+  {
+    id: 'vbe-table',
+    title: 'VBE(sat) limits come from the rows that print them',
+    text: 'If any VBE(sat) row prints a maximum, only such rows make the maximum line, and likewise the minimum line. Substitutes come in only where no row prints the limit: for the maximum each VBE(sat) row takes VBE(on) of the same current plus 0.05 V, else its own typical figure plus 0.15 V; parts without VBE(sat) rows take their VBE(on) rows in the same way.',
+  },
+  {
+    id: 'tested-beta-below-first-row',
+    title: 'β_test below the first VCE(sat) row',
+    text: 'The piece of the line below the first row runs from the intrinsic drop to that row, so it carries that row’s IC/IB; every other piece carries the smaller IC/IB of the two rows it joins. Corners with VCE = 0 use the piece at the full load current.',
+  },
+  {
+    id: 'hot-gap-between-pieces',
+    title: 'Pieces of the VCE(sat) line that do not meet once hot',
+    text: 'Offset and slope have different temperature factors, so two pieces that meet at 25 °C may leave a gap at a row when hot. Where the load line falls into such a gap the collector current is that of the row.',
+  },
+  {
+    id: 'equal-corners',
+    title: 'Equal worst corners',
+    text: 'Corners whose margins differ by less than one part in 10⁹ count as equal and the first in the stated order is reported. The junction temperature is solved to 0.1 µK, far finer than the 1 mK asked for, so that numerical noise decides nothing.',
+  },
+  {
+    id: 'junction-balance',
+    title: 'How the junction temperature is found',
+    text: 'By the secant method from the dissipation of the same corner before it warmed up; where that fails, the lowest of 64 steps up to 400 °C at which the balance changes sign, refined by halving. No change of sign below 400 °C is a thermal runaway.',
+  },
+  {
+    id: 'static-corners',
+    title: 'Figures that only the supply moves',
+    text: 'Peak VCE is reported at the first corner with the highest supply. Holding voltage, surge and the tested range belong to no corner.',
+  },
+  {
+    id: 'tested-range-margin',
+    title: 'The tested range has no margin',
+    text: 'Its limit is 0 and a fraction of nothing has no meaning: it passes at 0 and is open above, with the margin left empty.',
+  },
+  {
+    id: 'off-state-corners',
+    title: 'Which corners the off state is judged at',
+    text: 'At the corners with the highest supply and the settled junction, which are the conditions the rules name. The corner’s ends for drive, gain, VBE and VCE(sat) matter only through the junction temperature.',
+  },
+  {
+    id: 'reset-two-limits',
+    title: 'Reset is held to both limits of the off state',
+    text: 'With a base–emitter resistor the base voltage is reported as reset-off and the collector current beside it as reset-off-current. With an open base there is no voltage to judge: reset-off is then the collector current. A reset pull-up without a value leaves the criterion open.',
+  },
+  {
+    id: 'open-base-voltage',
+    title: 'An open base has no off-state voltage',
+    text: 'A PNP on an open drain without base–emitter resistor is judged by its collector current only.',
+  },
+  {
+    id: 'reverse-base-voltage',
+    title: 'Reverse base–emitter voltage',
+    text: 'An NPN is reversed by a logic ground below the load return, a PNP by a push-pull or pull-up rail above the lowest supply, each divided by RB and RBE. A speed-up capacitor adds the voltage it was charged to across RB, undivided.',
+  },
+  {
+    id: 'cut-off-anchor',
+    title: 'The anchor of the off-state exponential',
+    text: 'The row with the lowest printed VBE minimum at no more than a tenth of the rated collector current, VBE(sat) and VBE(on) rows alike; of equal minima the larger current.',
+  },
+  {
+    id: 'clamp-largest-voltage',
+    title: 'Clamp power and surge take the largest clamp voltage',
+    text: 'Release time takes the smallest clamp voltage, because that is the slow side. The energy the clamp takes and what it adds to a surge grow with the voltage, so there the largest counts: VF, VF + VZ max, or VZ max across the transistor.',
+  },
+  {
+    id: 'clamp-findings',
+    title: 'Clamp faults without a margin',
+    text: 'A missing clamp, a clamp across the transistor that conducts at the highest supply and a diode rated below twice the supply are findings that fail the stage by themselves; a diode without a stated rating is a finding only.',
+  },
+  {
+    id: 'clamp-power-at-frequency',
+    title: 'Clamp power needs a frequency',
+    text: 'A stage without switching frequency puts no mean power into its clamp, so the criterion appears with a frequency only.',
+  },
+  {
+    id: 'coil-at-frequency',
+    title: 'A coil driven at a frequency',
+    text: 'Its mean voltage, duty times supply, is compared with the holding voltage in place of the operate voltage; without a stated holding voltage the figure is reported only. A supply dip is compared with the holding voltage as it stands.',
+  },
+  {
+    id: 'overvoltage-reference',
+    title: 'Reference of the coil’s maximum voltage',
+    text: 'Where no temperature is stated for it, the reference temperature of the coil resistance is taken.',
+  },
+  {
+    id: 'peak-current',
+    title: 'Peak collector current of coils and resistors',
+    text: 'These loads draw no more at switch-on than later, so the peak is the largest collector current, held against ICM where printed, else against IC.',
+  },
+  {
+    id: 'storage-per-corner',
+    title: 'Storage time at each corner',
+    text: 'The on-current is that corner’s base current, so the largest comes up by itself; the turn-off current always takes the smallest VBE and the largest resistors, the gain always its maximum. Without a rise or fall time in the switching row, dissipation and junction temperature are at best open at a frequency.',
+  },
+  {
+    id: 'missing-rows',
+    title: 'What missing rows leave open',
+    text: 'Without gain rows a stage is taken as saturated and the overdrive factor is open. Without VCE(sat) rows load voltage, dissipation, junction temperature and forced β are open. Without any VBE figure overdrive factor and forced β are open. A figure that fails on the rest of the data still fails.',
+  },
+  {
+    id: 'rb-dependent',
+    title: 'Which criteria depend on RB',
+    text: 'The window decides which criteria move between its ends, and they decide the window: the two are taken in turn, starting from what RB decides by nature, until they agree. Where the window is empty or a single value, the movement over all judged values counts. The tested range always counts.',
+  },
+  {
+    id: 'can-pass',
+    title: 'Which preferred values are judged',
+    text: 'A value is left out only if a few cold-start corners already refute it by overdrive, forced β, pin current, base current, its own dissipation or the tested pin current. All others, and three neighbours at each end, are judged at every corner.',
+  },
+  {
+    id: 'window-ends',
+    title: 'What sets the ends of the window',
+    text: 'The criterion that fails at the next preferred value outside, the one with the smallest margin if several do, else the one that is open there. An end at the limit of the series has none.',
+  },
+  {
+    id: 'candidate-verdict',
+    title: 'Verdict of a candidate',
+    text: 'Margin, worst criterion and verdict of a preferred value count its RB-dependent criteria only; what RB cannot change is shown in the list of criteria.',
+  },
+  {
+    id: 'capacitor-across-coil',
+    title: 'Capacitor across a coil',
+    text: 'A stage file cannot describe one, so the calculation cannot find it. It draws a current peak at turn-on and rings with the coil at turn-off: use a diode.',
+  },
+];
