@@ -19,11 +19,12 @@ const CACHE = join(ROOT, 'node_modules', '.cache', 'sinkwell');
  * edited source is never missed.
  *
  * @param {string} entry path from the project's root
+ * @param {string[]} folders where the entry and all it imports live
  * @returns {Promise<any>} the module
  * @throws {Error} if the packages are not installed
  */
-export async function loadBundled(entry) {
-  const file = join(CACHE, `${entry.replace(/\W+/g, '-')}-${sourceHash(entry)}.mjs`);
+export async function loadBundled(entry, folders) {
+  const file = join(CACHE, `${entry.replace(/\W+/g, '-')}-${sourceHash(folders)}.mjs`);
   if (!existsSync(file)) await bundle(entry, file);
   return import(pathToFileURL(file).href);
 }
@@ -49,14 +50,10 @@ async function bundle(entry, file) {
   renameSync(own, file);
 }
 
-/** Hash over the entry, all of shared/ and the lock file (the bundle holds packages too). */
-function sourceHash(entry) {
+/** Hash over all sources and the lock file (the bundle holds packages too). */
+function sourceHash(folders) {
   const hash = createHash('sha256');
-  for (const path of [
-    join(ROOT, entry),
-    join(ROOT, 'package-lock.json'),
-    ...sourcesUnder('shared'),
-  ]) {
+  for (const path of [join(ROOT, 'package-lock.json'), ...folders.flatMap(sourcesUnder)]) {
     hash.update(relative(ROOT, path)).update('\0').update(readFileSync(path)).update('\0');
   }
   return hash.digest('hex').slice(0, 16);
