@@ -1,4 +1,4 @@
-import { cornerNumber } from '../stage/corners.ts';
+import { cornerNumber, type CornerSpace } from '../stage/corners.ts';
 import { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageInput } from '../stage/stage-input.ts';
 import { type StageModel, stageModel } from '../stage/stage-model.ts';
@@ -27,6 +27,16 @@ const PROBE_CORNERS = [
   { drive: 'weak', rb: '-', rbe: '+', gain: 'min', vbe: 'min' },
 ];
 
+function probeCorners(corners: CornerSpace): number[] {
+  return PROBE_CORNERS.flatMap((ends) =>
+    ['min', 'max'].flatMap((supply) =>
+      ['min', 'max'].flatMap((ambient) =>
+        ['-', '+'].map((load) => cornerNumber(corners, { ...ends, supply, ambient, load })),
+      ),
+    ),
+  );
+}
+
 /** What a run over the corners found besides the criteria. */
 export interface CornerTraits {
   /** Quantities used above their last tested row. */
@@ -50,7 +60,7 @@ export class StageJudge {
   private readonly turnOff: TurnOffChecks;
   private readonly switching: SwitchingChecks;
   private readonly tested: TestedRange;
-  private readonly probes: readonly number[];
+  private probes: readonly number[] = [];
   private beyondTestBeta = false;
   private runaway = false;
 
@@ -62,15 +72,6 @@ export class StageJudge {
     this.turnOff = new TurnOffChecks(this.model, this.worst);
     this.switching = new SwitchingChecks(this.model, this.worst);
     this.tested = new TestedRange(this.model);
-    this.probes = PROBE_CORNERS.flatMap((ends) =>
-      ['min', 'max'].flatMap((supply) =>
-        ['min', 'max'].flatMap((ambient) =>
-          ['-', '+'].map((load) =>
-            cornerNumber(this.model.corners, { ...ends, supply, ambient, load }),
-          ),
-        ),
-      ),
-    );
   }
 
   /** Every criterion of the stage with a base resistor of `rbOhm`, worst over all corners. */
@@ -98,6 +99,7 @@ export class StageJudge {
    */
   probeMargin(rbOhm: number): number {
     const { point, worst } = this;
+    if (this.probes.length === 0) this.probes = probeCorners(this.model.corners);
     worst.reset();
     let beyondPin = false;
     for (const corner of this.probes) {

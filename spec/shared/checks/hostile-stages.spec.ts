@@ -1,0 +1,101 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { judgeStage } from '../../../shared/sizing/judge-stage.ts';
+import { stageResult } from '../../../shared/sizing/result.ts';
+import { StageInput } from '../../../shared/stage/stage-input.ts';
+import { HIGH_SIDE_FILE, RELAY_FILE } from '../relay-stage.ts';
+
+/** A long run takes more stages and another seed: SINKWELL_STAGES=100000 SINKWELL_SEED=7 npx vitest run … */
+const STAGES = Number(process.env['SINKWELL_STAGES'] ?? 2000);
+const SEED = Number(process.env['SINKWELL_SEED'] ?? 20261201);
+
+/** Numbers that slip through or sit at the edge of every range. */
+const NASTY = [
+  0, -0, 1e-300, 5e-324, 1e-12, 1e-9, 1e-3, 0.5, 1, 25, 150, 400, 1e3, 1e6, 1e12, 1e300, -1,
+  -273.15,
+];
+const number = fc.oneof(
+  fc.constantFrom(...NASTY),
+  fc.double({ noNaN: true, noDefaultInfinity: true }),
+  fc.double({ min: 1e-6, max: 1e3, noNaN: true }),
+);
+const anything = fc.oneof(number, fc.constantFrom(null, '', 'x', true, [], {}, 'NaN'));
+
+type Path = (string | number)[];
+
+/** Every place of a document that holds a value. */
+function leaves(value: unknown, path: Path = []): Path[] {
+  if (value === null || typeof value !== 'object') return [path];
+  return Object.entries(value).flatMap(([key, inner]) =>
+    leaves(inner, [...path, Array.isArray(value) ? Number(key) : key]),
+  );
+}
+
+function replaced(document: unknown, path: Path, value: unknown): unknown {
+  const copy = structuredClone(document);
+  let holder = copy as Record<string | number, unknown>;
+  for (const step of path.slice(0, -1)) holder = holder[step] as Record<string | number, unknown>;
+  holder[path[path.length - 1] ?? ''] = value;
+  return copy;
+}
+
+const BASES: unknown[] = [
+  RELAY_FILE,
+  HIGH_SIDE_FILE,
+  { ...RELAY_FILE, frequencyHz: 1000, duty: 0.5, clamp: { ...RELAY_FILE.clamp, powerRatingW: 1 } },
+  {
+    ...RELAY_FILE,
+    shuntResistor: null,
+    drive: { ...RELAY_FILE.drive, reset: { kind: 'pull-up', pullUpOhm: 1e4 } },
+    supplyV: { min: 10, max: 20, surge: 60, dip: 6 },
+    load: { kind: 'resistor', resistanceOhm: 220, tolerance: 0.1 },
+  },
+];
+
+/** A stage file with up to six of its values replaced by numbers good, odd and absurd. */
+const hostile = fc
+  .tuple(
+    fc.constantFrom(...BASES),
+    fc.array(fc.tuple(fc.nat(), fc.oneof({ weight: 4, arbitrary: number }, anything)), {
+      minLength: 1,
+      maxLength: 6,
+    }),
+  )
+  .map(([base, changes]) =>
+    changes.reduce<unknown>((document, [pick, value]) => {
+      const places = leaves(document);
+      const place = places[pick % places.length];
+      return place === undefined ? document : replaced(document, place, value);
+    }, base),
+  );
+
+/** Paths of numbers that no JSON document can hold. */
+function unsound(value: unknown, path = '$'): string[] {
+  if (typeof value === 'number') return Number.isFinite(value) ? [] : [path];
+  if (value === null || typeof value !== 'object') return [];
+  return Object.entries(value).flatMap(([key, inner]) => unsound(inner, `${path}.${key}`));
+}
+
+describe(`${STAGES} hostile stage files, seed ${SEED}`, () => {
+  it('are refused or judged: no exception, no NaN, no loop', { timeout: 600_000 }, () => {
+    let judged = 0;
+    fc.assert(
+      fc.property(hostile, (document) => {
+        const parsed = StageInput.safeParse(document);
+        if (!parsed.success) {
+          expect(parsed.error.issues.length).toBeGreaterThan(0);
+          return;
+        }
+        judged++;
+        const started = performance.now();
+        const result = stageResult(judgeStage(parsed.data));
+        expect(performance.now() - started).toBeLessThan(20_000);
+        expect(unsound(result)).toEqual([]);
+        expect(JSON.parse(JSON.stringify(result))).toEqual(result);
+      }),
+      { seed: SEED, numRuns: STAGES },
+    );
+    // Most changes must get through the parser, or the engine has not been tried.
+    expect(judged).toBeGreaterThan(STAGES / 8);
+  });
+});
