@@ -1,5 +1,10 @@
 import type { Routes } from '@angular/router';
-import { signedInGuard, signedOutGuard } from './session/session-guards.ts';
+import {
+  administratorGuard,
+  signedInGuard,
+  signedOutGuard,
+  withToken,
+} from './session/session-guards.ts';
 
 /** Pages before sign-in stand alone; all others stand in the shell. Tabs are path segments, filters are queries. */
 export const routes: Routes = [
@@ -10,11 +15,108 @@ export const routes: Routes = [
     loadComponent: () => import('./session/sign-in.ts').then((m) => m.SignIn),
   },
   {
+    path: 'set-up',
+    title: 'Set up',
+    canActivate: [signedOutGuard],
+    loadComponent: () => import('./session/set-up.ts').then((m) => m.SetUp),
+  },
+  {
+    path: 'invitation',
+    title: 'Invitation',
+    data: { purpose: 'invitation' },
+    loadComponent: () => import('./session/new-password.ts').then((m) => m.NewPassword),
+  },
+  {
+    path: 'reset',
+    title: 'New password',
+    canMatch: [withToken],
+    data: { purpose: 'reset' },
+    loadComponent: () => import('./session/new-password.ts').then((m) => m.NewPassword),
+  },
+  {
+    path: 'reset',
+    title: 'Reset the password',
+    loadComponent: () => import('./session/ask-reset.ts').then((m) => m.AskReset),
+  },
+  {
     path: '',
     canActivate: [signedInGuard],
     loadComponent: () => import('./app-shell.ts').then((m) => m.AppShell),
     children: [
       { path: '', pathMatch: 'full', redirectTo: 'desk' },
+      {
+        path: 'desk',
+        title: 'My desk',
+        loadComponent: () => import('./desk/desk-page.ts').then((m) => m.DeskPage),
+      },
+      {
+        path: 'projects',
+        title: 'Projects',
+        loadComponent: () => import('./projects/project-list.ts').then((m) => m.ProjectList),
+      },
+      {
+        path: 'projects/new',
+        title: 'New project',
+        loadComponent: () => import('./projects/new-project.ts').then((m) => m.NewProject),
+      },
+      {
+        path: 'p/:projectId',
+        title: 'Project',
+        loadComponent: () => import('./projects/project-page.ts').then((m) => m.ProjectPage),
+        children: [
+          { path: '', pathMatch: 'full', redirectTo: 'stages' },
+          {
+            path: 'stages',
+            title: 'Stages',
+            loadComponent: () =>
+              import('./projects/project-stages.ts').then((m) => m.ProjectStages),
+          },
+          {
+            path: 'policy',
+            title: 'Policy',
+            loadComponent: () =>
+              import('./projects/project-policy.ts').then((m) => m.ProjectPolicy),
+          },
+          {
+            path: 'members',
+            title: 'Members',
+            loadComponent: () =>
+              import('./projects/project-members.ts').then((m) => m.ProjectMembers),
+          },
+          {
+            path: 'activity',
+            title: 'Activity',
+            loadComponent: () =>
+              import('./projects/project-activity.ts').then((m) => m.ProjectActivity),
+          },
+        ],
+      },
+      {
+        path: 'account',
+        title: 'Account and appearance',
+        loadComponent: () => import('./session/account-page.ts').then((m) => m.AccountPage),
+      },
+      {
+        path: 'admin',
+        canActivate: [administratorGuard],
+        children: [
+          {
+            path: 'people',
+            title: 'People',
+            loadComponent: () => import('./people/people-page.ts').then((m) => m.PeoplePage),
+          },
+          {
+            path: 'audit',
+            title: 'Audit trail',
+            loadComponent: () => import('./people/audit-page.ts').then((m) => m.AuditPage),
+          },
+          {
+            path: 'mailbox',
+            title: 'Mailbox',
+            loadComponent: () => import('./people/mailbox-page.ts').then((m) => m.MailboxPage),
+          },
+        ],
+      },
       {
         path: '**',
         title: 'Not found',

@@ -21,8 +21,9 @@ export type RequestOf<R extends Route> = (R extends { params: infer P }
 /** The route's reply after parsing; null where it has none. */
 export type ReplyOf<R extends Route> = R['reply'] extends z.ZodType ? z.output<R['reply']> : null;
 
-export interface Answer<R extends Route> {
-  readonly value: ReplyOf<R>;
+/** A parsed reply with its version. */
+export interface Answer<Value> {
+  readonly value: Value;
   /** Hand it back as `etag` of the next guarded call; empty where the resource has none. */
   readonly etag: string;
 }
@@ -47,7 +48,7 @@ export class ApiClient {
   async send<R extends Route>(
     route: R,
     ...[request]: LooseRequest extends RequestOf<R> ? [RequestOf<R>?] : [RequestOf<R>]
-  ): Promise<Answer<R>> {
+  ): Promise<Answer<ReplyOf<R>>> {
     const { params, query, body, etag } = (request ?? {}) as LooseRequest;
     try {
       const response = await firstValueFrom(

@@ -19,7 +19,7 @@ function outline(tag: string, a: Attributes): string {
   const n = (name: string) => Number(a[name] ?? 0);
   switch (tag) {
     case 'path':
-      return String(a['d']);
+      return `M0 0${a['d']}`; // a leading `m` is relative to where the element before it ended
     case 'line':
       return `M${n('x1')} ${n('y1')}L${n('x2')} ${n('y2')}`;
     case 'polyline':

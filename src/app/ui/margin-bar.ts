@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, input } from '@angular/co
 import type { CriterionStatus } from '../../../shared/checks/evaluation.ts';
 import { marginBarShape, marginOffsetPx } from './margin-scale.ts';
 
-const ROOM_PX = 10;
+const ROOM_PX = 12;
 const ARROW_PX = 6;
 
 /**
