@@ -1,4 +1,5 @@
 import type { Routes } from '@angular/router';
+import { unsentGuard } from './review/unsent-guard.ts';
 import {
   administratorGuard,
   signedInGuard,
@@ -116,6 +117,17 @@ export const routes: Routes = [
             loadComponent: () => import('./people/mailbox-page.ts').then((m) => m.MailboxPage),
           },
         ],
+      },
+      {
+        path: 'p/:projectId/s/:stageId/r/:revisionId/check',
+        title: 'Check',
+        canDeactivate: [unsentGuard],
+        loadComponent: () => import('./review/check-page.ts').then((m) => m.CheckPage),
+      },
+      {
+        path: 'p/:projectId/s/:stageId/r/:revisionId/lock',
+        title: 'Approve',
+        loadComponent: () => import('./review/lock-page.ts').then((m) => m.LockPage),
       },
       {
         path: '**',
