@@ -8,5 +8,12 @@ export default defineConfig({
       compilerOptions: { experimentalDecorators: true, useDefineForClassFields: false },
     },
   },
-  test: { include: ['spec/**/*.spec.ts'], environment: 'node', pool: 'forks', maxWorkers: 2 },
+  test: {
+    include: ['spec/**/*.spec.ts'],
+    environment: 'node',
+    pool: 'forks',
+    maxWorkers: 2,
+    testTimeout: 30_000,
+    hookTimeout: 30_000,
+  },
 });

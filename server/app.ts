@@ -11,6 +11,7 @@ import { requestLog } from './http/request-log.ts';
 import { requireJson } from './http/require-json.ts';
 import { webClient } from './http/web-client.ts';
 import { allEndpoints } from './routers.ts';
+import { openApiEndpoint } from './openapi-endpoint.ts';
 import type { Services } from './services.ts';
 import { sessions } from './session/sessions.ts';
 
@@ -34,7 +35,11 @@ export function createApp(services: Services, secrets: readonly string[], logger
   app.use(browserDefences(config.secure), compression(), violationReports());
 
   const router = Router({ caseSensitive: true });
-  mount(router, allEndpoints(services), config.now);
+  const endpoints = allEndpoints(services);
+  mount(router, [...endpoints, openApiEndpoint(endpoints)], {
+    now: config.now,
+    local: !config.secure, // plain http listens on loopback only
+  });
   app.use('/api', beforeApi(services, secrets));
   app.use(router);
   app.use('/api', () => {

@@ -1,5 +1,5 @@
 import { readScryptCost, type ScryptCost } from './session/scrypt-cost.ts';
-import { type Limits, SHIPPED_LIMITS } from './http/limits.ts';
+import { type Limits, readLimits } from './http/limits.ts';
 import { StartRefusal } from './start-refusal.ts';
 
 /** Everything that can be set from outside, read once at start. */
@@ -57,7 +57,7 @@ export function readConfig(env: NodeJS.ProcessEnv, webFolder: string): Config {
     mailFrom: env['SINKWELL_MAIL_FROM'] ?? `sinkwell@${url.hostname}`,
     logLevel: readLogLevel(env['SINKWELL_LOG_LEVEL'] ?? 'info'),
     scrypt: readScryptCost(env['SINKWELL_SCRYPT_COST']),
-    limits: SHIPPED_LIMITS,
+    limits: readLimits(env['SINKWELL_REQUESTS_PER_MINUTE']),
     now: Date.now,
   };
 }

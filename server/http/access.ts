@@ -13,15 +13,18 @@ export type Access =
   | 'public'
   | 'signed-in'
   | 'administrator'
-  | 'administrator-or-loopback'
+  | 'administrator-or-local'
   | { readonly project: 'member' | 'manager' | readonly ProjectRole[] };
 
-/** @throws {ApiError} not-signed-in or not-permitted */
-export function requireAccess(access: Access, actor: Actor | null, fromLoopback: boolean): void {
+/**
+ * @param local whether the server can be reached from this machine only
+ * @throws {ApiError} not-signed-in or not-permitted
+ */
+export function requireAccess(access: Access, actor: Actor | null, local: boolean): void {
   if (access === 'public') return;
-  if (access === 'administrator-or-loopback' && fromLoopback) return;
+  if (access === 'administrator-or-local' && local) return;
   if (actor === null) throw new ApiError('not-signed-in', 'Sign in to go on.');
-  const administratorOnly = access === 'administrator' || access === 'administrator-or-loopback';
+  const administratorOnly = access === 'administrator' || access === 'administrator-or-local';
   if (administratorOnly && !actor.administrator) {
     throw new ApiError('not-permitted', 'Only an administrator can do this.', {
       rule: 'administrator',

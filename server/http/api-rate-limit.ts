@@ -8,7 +8,7 @@ const IPV6_PREFIX = 56;
 export function apiRateLimit(perMinute: number): RequestHandler {
   return rateLimit({
     ...{ windowMs: 60_000, limit: perMinute, standardHeaders: 'draft-8', legacyHeaders: false },
-    keyGenerator: (request) => request.user?.id ?? addressKey(request.ip),
+    keyGenerator: (request) => request.user?.id ?? ipKeyGenerator(request.ip ?? '', IPV6_PREFIX),
     handler: (_request, response, next) => {
       const header = Number(response.getHeader('Retry-After'));
       next(

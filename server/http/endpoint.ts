@@ -10,7 +10,7 @@ type Parsed<S> = S extends z.ZodType ? z.output<S> : undefined;
 
 /** One request, parsed and permitted. It is an {@link Act}: hand it to the service as such. */
 export interface Call<R extends Route, A extends Access> extends Act<
-  A extends 'public' | 'administrator-or-loopback' ? Actor | null : Actor
+  A extends 'public' | 'administrator-or-local' ? Actor | null : Actor
 > {
   readonly params: R extends { params: infer S } ? Parsed<S> : undefined;
   readonly query: R extends { query: infer S } ? Parsed<S> : undefined;

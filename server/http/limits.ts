@@ -1,3 +1,5 @@
+import { StartRefusal } from '../start-refusal.ts';
+
 /** How often one may ask. Suites put smaller or larger figures in. */
 export interface Limits {
   /** Requests a minute to the API: by person, or by address when signed out. */
@@ -25,3 +27,14 @@ export const SHIPPED_LIMITS: Limits = {
   signInFailuresInARow: 100,
   linkMailsPerHour: 10,
 };
+
+/**
+ * @param perMinute requests to the API for one person; undefined: as shipped
+ * @throws {StartRefusal} if it is no number of 10 or more
+ */
+export function readLimits(perMinute: string | undefined): Limits {
+  if (perMinute === undefined || perMinute === '') return SHIPPED_LIMITS;
+  const apiPerMinute = /^\d{2,6}$/.test(perMinute) ? Number(perMinute) : NaN;
+  if (apiPerMinute >= 10) return { ...SHIPPED_LIMITS, apiPerMinute };
+  throw new StartRefusal('SINKWELL_REQUESTS_PER_MINUTE: expected a number from 10 to 999999');
+}

@@ -12,6 +12,14 @@ import { etagOf, parseIfMatch } from './versioned.ts';
 import type { Route } from '../../shared/contract/route.ts';
 import type { Access } from './access.ts';
 
+/** What the routes know of where they run. */
+export interface Surroundings {
+  /** UTC, ms. */
+  readonly now: () => number;
+  /** Whether the server can be reached from this machine only. */
+  readonly local: boolean;
+}
+
 const declared = new WeakMap<RequestHandler, Endpoint>();
 
 /** The declaration behind a handler found in a router; undefined for one that was put there by hand. */
@@ -20,10 +28,14 @@ export function endpointOf(handler: RequestHandler): Endpoint | undefined {
 }
 
 /** Registers the endpoints; the only place where routes get into the router. */
-export function mount(router: Router, endpoints: readonly Endpoint[], now: () => number): void {
+export function mount(
+  router: Router,
+  endpoints: readonly Endpoint[],
+  surroundings: Surroundings,
+): void {
   for (const item of endpoints) {
     const handler: RequestHandler = async (request, response) => {
-      const call = toCall(item, request, response, now());
+      const call = toCall(item, request, response, surroundings);
       send(item.route, response, await item.handle(call));
     };
     declared.set(handler, item);
@@ -36,12 +48,12 @@ function toCall(
   { route, access }: Endpoint,
   request: Request,
   response: Response,
-  atMs: number,
+  surroundings: Surroundings,
 ): Call<Route, Access> {
   const actor: Actor | null = request.user ?? null;
-  requireAccess(access, actor, isLoopback(request.socket.remoteAddress));
+  requireAccess(access, actor, surroundings.local);
   return {
-    ...{ actor, requestId: requestIdOf(request), atMs },
+    ...{ actor, requestId: requestIdOf(request), atMs: surroundings.now() },
     params: readInput(route.params, { ...request.params }, '/params'),
     query: readInput(route.query, readQuery(request.originalUrl), '/query'),
     body: readInput(route.body, bodyOf(route, request), ''),
@@ -70,8 +82,4 @@ function send(route: Route, response: Response, answer: Answer<Route>): void {
   }
   // our own mistake here is a 500, not the caller's 422
   response.status(route.status ?? 200).json(route.reply.parse(answer.body));
-}
-
-export function isLoopback(address: string | undefined): boolean {
-  return address === '127.0.0.1' || address === '::1' || address === '::ffff:127.0.0.1';
 }

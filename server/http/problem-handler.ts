@@ -67,7 +67,7 @@ function log(request: Request, { code, message, details }: ApiError, error: unkn
   }
   request.log.warn(
     {
-      ...{ event: 'refused', code, rule: details.rule, personId: request.user?.id },
+      ...{ event: 'refused', problem: code, rule: details.rule, personId: request.user?.id },
       route: `${request.method} ${request.path.slice(0, 256)}`,
       fields: details.fields?.map(({ pointer }) => pointer),
     },

@@ -6,7 +6,10 @@ export const requireJson: RequestHandler = (request, _response, next) => {
   const hasBody =
     request.get('Transfer-Encoding') !== undefined ||
     (request.get('Content-Length') ?? '0') !== '0';
-  if (hasBody && !/^application\/json\s*(;|$)/i.test(request.get('Content-Type') ?? '')) {
+  if (
+    hasBody &&
+    !/^application\/json(\s*;\s*charset="?utf-8"?)?\s*$/i.test(request.get('Content-Type') ?? '')
+  ) {
     throw new ApiError('unsupported-type', 'Send application/json.');
   }
   next();

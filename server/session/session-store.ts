@@ -54,16 +54,15 @@ export class SessionStore extends session.Store {
 
   override set(sid: string, data: SessionData, done: Done = () => undefined): void {
     const personId = data.passport?.user ?? null;
-    const changes = { personId, data, lastSeenAtMs: this.now() };
+    const agent = data.agent ?? '';
+    const changes = { personId, data, agent, lastSeenAtMs: this.now() };
     const idHash = hashOf(sid);
     const stored = this.database.transaction(async (manager) => {
       const row = await manager.findOneBy(SessionEntity, { idHash });
       if (row) await manager.save(Object.assign(row, changes));
       else if (!this.#known.has(data)) {
         const made = { idHash, publicId: randomUUID(), startedAtMs: this.now() };
-        await manager.save(
-          manager.create(SessionEntity, { ...made, agent: data.agent ?? '', ...changes }),
-        );
+        await manager.save(manager.create(SessionEntity, { ...made, ...changes }));
       }
     });
     settle(stored, done);

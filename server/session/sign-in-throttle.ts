@@ -1,4 +1,5 @@
 import { RateLimiterMemory } from 'rate-limiter-flexible';
+import { addressKey } from '../http/api-rate-limit.ts';
 import { ApiError } from '../http/api-error.ts';
 import type { Limits } from '../http/limits.ts';
 
@@ -26,7 +27,8 @@ export class SignInThrottle {
    *
    * @throws {ApiError} too-many-requests while a wait runs
    */
-  async begin(email: string, address: string): Promise<void> {
+  async begin(email: string, ip: string): Promise<void> {
+    const address = addressKey(ip);
     const key = `${email} ${address}`;
     const running = await this.#waits.get(key);
     if (running) throw tooMany(running.msBeforeNext);
@@ -42,7 +44,8 @@ export class SignInThrottle {
     await this.#waits.block(key, Math.min(this.limits.signInFirstWaitSec * 2 ** beyond, windowSec));
   }
 
-  async succeeded(email: string, address: string): Promise<void> {
+  async succeeded(email: string, ip: string): Promise<void> {
+    const address = addressKey(ip);
     const key = `${email} ${address}`;
     await this.#misses.delete(key);
     await this.#waits.delete(key);

@@ -25,6 +25,8 @@ export interface TestPerson {
 
 /** A whole server on a free port of loopback, over a database file in a temp folder of its own. */
 export class TestServer {
+  /** Of every test person. */
+  readonly password = PASSWORD;
   #clockMs = START_MS;
 
   private constructor(
@@ -99,6 +101,28 @@ export class TestServer {
       ),
     );
     return { id: person.id, name: person.name, email: person.email };
+  }
+
+  /** A client without any cookie. */
+  stranger(): TestClient {
+    return new TestClient(this.url);
+  }
+
+  /** The mails kept so far, once everything queued has been tried; newest first. */
+  async mails(): Promise<{ to: string; subject: string; text: string }[]> {
+    this.services.outbox.wake();
+    await this.services.outbox.settled();
+    return (await this.services.mailbox?.list()) ?? [];
+  }
+
+  /** Has a link mailed and takes the token out of the newest mail to the person. */
+  async tokenFor(
+    person: { readonly email: string },
+    ask: (client: TestClient) => Promise<void>,
+  ): Promise<string> {
+    await ask(await this.visit());
+    const mail = (await this.mails()).find(({ to }) => to.includes(`<${person.email}>`));
+    return /#([\w-]{43})/.exec(mail?.text ?? '')?.[1] ?? '';
   }
 
   /** A browser of its own, signed out, with its XSRF token. */
