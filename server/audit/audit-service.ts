@@ -47,7 +47,11 @@ function matching(manager: EntityManager, search: string | undefined) {
   );
 }
 
-/** The contract's schema leaves out what readers do not get. */
 function toLine(line: AuditLineEntity): AuditLine {
-  return { ...line };
+  const { sequence, atMs, who, whoId, action, objectKind, objectId, objectName } = line;
+  const { projectId, summary, detail, hash } = line;
+  return {
+    ...{ sequence, atMs, who, whoId, action, objectKind, objectId, objectName },
+    ...{ projectId, summary, detail, hash },
+  };
 }

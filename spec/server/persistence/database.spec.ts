@@ -131,7 +131,7 @@ describe('the database door', () => {
 
   it('can undo every migration and do it again', async () => {
     const writer = await openWriter(file);
-    for (let i = 0; i < migrations.length; i++) await writer.undoLastMigration();
+    for (const _ of migrations) await writer.undoLastMigration();
     const left: { name: string }[] = await writer.query(
       `SELECT name FROM sqlite_schema WHERE name NOT LIKE 'sqlite_%' AND name <> 'migrations'`,
     );
