@@ -1,4 +1,5 @@
 import { auditEndpoints } from './audit/audit-endpoints.ts';
+import { bomNoteEndpoints } from './bom-notes/bom-note-endpoints.ts';
 import { checkEndpoints } from './checks/check-endpoints.ts';
 import type { Endpoint } from './http/endpoint.ts';
 import { policyEndpoints } from './policies/policy-endpoints.ts';
@@ -22,5 +23,6 @@ export function allEndpoints(services: Services): Endpoint[] {
     ...stageEndpoints(services),
     ...revisionEndpoints(services),
     ...checkEndpoints(services),
+    ...bomNoteEndpoints(services),
   ];
 }

@@ -5,6 +5,7 @@ import { SessionEntity } from '../session/session-entity.ts';
 import { OneTimeTokenEntity } from '../users/one-time-token-entity.ts';
 import { PersonEntity } from '../users/person-entity.ts';
 import { WorkspaceEntity } from '../users/workspace-entity.ts';
+import { BomNoteEntity } from '../bom-notes/bom-note-entity.ts';
 import { CheckRecordEntity } from '../checks/check-record-entity.ts';
 import { FindingEntity } from '../checks/finding-entity.ts';
 import { FindingEventEntity } from '../checks/finding-event-entity.ts';
@@ -30,6 +31,7 @@ export const entities = [
   PersonEntity,
   SessionEntity,
   WorkspaceEntity,
+  BomNoteEntity,
   CheckRecordEntity,
   FindingEntity,
   FindingEventEntity,
