@@ -19,11 +19,11 @@ export function partEndpoints({ database }: { readonly database: Database }): En
     endpoint(readPartRevision, 'signed-in', ({ params }) =>
       parts.readRevision(params.partRevisionId),
     ),
-    endpoint(createPart, 'signed-in', (call) => parts.create(call, call.body)),
-    endpoint(revisePart, 'signed-in', (call) =>
+    endpoint(createPart, { anyProject: ['designer'] }, (call) => parts.create(call, call.body)),
+    endpoint(revisePart, { anyProject: ['designer'] }, (call) =>
       parts.revise(call, call.params.partId, call.ifMatch, call.body),
     ),
-    endpoint(verifyPart, 'signed-in', (call) =>
+    endpoint(verifyPart, { anyProject: ['checker'] }, (call) =>
       parts.verify(call, call.params.partRevisionId, call.body),
     ),
   ];

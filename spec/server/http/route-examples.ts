@@ -1,7 +1,8 @@
 import { randomUUID } from 'node:crypto';
 import type { Endpoint } from '../../../server/http/endpoint.ts';
-import { projectFields, type ProjectFloor } from '../project-floor.ts';
+import { done, projectFields, type ProjectFloor } from '../project-floor.ts';
 import { relayDriver } from '../relay-driver.ts';
+import type { Reply } from '../test-client.ts';
 import { PASSWORD } from '../test-server.ts';
 
 export const keyOf = ({ route }: Endpoint): string => `${route.method} ${route.path}`;
@@ -16,6 +17,14 @@ const allNull = (names: string): object =>
 const DESIGNATORS = allNull(
   'baseResistor shuntResistor pullUp speedUpCapacitor load clamp clampZener drive preDriver preBaseResistor preShuntResistor',
 );
+const partFields = (partNumber: string): object => ({
+  record: {
+    ...{ kind: 'transistor', partNumber, confidence: 'high', polarity: 'npn' },
+    sources: [{ of: 'all', source: 'Own measurement' }],
+    limits: { vceoV: 40, icA: 0.2, powerW: 0.625, tjMaxDegC: 150 },
+  },
+  comment: 'Entered from the data sheet.',
+});
 const PARTS = allNull('transistor preDriver load drive clamp');
 
 /** A well-formed body for each route that takes one. A route that is missing here fails the matrix. */
@@ -52,6 +61,10 @@ const BODIES: Record<string, () => unknown> = {
   'POST /api/revisions/:revisionId/findings': () => ({
     ...{ subject: { kind: 'criterion', id: 'forced-beta' }, title: 'Odd', text },
   }),
+  'POST /api/parts': () => partFields(`OWN-${randomUUID().slice(0, 8)}`),
+  'POST /api/parts/:partId/revisions': () => partFields('OWN-1'),
+  'POST /api/part-revisions/:partRevisionId/verification': () => ({ document: 'Sheet', note: '' }),
+  'POST /api/projects/:projectId/bom-notes': () => ({ revisionIds: [NO_ID] }),
   ...Object.fromEntries(
     ['answer', 'closure', 'reopening'].map((act) => [
       `POST /api/revisions/:revisionId/findings/:findingId/${act}`,
@@ -71,14 +84,33 @@ export function bodyFor(endpoint: Endpoint): unknown {
   return make();
 }
 
-/** The path with ids filled in; a name that is not among them gets an id nobody has. */
-export function pathFor(endpoint: Endpoint, ids: Ids): string {
-  const filled = endpoint.route.path.replace(/:(\w+)/g, (_, name: string) => ids[name] ?? NO_ID);
+/** The path with ids filled in, as far as the caller could want it; a name that is not among them gets an id nobody has. */
+export function pathFor(endpoint: Endpoint, ids: Ids, caller = ''): string {
+  const state = STATES[`${keyOf(endpoint)} ${caller}`] ?? STATES[keyOf(endpoint)];
+  const own = state === undefined ? ids : { ...ids, revisionId: ids[`${state}Id`] ?? NO_ID };
+  const filled = endpoint.route.path.replace(/:(\w+)/g, (_, name: string) => own[name] ?? NO_ID);
   return filled + (QUERIES[keyOf(endpoint)] ?? '');
 }
 
-/** Ids of a project with one draft, one revision in check and a finding on it. */
+/** The state in which a route's own rule decides, and not the revision's state; in check where none is named. */
+const STATES: Record<string, 'draft' | 'checked'> = {
+  'PUT /api/revisions/:revisionId': 'draft',
+  'POST /api/revisions/:revisionId/return approver': 'checked',
+  'POST /api/revisions/:revisionId/submission': 'draft',
+  'POST /api/revisions/:revisionId/withdrawal': 'draft',
+  'GET /api/revisions/:revisionId/lock': 'checked',
+  'POST /api/revisions/:revisionId/lock': 'checked',
+};
+
+/** Ids of a project with a revision in each state, a finding, a part of the library and an issued note. */
 export async function idsOf(floor: ProjectFloor): Promise<Ids> {
+  const draft = await floor.at('draft', { reference: 'Q901' });
+  const checked = await floor.at('checked', { reference: 'Q902' });
+  const locked = await floor.at('locked', { reference: 'Q903' });
+  const note = await floor.exporter.client.post(`/api/projects/${floor.projectId}/bom-notes`, {
+    revisionIds: [idOf(locked)],
+  });
+  const part = await floor.designer.client.post('/api/parts', partFields(`P-${floor.projectId}`));
   const inCheck = await floor.at('in-check');
   const raised = await floor.act(floor.checker, inCheck, '/findings', {
     ...{ subject: { kind: 'criterion', id: 'forced-beta' }, title: 'Odd', text },
@@ -90,6 +122,13 @@ export async function idsOf(floor: ProjectFloor): Promise<Ids> {
   };
   return {
     ...{ projectId: floor.projectId, revisionId: id, stageId, findingId: findings[0]!.id },
+    ...{ noteId: idOf(done(note)), partId: idOf(done(part)) },
+    partRevisionId: (part.body as { latest: { id: string } }).latest.id,
+    ...{ draftId: idOf(draft), checkedId: idOf(checked) },
     ...{ personId: floor.outsider.id, sessionId: NO_ID, format: 'csv' },
   };
+}
+
+function idOf(reply: Reply): string {
+  return (reply.body as { id: string }).id;
 }
