@@ -46,6 +46,10 @@ export const routes: Routes = [
     children: [
       { path: '', pathMatch: 'full', redirectTo: 'desk' },
       {
+        path: 'p/:projectId/s',
+        loadChildren: () => import('./stages/stage-routes.ts').then((m) => m.stageRoutes),
+      },
+      {
         path: 'desk',
         title: 'My desk',
         loadComponent: () => import('./desk/desk-page.ts').then((m) => m.DeskPage),

@@ -183,5 +183,3 @@ export function iconOutline(name: IconName): string {
   outlines.set(name, outline);
   return outline;
 }
-
-export const ICON_NAMES = [...Object.keys(GENERIC), ...Object.keys(DOMAIN)] as readonly IconName[];

@@ -1,0 +1,85 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  input,
+  linkedSignal,
+  output,
+  signal,
+} from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { MatButtonToggle, MatButtonToggleGroup } from '@angular/material/button-toggle';
+import { figuresAtCorner, nominalFigures } from '../../../shared/checks/corner-figures.ts';
+import type { CornerFigures, Evaluation } from '../../../shared/checks/evaluation.ts';
+import type { Designators } from '../../../shared/contract/revision.ts';
+import { describeSchematic } from '../../../shared/report/schematic/describe-schematic.ts';
+import type { PartKey } from '../../../shared/report/schematic/drawing.ts';
+import { drawSchematic } from '../../../shared/report/schematic/schematic.ts';
+import type { StageInput } from '../../../shared/stage/stage-input.ts';
+import { SchematicView } from '../schematic/schematic-view.ts';
+import { Icon } from '../ui/icon.ts';
+import { criterionName } from './ladder-model.ts';
+import { storedResistorStyle, storeResistorStyle, type ResistorStyle } from './resistor-style.ts';
+
+export const NOMINAL = 'nominal';
+const DECIDED_AT_FULL_CURRENT: readonly string[] = ['overdrive-factor', 'forced-beta'];
+
+/** The circuit with the figures of one corner, as a drawing or as text. */
+@Component({
+  selector: 'app-circuit-panel',
+  imports: [Icon, MatButton, MatButtonToggle, MatButtonToggleGroup, SchematicView],
+  templateUrl: './circuit-panel.html',
+  styleUrl: './circuit-panel.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class CircuitPanel {
+  readonly stage = input.required<StageInput>();
+  readonly evaluation = input.required<Evaluation>();
+  readonly designators = input.required<Designators>();
+  readonly compact = input(false);
+  readonly selected = input<PartKey | null>(null);
+  /** The criterion whose worst corner is shown, or `nominal`. */
+  readonly at = input.required<string>();
+  readonly atChange = output<string>();
+  readonly chosen = output<PartKey>();
+
+  protected readonly nominal = NOMINAL;
+  protected readonly asText = signal(false);
+  protected readonly style = linkedSignal<ResistorStyle>(() => storedResistorStyle());
+  protected readonly corners = computed(() =>
+    this.evaluation()
+      .criteria.filter(({ corner }) => corner !== null)
+      .map(({ id }) => ({ id, text: `${criterionName(id)}, worst corner` })),
+  );
+  /** The stage as judged: with the recommended resistor where the field is empty. */
+  private readonly judged = computed<StageInput>(() => {
+    const stage = this.stage();
+    const valueOhm = stage.baseResistor.valueOhm ?? this.evaluation().baseResistorOhm;
+    return { ...stage, baseResistor: { ...stage.baseResistor, valueOhm } };
+  });
+  private readonly figures = computed<CornerFigures | null>(() => {
+    const { criteria, corners } = this.evaluation();
+    const stage = this.judged();
+    if (corners === 0 || stage.baseResistor.valueOhm === null) return null;
+    const found = criteria.find(({ id }) => id === this.at())?.corner ?? null;
+    // Saturation is decided as if VCE were zero: the drawing shows the VCE(sat) there will be.
+    const asDecided = DECIDED_AT_FULL_CURRENT.includes(this.at());
+    const corner = found !== null && asDecided ? { ...found, vceSat: 'max' } : found;
+    return corner === null ? nominalFigures(stage) : figuresAtCorner(stage, corner);
+  });
+  protected readonly drawing = computed(() =>
+    drawSchematic(this.judged(), this.figures(), this.designators(), {
+      layout: this.compact() ? 'compact' : 'wide',
+      resistor: this.style(),
+    }),
+  );
+  protected readonly lines = computed(() => {
+    const drawing = this.drawing();
+    return drawing === null ? [] : describeSchematic(drawing);
+  });
+
+  protected setStyle(style: ResistorStyle): void {
+    this.style.set(style);
+    storeResistorStyle(style);
+  }
+}

@@ -1,0 +1,57 @@
+import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
+import { Designators } from '../../../shared/contract/revision.ts';
+import type { StageInput } from '../../../shared/stage/stage-input.ts';
+import { Icon } from '../ui/icon.ts';
+
+type Key = keyof Designators;
+
+const NAMES: Readonly<Partial<Record<Key, string>>> = {
+  baseResistor: 'Base resistor',
+  shuntResistor: 'Base–emitter resistor',
+  pullUp: 'Pull-up',
+  speedUpCapacitor: 'Speed-up capacitor',
+  load: 'Load',
+  clamp: 'Clamp',
+  clampZener: 'Zener of the clamp',
+  drive: 'Logic output',
+};
+
+/** What the parts around the transistor are called on the board's drawing. */
+@Component({
+  selector: 'app-designator-group',
+  imports: [Icon],
+  templateUrl: './designator-group.html',
+  styleUrl: './designator-group.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class DesignatorGroup {
+  readonly designators = input.required<Designators>();
+  readonly stage = input.required<StageInput>();
+  readonly readOnly = input(false);
+  readonly changed = output<{ designators: Designators; field: string }>();
+
+  protected readonly wrong = signal<Key | null>(null);
+  protected readonly rows = computed(() => {
+    const { shuntResistor, drive, speedUpCapacitorF, clamp } = this.stage();
+    const there: Partial<Record<Key, boolean>> = {
+      shuntResistor: shuntResistor !== null,
+      pullUp: drive.kind === 'open-collector',
+      speedUpCapacitor: speedUpCapacitorF !== null,
+      clamp: clamp.kind !== 'none',
+      clampZener: clamp.kind === 'diode-zener',
+    };
+    return (Object.keys(NAMES) as Key[])
+      .filter((key) => there[key] ?? true)
+      .map((key) => ({ key, name: NAMES[key] ?? key, value: this.designators()[key] }));
+  });
+
+  /** On leaving the field: an empty one means none is given. */
+  protected enter(key: Key, text: string): void {
+    const candidate = text.trim() === '' ? null : text.trim();
+    const parsed = Designators.shape[key].safeParse(candidate);
+    this.wrong.set(parsed.success ? null : key);
+    if (parsed.success && parsed.data !== this.designators()[key]) {
+      this.changed.emit({ designators: { ...this.designators(), [key]: parsed.data }, field: key });
+    }
+  }
+}

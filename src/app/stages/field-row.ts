@@ -1,0 +1,46 @@
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { ReactiveFormsModule, type FormControl } from '@angular/forms';
+import { Icon } from '../ui/icon.ts';
+import { QuantityField } from '../ui/quantity-field.ts';
+import { QuantitySpanField } from '../ui/quantity-span-field.ts';
+import { SymbolText } from '../ui/symbol-text.ts';
+import type { FieldSpec } from './field-spec.ts';
+import { rangeLine, valueText } from './field-words.ts';
+import { fieldSpec, type FieldPath } from './stage-fields.ts';
+
+/** One row of the sheet's form: label and range at the left, the field at the right, faults below both. */
+@Component({
+  selector: 'app-field-row',
+  imports: [Icon, QuantityField, QuantitySpanField, ReactiveFormsModule, SymbolText],
+  templateUrl: './field-row.html',
+  styleUrl: './field-row.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  host: { '[class.selected]': 'selected()', '[class.read-only]': 'readOnly()' },
+})
+export class FieldRow {
+  readonly path = input.required<FieldPath>();
+  readonly control = input.required<FormControl<unknown>>();
+  /** Changes with every value, so that read-only text follows. */
+  readonly value = input.required<unknown>();
+  readonly label = input.required<string>();
+  /** Stands behind the label: `RB, R30`. */
+  readonly designator = input<string | null>(null);
+  readonly selected = input(false);
+  readonly readOnly = input(false);
+  readonly fault = input<string | null>(null);
+  readonly steps = input<readonly number[]>([]);
+  /** In place of the field's own range: the policy's bounds for a preferred value. */
+  readonly range = input<string | null>(null);
+
+  protected readonly spec = computed<FieldSpec>(() => fieldSpec(this.path()));
+  protected readonly id = computed(() => fieldId(this.path()));
+  protected readonly fullLabel = computed(() => {
+    const designator = this.designator();
+    return designator === null ? this.label() : `${this.label()}, ${designator}`;
+  });
+  protected readonly hint = computed(() => this.range() ?? rangeLine(this.spec()));
+  protected readonly text = computed(() => valueText(this.path(), this.value()));
+}
+
+/** The id of a field's control on the page. */
+export const fieldId = (path: FieldPath): string => `field-${path.replaceAll('/', '-')}`;

@@ -1,0 +1,101 @@
+import type { CriterionStatus } from '../../../shared/checks/evaluation.ts';
+import { CRITERIA, type CriterionId } from '../../../shared/checks/criteria.ts';
+import type { Candidate, Sizing } from '../../../shared/sizing/sizing.ts';
+import { formatQuantity } from '../../../shared/units/engineering-notation.ts';
+
+/** One rung: a preferred value with its smallest margin. */
+export interface Rung {
+  readonly valueOhm: number;
+  /** Figure without its unit: all rungs of a ladder share one where they can. */
+  readonly figure: string;
+  readonly text: string;
+  readonly verdict: CriterionStatus;
+  /** Height of the bar, 0 to 1: square root, full at 50 % margin; 0 where not met. */
+  readonly height: number;
+  readonly margin: number | null;
+  readonly worst: string | null;
+  readonly inWindow: boolean;
+  readonly recommended: boolean;
+  readonly inUse: boolean;
+}
+
+/** Neighbours of one verdict, whose word stands once below them. */
+export interface RungGroup {
+  readonly verdict: CriterionStatus;
+  readonly from: number;
+  readonly count: number;
+}
+
+export interface Ladder {
+  readonly rungs: readonly Rung[];
+  readonly groups: readonly RungGroup[];
+  /** First and last rung of the window, or null where it is empty. */
+  readonly window: { readonly from: number; readonly to: number } | null;
+  readonly lowerEnd: string;
+  readonly upperEnd: string;
+}
+
+const FULL_MARGIN = 0.5;
+/** Height of the 10 % line on the scale of the bars. */
+export const BAND_HEIGHT = Math.sqrt(0.1 / FULL_MARGIN);
+
+const near = (a: number | null, b: number | null) =>
+  a !== null && b !== null && Math.abs(a - b) <= 1e-6 * Math.abs(b);
+
+/** What a criterion is called on the sheet; its id where it has no name. */
+export const criterionName = (id: string): string =>
+  Object.hasOwn(CRITERIA, id) ? CRITERIA[id as CriterionId].name : id;
+
+/** The window as it is drawn. A value in use that is no candidate has no rung. */
+export function ladder(sizing: Sizing, inUseOhm: number | null): Ladder {
+  const rungs = sizing.candidates.map((candidate) => rungOf(candidate, sizing, inUseOhm));
+  const from = rungs.findIndex(({ inWindow }) => inWindow);
+  const to = rungs.findLastIndex(({ inWindow }) => inWindow);
+  return {
+    rungs,
+    groups: groupsOf(rungs),
+    window: from < 0 ? null : { from, to },
+    lowerEnd: endText('Lower end', sizing.setBy.min),
+    upperEnd: endText('Upper end', sizing.setBy.max),
+  };
+}
+
+function rungOf(candidate: Candidate, sizing: Sizing, inUseOhm: number | null): Rung {
+  const { valueOhm, margin, verdict, worst } = candidate;
+  const text = formatQuantity(valueOhm, 'Ohm');
+  const [figure = text, unit = 'Ω'] = text.split('\u00a0');
+  const met = margin !== null && margin > 0 && verdict !== 'open';
+  return {
+    valueOhm,
+    text,
+    figure: unit === 'Ω' ? figure : `${figure}${unit.replace('Ω', '')}`,
+    verdict,
+    height: met ? Math.sqrt(Math.min(1, margin / FULL_MARGIN)) : 0,
+    margin,
+    worst: worst === null ? null : criterionName(worst),
+    inWindow:
+      sizing.rbMinOhm !== null &&
+      sizing.rbMaxOhm !== null &&
+      valueOhm >= sizing.rbMinOhm * (1 - 1e-9) &&
+      valueOhm <= sizing.rbMaxOhm * (1 + 1e-9),
+    recommended: near(sizing.recommendedOhm, valueOhm),
+    inUse: near(inUseOhm, valueOhm),
+  };
+}
+
+function groupsOf(rungs: readonly Rung[]): readonly RungGroup[] {
+  const groups: { verdict: CriterionStatus; from: number; count: number }[] = [];
+  rungs.forEach(({ verdict }, index) => {
+    const last = groups.at(-1);
+    if (last?.verdict === verdict) last.count += 1;
+    else groups.push({ verdict, from: index, count: 1 });
+  });
+  return groups;
+}
+
+const endText = (end: string, criterion: string | null) =>
+  criterion === null ? '' : `${end}: ${lowered(criterionName(criterion))}`;
+
+/** Names of criteria begin with a capital, symbols keep theirs. */
+const lowered = (name: string) =>
+  /^[A-Z][a-z]/.test(name) ? name.charAt(0).toLowerCase() + name.slice(1) : name;
