@@ -77,6 +77,17 @@ export const routes: Routes = [
               import('./projects/project-stages.ts').then((m) => m.ProjectStages),
           },
           {
+            path: 'bom-note',
+            title: 'BOM note',
+            loadComponent: () => import('./bom-note/bom-note-page.ts').then((m) => m.BomNotePage),
+          },
+          {
+            path: 'bom-note/:noteId',
+            title: 'BOM note',
+            loadComponent: () =>
+              import('./bom-note/issued-note-page.ts').then((m) => m.IssuedNotePage),
+          },
+          {
             path: 'policy',
             title: 'Policy',
             loadComponent: () =>
