@@ -28,7 +28,7 @@ function pathOf({ route, access }: Endpoint): RouteConfig {
     method: route.method.toLowerCase() as RouteConfig['method'],
     path: route.path.replace(/:(\w+)/g, '{$1}'),
     summary: route.summary,
-    description: `Access: ${typeof access === 'string' ? access : `project ${String(access.project)}`}`,
+    description: `Access: ${typeof access === 'string' ? access : JSON.stringify(access)}`,
     request: {
       ...(route.params && { params: route.params as ObjectSchema }),
       ...(route.query && { query: route.query as ObjectSchema }),

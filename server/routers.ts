@@ -1,10 +1,13 @@
 import { auditEndpoints } from './audit/audit-endpoints.ts';
 import { bomNoteEndpoints } from './bom-notes/bom-note-endpoints.ts';
 import { checkEndpoints } from './checks/check-endpoints.ts';
+import { deskEndpoints } from './desk/desk-endpoints.ts';
 import type { Endpoint } from './http/endpoint.ts';
+import { partEndpoints } from './parts/part-endpoints.ts';
 import { policyEndpoints } from './policies/policy-endpoints.ts';
 import { projectEndpoints } from './projects/project-endpoints.ts';
 import { revisionEndpoints } from './revisions/revision-endpoints.ts';
+import { searchEndpoints } from './search/search-endpoints.ts';
 import type { Services } from './services.ts';
 import { sessionEndpoints } from './session/session-endpoints.ts';
 import { accountEndpoints } from './users/account-endpoints.ts';
@@ -24,5 +27,8 @@ export function allEndpoints(services: Services): Endpoint[] {
     ...revisionEndpoints(services),
     ...checkEndpoints(services),
     ...bomNoteEndpoints(services),
+    ...partEndpoints(services),
+    ...deskEndpoints(services),
+    ...searchEndpoints(services),
   ];
 }

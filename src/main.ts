@@ -1,4 +1,3 @@
-import './zod-config.ts';
 import { bootstrapApplication } from '@angular/platform-browser';
 import { appConfig } from './app/app.config.ts';
 import { App } from './app/app.ts';

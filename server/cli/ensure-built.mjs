@@ -45,7 +45,7 @@ function step(root, name, args) {
     const child = spawn(process.execPath, args, {
       cwd: root,
       stdio: ['ignore', 'pipe', 'pipe'],
-      env: { ...process.env, NG_CLI_ANALYTICS: 'false', CI: 'true' },
+      env: { ...process.env, NG_CLI_ANALYTICS: 'false' },
     });
     let output = '';
     child.stdout.on('data', (text) => (output += text));

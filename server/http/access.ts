@@ -7,6 +7,7 @@ import { ApiError } from './api-error.ts';
  *
  * `{ project }` names what the caller must be in the project the request is about: the service decides it
  * (404 for whoever is no member, 403 for a member without the role), the role matrix of the suites reads it.
+ * `{ anyProject }` asks for a role in whatever project, or for an administrator; the service decides as well.
  * An administrator counts as a member who manages, but holds no role by that.
  */
 export type Access =
@@ -14,7 +15,8 @@ export type Access =
   | 'signed-in'
   | 'administrator'
   | 'administrator-or-local'
-  | { readonly project: 'member' | 'manager' | readonly ProjectRole[] };
+  | { readonly project: 'member' | 'manager' | readonly ProjectRole[] }
+  | { readonly anyProject: readonly ProjectRole[] };
 
 /**
  * @param local whether the server can be reached from this machine only

@@ -3,12 +3,15 @@ import type { PartStanding } from '../../shared/contract/revision.ts';
 
 export interface RevisionPartStanding extends PartStanding {
   readonly revisionId: string;
+  /** When the library's newest data were entered. */
+  readonly changedAtMs: number;
 }
 
 const STANDING = `
   SELECT link."revision_id" AS "revisionId", link."role" AS "role", part."id" AS "partId",
     part."part_number" AS "partNumber", used."number" AS "revision",
     (SELECT MAX("number") FROM "part_revision" WHERE "part_id" = part."id") AS "latestRevision",
+    (SELECT MAX("created_at_ms") FROM "part_revision" WHERE "part_id" = part."id") AS "changedAtMs",
     (SELECT COUNT(*) FROM "part_verification" WHERE "part_revision_id" = used."id") AS "verified"
   FROM "revision_part" link
   JOIN "part_revision" used ON used."id" = link."part_revision_id"

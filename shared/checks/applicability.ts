@@ -1,11 +1,24 @@
-import { isJudgedLoad } from '../stage/collector-path.ts';
+import type { Load } from '../stage/load.ts';
 import type { StageInput, Topology } from '../stage/stage-input.ts';
 import type { Finding, Verdict } from './evaluation.ts';
 
-/** Polarity a topology's output transistor must have; topologies not listed are not judged yet. */
-const POLARITY: Partial<Record<Topology, 'npn' | 'pnp'>> = {
-  'low-side-npn': 'npn',
-  'high-side-pnp': 'pnp',
+interface TopologyNeeds {
+  readonly polarity: 'npn' | 'pnp';
+  readonly loads: readonly Load['kind'][];
+}
+
+/** What a topology's output transistor must be and what it can drive; topologies not listed are not judged yet. */
+const NEEDS: Partial<Record<Topology, TopologyNeeds>> = {
+  'low-side-npn': {
+    polarity: 'npn',
+    loads: ['coil', 'resistor', 'led-string', 'lamp', 'logic-input'],
+  },
+  'high-side-pnp': { polarity: 'pnp', loads: ['coil', 'resistor', 'led-string', 'lamp'] },
+  'low-side-darlington': {
+    polarity: 'npn',
+    loads: ['coil', 'resistor', 'led-string', 'lamp', 'logic-input'],
+  },
+  'level-translator': { polarity: 'npn', loads: ['logic-input'] },
 };
 
 /** Why a stage cannot be run through its corners at all, and the verdict that gives. */
@@ -16,18 +29,21 @@ export interface Obstacle {
 
 /** @returns null where the stage can be judged */
 export function obstacleTo(input: StageInput): Obstacle | null {
-  const polarity = POLARITY[input.topology];
-  if (polarity === undefined || !isJudgedLoad(input)) {
-    const what = polarity === undefined ? `topology ${input.topology}` : `load ${input.load.kind}`;
-    return {
-      verdict: 'open',
-      finding: { id: 'not-judged', text: `This version does not judge the ${what} yet.` },
-    };
+  const needs = NEEDS[input.topology];
+  const { transistor, topology, load } = input;
+  if (needs === undefined) {
+    return notJudged(`This version does not judge the topology ${topology} yet.`);
   }
-  const { transistor } = input;
-  if (transistor.polarity !== polarity) {
-    const text = `${transistor.partNumber} is ${transistor.polarity.toUpperCase()}, but ${input.topology} needs ${polarity.toUpperCase()}.`;
+  if (!needs.loads.includes(load.kind)) {
+    return notJudged(`A load of kind ${load.kind} is not judged in the topology ${topology}.`);
+  }
+  if (transistor.polarity !== needs.polarity) {
+    const text = `${transistor.partNumber} is ${transistor.polarity.toUpperCase()}, but ${topology} needs ${needs.polarity.toUpperCase()}.`;
     return { verdict: 'fail', finding: { id: 'polarity', text } };
   }
   return null;
+}
+
+function notJudged(text: string): Obstacle {
+  return { verdict: 'open', finding: { id: 'not-judged', text } };
 }

@@ -1,6 +1,7 @@
 import { isHighSide } from '../stage/drive-source.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import type { Criterion, Finding } from './evaluation.ts';
+import { largestInrushA } from './load.ts';
 import type { CornerTraits } from './stage-judge.ts';
 
 /** A finding, and whether the stage fails by it alone. */
@@ -23,6 +24,7 @@ export function remarksOn(
     ...onPartData(model, traits),
     ...onOffState(model, criteria),
     ...onClamp(model),
+    ...onLoad(model, criteria),
   ];
 }
 
@@ -110,6 +112,28 @@ function cannotTurnOff({ input, nominal }: StageModel): Remark {
     'rail-below-supply',
     `The output's high level stays below the supply, so the PNP does not turn off. Up to ${(clampA * 1e3).toPrecision(3)} mA flow through the output's clamp diode, and the load switches on while the rail is down. Put an NPN in front, or an open-drain output rated for the supply.`,
   );
+}
+
+function onLoad(model: StageModel, criteria: readonly Criterion[]): Remark[] {
+  const { input, conditions } = model;
+  const { load, supplyV } = input;
+  if (load.kind === 'led-string' && conditions.some(({ availableV }) => availableV <= 0)) {
+    return [
+      defect(
+        'leds-take-the-supply',
+        'The forward voltages of the string reach the supply at some corner: no current flows. Use fewer LEDs in series or a higher supply.',
+      ),
+    ];
+  }
+  const inrush = criteria.find(({ id }) => id === 'inrush-saturation');
+  if (load.kind !== 'lamp' || inrush?.status !== 'open') return [];
+  const worstW = (supplyV.max * largestInrushA(model)) / 4;
+  return [
+    note(
+      'lamp-inrush',
+      `The cold filament pulls the transistor out of saturation: up to ${worstW.toPrecision(3)} W for 10 to 50 ms. Only the safe-operating-area curve of the data sheet decides; preheat the lamp, limit its current or drive harder.`,
+    ),
+  ];
 }
 
 function onClamp(model: StageModel): Remark[] {

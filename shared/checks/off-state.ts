@@ -12,6 +12,7 @@ const VOLTAGE = criterionNumber('off-collector-voltage');
 const RESET = criterionNumber('reset-off');
 const RESET_CURRENT = criterionNumber('reset-off-current');
 const REVERSE = criterionNumber('reverse-base-voltage');
+const OUTPUT_HIGH = criterionNumber('output-high');
 const DRIVE_MAXIMUM = criterionNumber('drive-maximum');
 
 /** Share of the release current a switched-off coil may still carry. */
@@ -51,10 +52,12 @@ export class OffStateChecks {
     const { policy, transistor, drive } = this.model.input;
     off.solve(point);
     const vbeLimitV =
-      policy.offBaseV + this.model.part.vbeTempcoVPerK * (point.tjDegC - SHEET_DEG_C);
+      policy.offBaseV * this.model.part.junctions +
+      this.model.part.vbeTempcoVPerK * (point.tjDegC - SHEET_DEG_C);
     const currentLimitA = this.currentLimitA(point);
     if (!off.baseOpen) worst.note(BASE, off.vbeV, vbeLimitV, corner);
     worst.note(CURRENT, off.collectorA, currentLimitA, corner);
+    this.visitOutput(corner);
     const { vceoV } = transistor.limits;
     const vceLimitV = vceoV === null ? NaN : vceoV * policy.voltageDerating;
     worst.note(VOLTAGE, point.condition.supplyV, vceLimitV, corner);
@@ -72,8 +75,19 @@ export class OffStateChecks {
     }
   }
 
+  /** The high level the next inputs see: what leaks through the collector and into them drops across RC. */
+  private visitOutput(corner: number): void {
+    const { load, supplyV } = this.model.input;
+    if (load.kind !== 'logic-input') return;
+    const largestOhm = load.pullUpOhm * (1 + load.tolerance);
+    const leakA = this.off.collectorA + load.count * load.leakageA;
+    this.worst.note(OUTPUT_HIGH, supplyV.min - largestOhm * leakA, load.vihV, corner);
+  }
+
   private currentLimitA(point: OperatingPoint): number {
-    if (this.model.input.load.kind === 'coil') return this.coilLimitA;
-    return Math.max(this.model.input.policy.offCurrentA, LOAD_SHARE * point.icA);
+    const { load, policy } = this.model.input;
+    if (load.kind === 'coil') return this.coilLimitA;
+    if (load.kind === 'led-string' || load.kind === 'logic-input') return policy.offCurrentA;
+    return Math.max(policy.offCurrentA, LOAD_SHARE * point.icA);
   }
 }

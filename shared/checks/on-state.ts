@@ -70,7 +70,9 @@ export class OnStateChecks {
     worst.note(FORCED_BETA, point.forcedBeta, this.forcedBetaLimit(point), corner);
     worst.note(SATURATION, point.vceV, this.model.input.saturationLimitV ?? NaN, corner);
     worst.note(COLLECTOR, point.icA, this.collectorLimitA, corner);
-    worst.note(PEAK, point.icA, this.peakLimitA, corner);
+    if (this.model.input.load.kind !== 'lamp') {
+      worst.note(PEAK, point.icA, this.peakLimitA, corner);
+    }
     worst.note(BASE, point.ibA, this.baseLimitA, corner);
     const share = powerShare(ambientDegC, transistor.limits.tjMaxDegC);
     worst.note(POWER, point.powerW, this.powerLimitW * share, corner);

@@ -3,6 +3,7 @@ import { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageInput } from '../stage/stage-input.ts';
 import { type StageModel, stageModel } from '../stage/stage-model.ts';
 import type { Criterion } from './evaluation.ts';
+import { LoadChecks } from './load.ts';
 import { OffStateChecks } from './off-state.ts';
 import { OnStateChecks } from './on-state.ts';
 import { standOffState, standOnData } from './standings.ts';
@@ -57,10 +58,12 @@ export class StageJudge {
   private readonly worst = new WorstCases();
   private readonly on: OnStateChecks;
   private readonly off: OffStateChecks;
+  private readonly load: LoadChecks;
   private readonly turnOff: TurnOffChecks;
   private readonly switching: SwitchingChecks;
   private readonly tested: TestedRange;
   private probes: readonly number[] = [];
+  private readonly startW: Float64Array;
   private beyondTestBeta = false;
   private runaway = false;
 
@@ -69,9 +72,11 @@ export class StageJudge {
     this.point = new OperatingPoint(this.model);
     this.on = new OnStateChecks(this.model, this.worst);
     this.off = new OffStateChecks(this.model, this.worst);
+    this.load = new LoadChecks(this.model, this.worst);
     this.turnOff = new TurnOffChecks(this.model, this.worst);
     this.switching = new SwitchingChecks(this.model, this.worst);
     this.tested = new TestedRange(this.model);
+    this.startW = new Float64Array(this.model.corners.count);
   }
 
   /** Every criterion of the stage with a base resistor of `rbOhm`, worst over all corners. */
@@ -119,19 +124,25 @@ export class StageJudge {
     const rth = model.part.rthJaKPerW ?? 0;
     this.worst.reset();
     this.turnOff.begin();
+    this.load.begin();
     this.tested.begin();
     this.beyondTestBeta = false;
     this.runaway = false;
     const switches = model.input.frequencyHz > 0;
+    const hasOwnChecks = model.input.load.kind !== 'coil';
     for (let corner = 0; corner < count; corner++) {
       const settled = ((corner >> shift.instant) & 1) === 1;
-      const startW = point.powerW;
+      const startW = this.startW[corner & ~(1 << shift.instant)] ?? 0;
       point.place(corner, rbOhm);
       const { ambientDegC } = point.condition;
       if (settled) point.settle(ambientDegC + rth * startW);
-      else point.solve(ambientDegC);
+      else {
+        point.solve(ambientDegC);
+        this.startW[corner] = point.powerW;
+      }
       this.on.visit(point, corner);
       this.turnOff.visit(point, corner);
+      if (hasOwnChecks) this.load.visit(point, corner);
       this.tested.visit(point);
       if (switches) this.switching.visit(point, corner);
       if (settled && ((corner >> shift.supply) & 1) === 1) this.off.visit(point, corner);

@@ -8,6 +8,7 @@ export function standOnData(model: StageModel, worst: WorstCases, switchingKnown
   standOnPart(model, worst);
   standOnRatings(model.input, worst);
   if (model.input.load.kind === 'coil') standOnCoil(model.input, worst);
+  standOnOtherLoads(model, worst);
   if (model.input.frequencyHz > 0) standOnSwitching(model.input, worst, switchingKnown);
 }
 
@@ -58,7 +59,9 @@ export function standOffState(model: StageModel, worst: WorstCases, baseOpen: bo
   const { load } = input;
   const currentUnknown =
     part.leakage === null || (baseOpen ? part.gain === null : part.anchor === null);
-  if (part.leakage === null && !baseOpen) worst.stand('off-base-voltage', 'unknown');
+  // A Darlington's leakage rows are collector figures: its base voltage does without them.
+  const baseUnknown = part.leakage === null && part.junctions === 1;
+  if (baseUnknown && !baseOpen) worst.stand('off-base-voltage', 'unknown');
   if (currentUnknown) worst.stand('off-collector-current', 'unknown');
   else if (load.kind === 'coil' && load.releaseV === null) {
     worst.stand('off-collector-current', 'at-best-open');
@@ -74,6 +77,24 @@ function standReset({ part, input }: StageModel, worst: WorstCases, currentUnkno
   }
   if (worst.takesPart('reset-off-current') && (currentUnknown || pinUnknown)) {
     worst.stand('reset-off-current', 'unknown');
+  }
+}
+
+function standOnOtherLoads({ input, part }: StageModel, worst: WorstCases): void {
+  const { load } = input;
+  if (load.kind === 'lamp') {
+    worst.stand(
+      'inrush-saturation',
+      part.gain === null || !part.hasVbe ? 'unknown' : 'open-if-missed',
+    );
+  }
+  if (load.kind === 'logic-input') {
+    if (part.saturation === null) worst.stand('output-low', 'unknown');
+    if (part.leakage === null) worst.stand('output-high', 'unknown');
+    if (load.ratingW === null) worst.stand('rc-dissipation', 'at-best-open');
+    if (load.capacitanceF === null) {
+      worst.stand('rise-time', load.riseTimeLimitSec === null ? 'stated' : 'unknown');
+    }
   }
 }
 

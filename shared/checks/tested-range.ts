@@ -2,6 +2,7 @@ import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { CRITERIA } from './criteria.ts';
 import type { Criterion } from './evaluation.ts';
+import { largestInrushA } from './load.ts';
 
 /** What a data sheet tests up to a last row, and how a finding names it. */
 const QUANTITIES = {
@@ -27,7 +28,8 @@ export class TestedRange {
   begin(): void {
     const { part, conditions } = this.model;
     const above = (lastA: number) => conditions.some(({ fullA }) => fullA > lastA);
-    this.gain = part.gain !== null && above(part.gain.lastIcA);
+    const lastGainA = part.gain?.lastIcA ?? Infinity;
+    this.gain = above(lastGainA) || largestInrushA(this.model) > lastGainA;
     this.baseEmitter = part.hasVbe && above(part.baseEmitter.lastIcA);
     this.saturation = false;
     this.pin = false;

@@ -11,7 +11,8 @@ const NO_CORNER = -1;
 const IDS = criterionIds();
 
 /** What caps or replaces the status a margin alone would give. */
-export type Standing = 'judged' | 'at-best-marginal' | 'at-best-open' | 'unknown' | 'stated';
+export type Standing =
+  'judged' | 'at-best-marginal' | 'at-best-open' | 'open-if-missed' | 'unknown' | 'stated';
 
 /**
  * The worst figure of every criterion over the corners of a stage. Typed arrays, filled in place: reading a
@@ -132,7 +133,7 @@ function status(standing: Standing, margin: number, band: number): Criterion['st
     return standing === 'at-best-open' ? 'open' : 'stated';
   }
   const plain = statusOf(margin, band);
-  if (plain === 'fail') return plain;
+  if (plain === 'fail') return standing === 'open-if-missed' ? 'open' : plain;
   if (standing === 'at-best-open') return 'open';
   return standing === 'at-best-marginal' ? 'marginal' : plain;
 }

@@ -146,4 +146,29 @@ export const DECISIONS: readonly MethodDecision[] = [
     title: 'Capacitor across a coil',
     text: 'A stage file cannot describe one, so the calculation cannot find it. It draws a current peak at turn-on and rings with the coil at turn-off: use a diode.',
   },
+  {
+    id: 'led-lamp-load-line',
+    title: 'Load lines of LEDs, lamps and logic inputs',
+    text: 'An LED string is a fixed voltage and its resistor. A lamp is a resistance through its steady current at the supply of the corner. Logic inputs add their low current, which is the same as a higher supply behind RC.',
+  },
+  {
+    id: 'lamp-inrush-gain',
+    title: 'Inrush of a lamp',
+    text: 'The inrush is taken at each corner with that corner’s base current, the gain limits at the inrush current and the junction temperature of the corner. An inrush above the last hFE row counts as used above the tested range.',
+  },
+  {
+    id: 'led-corner-order',
+    title: 'Forward voltage comes last in the order of corners',
+    text: 'Corners of an LED string are run through as for any other load, each with the lowest and then the highest forward voltage.',
+  },
+  {
+    id: 'logic-input-capacitance',
+    title: 'Capacitance of logic inputs',
+    text: 'The stated input capacitance is that of all inputs together; wiring and output capacitance add to it, and count as nothing where they are not stated. The low-to-high delay is not a criterion of its own.',
+  },
+  {
+    id: 'darlington-leakage',
+    title: 'A Darlington without collector leakage row',
+    text: 'If only ICBO is printed nothing is guaranteed about the collector current of the whole device, so its off-state current is open. The base voltage needs no leakage figure.',
+  },
 ];

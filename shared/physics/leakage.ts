@@ -7,6 +7,14 @@ export interface LeakagePoint {
   readonly tempDegC: number;
 }
 
+type LeakageClasses = readonly (readonly LeakagePoint['kind'][])[];
+
+/** What flows from collector to base. */
+const BASE_LEAKAGE: LeakageClasses = [['icbo'], ['ices', 'icex'], ['iceo']];
+
+/** What a Darlington with its own base resistors lets through the collector: the first kind printed. */
+export const DARLINGTON_LEAKAGE: LeakageClasses = [['icex'], ['ices'], ['iceo']];
+
 /** ICBO over temperature: printed points, coldest first, and the doubling interval beyond the hottest. */
 export interface LeakageTable {
   readonly degC: readonly number[];
@@ -18,17 +26,14 @@ export interface LeakageTable {
  * Leakage table of a part: its ICBO rows, else ICES and ICEX, else ICEO; per temperature the largest.
  *
  * @param usualDoublingK interval beyond the hottest row where the part's own rows fit a longer one, K
+ * @param classes kinds of rows in the order they are taken; those of one class count alike
  * @returns null where the sheet prints none
  */
 export function leakageTable(
   points: readonly LeakagePoint[],
   usualDoublingK: number,
+  classes: LeakageClasses = BASE_LEAKAGE,
 ): LeakageTable | null {
-  const classes: readonly (readonly LeakagePoint['kind'][])[] = [
-    ['icbo'],
-    ['ices', 'icex'],
-    ['iceo'],
-  ];
   const used = classes
     .map((kinds) => points.filter((point) => kinds.includes(point.kind)))
     .find((rows) => rows.length > 0);
@@ -100,13 +105,15 @@ export function cutOffAnchor(
  * Collector current a base–emitter voltage still lets through, A, without the leakage itself.
  *
  * @param tempcoVPerK slope of the anchor's VBE, V/K
+ * @param junctions base–emitter junctions in series: 2 in a Darlington
  */
 export function cutOffCurrentA(
   anchor: CutOffAnchor,
   vbeV: number,
   degC: number,
   tempcoVPerK: number,
+  junctions = 1,
 ): number {
   const anchorV = anchor.vbeV + tempcoVPerK * (degC - SHEET_DEG_C);
-  return anchor.icA * Math.exp((vbeV - anchorV) / thermalVoltageV(degC));
+  return anchor.icA * Math.exp((vbeV - anchorV) / (junctions * thermalVoltageV(degC)));
 }

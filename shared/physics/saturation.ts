@@ -25,6 +25,7 @@ export interface SaturationLine {
   readonly testBeta: Float64Array;
   readonly lastIcA: number;
   readonly reverseGain: number;
+  readonly darlington: boolean;
 }
 
 /**
@@ -59,6 +60,7 @@ export function saturationLine(
     testBeta: Float64Array.from(pieces, (each) => each.beta),
     lastIcA: rows[rows.length - 1]?.icA ?? 0,
     reverseGain: betaR,
+    darlington,
   };
 }
 
@@ -110,8 +112,18 @@ export function resistanceRatio(degC: number, tempcoPerK: number): number {
   return degC > SHEET_DEG_C ? Math.max(0, 1 + tempcoPerK * (degC - SHEET_DEG_C)) : 1;
 }
 
-/** V0 at a temperature for limit figures: with absolute temperature above 25 °C where positive. */
-export function interceptAtV(interceptV: number, degC: number): number {
+/** What a Darlington's VCE(sat) gains per kelvin below 25 °C: the VBE of its output transistor, V/K. */
+const DARLINGTON_COLD_V_PER_K = 0.002;
+
+/**
+ * V0 of a piece at a temperature for limit figures: with absolute temperature above 25 °C where positive. A
+ * Darlington's grows in the cold instead, with the base–emitter voltage in series.
+ */
+export function interceptAtV(line: SaturationLine, k: number, degC: number): number {
+  const interceptV = line.interceptV[k] ?? 0;
+  if (line.darlington) {
+    return interceptV + DARLINGTON_COLD_V_PER_K * Math.max(0, SHEET_DEG_C - degC);
+  }
   if (interceptV <= 0 || degC <= SHEET_DEG_C) return interceptV;
   return (interceptV * (degC + ZERO_CELSIUS_K)) / SHEET_K;
 }

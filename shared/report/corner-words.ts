@@ -13,6 +13,7 @@ const WORDS: Record<string, Record<string, string>> = {
   vbe: { min: 'VBE low', max: 'VBE high' },
   vceSat: { '0': 'VCE zero', max: 'VCE(sat) high' },
   instant: { start: 'at start', settled: 'settled' },
+  vf: { min: 'VF low', max: 'VF high' },
 };
 
 /** Variables worth naming for a criterion, those that decide it first. */
@@ -28,6 +29,12 @@ const NAMED: Partial<Record<CriterionId, readonly string[]>> = {
   'junction-temperature': ['supply', 'ambient', 'instant'],
   dissipation: ['supply', 'ambient', 'drive', 'instant'],
   'load-overvoltage': ['supply', 'ambient'],
+  'load-current': ['supply', 'ambient', 'load', 'vf'],
+  'load-current-low': ['supply', 'ambient', 'load', 'vf'],
+  'inrush-saturation': ['ambient', 'drive', 'rb'],
+  'output-low': ['supply', 'ambient', 'load'],
+  'output-high': ['ambient', 'rb', 'rbe'],
+  'rc-dissipation': ['supply', 'ambient'],
   'rb-dissipation': ['drive', 'ambient', 'rb'],
   'rbe-dissipation': ['ambient', 'rbe', 'vbe'],
   'pull-up-dissipation': ['supply', 'ambient'],
@@ -49,6 +56,7 @@ const NAMED: Partial<Record<CriterionId, readonly string[]>> = {
 const JUST_SWITCHED_OFF: readonly string[] = [
   'off-base-voltage',
   'off-collector-current',
+  'output-high',
   'reset-off',
   'reset-off-current',
 ];

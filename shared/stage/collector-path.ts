@@ -1,46 +1,70 @@
 import { copperRatio } from '../physics/coil.ts';
+import { lampSteadyA } from '../physics/lamp.ts';
+import type { LedStringLoad } from './load.ts';
 import type { StageInput } from './stage-input.ts';
 
 /** The load as the collector sees it: what voltage is there to drop, and over what resistance. */
 export interface CollectorPath {
-  /** Supply less the load's own fixed voltage, V. */
+  /** Supply less the load's own fixed voltage, V; with current from other inputs, their share of it added. */
   readonly availableV: number;
   readonly loadOhm: number;
 }
 
+/** The conditions a load's own figures stand at. */
+export interface LoadEnds {
+  readonly ambientDegC: number;
+  readonly settled: boolean;
+  /** End of the tolerance: 1, −1, or 0 for nominal. */
+  readonly sign: number;
+  /** End of an LED string's forward voltage: 1, −1, or 0 for the middle. */
+  readonly forwardSign: number;
+}
+
 /** Temperature of the load at an instant, °C: a coil warms up over ambient while it is on. */
-export function loadDegC(input: StageInput, ambientDegC: number, settled: boolean): number {
+export function loadDegC(input: StageInput, { ambientDegC, settled }: LoadEnds): number {
   return input.load.kind === 'coil' && settled
     ? ambientDegC + input.load.temperatureRiseK
     : ambientDegC;
 }
 
-/** Whether this version can judge the load. */
-export function isJudgedLoad(input: StageInput): boolean {
-  return input.load.kind === 'coil' || input.load.kind === 'resistor';
-}
-
-/** Smallest resistance a coil is taken for, Ω: copper near absolute zero must not divide by nothing. */
+/** Smallest resistance a load is taken for, Ω: copper near absolute zero must not divide by nothing. */
 const SMALLEST_LOAD_OHM = 1e-9;
 
-/**
- * @param sign end of the load's tolerance: 1, −1, or 0 for nominal
- * @param degC temperature of the load
- */
-export function collectorPath(
-  input: StageInput,
-  supplyV: number,
-  sign: number,
-  degC: number,
-): CollectorPath {
+export function collectorPath(input: StageInput, supplyV: number, ends: LoadEnds): CollectorPath {
   const { load } = input;
-  if (load.kind === 'coil') {
-    const ratio = copperRatio(degC, load.referenceDegC);
-    const loadOhm = load.resistanceOhm * (1 + sign * load.tolerance) * ratio;
-    return { availableV: supplyV, loadOhm: Math.max(SMALLEST_LOAD_OHM, loadOhm) };
+  switch (load.kind) {
+    case 'coil': {
+      const ratio = copperRatio(loadDegC(input, ends), load.referenceDegC);
+      const loadOhm = load.resistanceOhm * (1 + ends.sign * load.tolerance) * ratio;
+      return { availableV: supplyV, loadOhm: Math.max(SMALLEST_LOAD_OHM, loadOhm) };
+    }
+    case 'resistor':
+      return {
+        availableV: supplyV,
+        loadOhm: load.resistanceOhm * (1 + ends.sign * load.tolerance),
+      };
+    case 'led-string':
+      return {
+        availableV: supplyV - load.count * forwardV(load, ends),
+        loadOhm: load.resistanceOhm * (1 + ends.sign * load.tolerance),
+      };
+    case 'lamp':
+      return { availableV: supplyV, loadOhm: supplyV / lampSteadyA(load, supplyV) };
+    case 'logic-input': {
+      const loadOhm = load.pullUpOhm * (1 + ends.sign * load.tolerance);
+      return { availableV: supplyV + load.count * load.lowCurrentA * loadOhm, loadOhm };
+    }
   }
-  if (load.kind === 'resistor') {
-    return { availableV: supplyV, loadOhm: load.resistanceOhm * (1 + sign * load.tolerance) };
-  }
-  return { availableV: supplyV, loadOhm: Infinity };
+}
+
+/** What an LED's forward voltage moves by, V/K; a penalty only. */
+const LED_V_PER_K = 0.002;
+const LED_SHEET_DEG_C = 25;
+
+function forwardV(load: LedStringLoad, { forwardSign, ambientDegC }: LoadEnds): number {
+  const { min, max } = load.forwardV;
+  const awayK = ambientDegC - LED_SHEET_DEG_C;
+  if (forwardSign < 0) return Math.max(0, min - LED_V_PER_K * Math.max(0, awayK));
+  if (forwardSign > 0) return max + LED_V_PER_K * Math.max(0, -awayK);
+  return (min + max) / 2;
 }

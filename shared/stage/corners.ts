@@ -13,6 +13,8 @@ export const CORNER_VARIABLES = {
   vbe: ['min', 'max'],
   vceSat: ['0', 'max'],
   instant: ['start', 'settled'],
+  /** Forward voltage of an LED string. */
+  vf: ['min', 'max'],
 } as const satisfies Record<string, readonly [string, string]>;
 export type CornerVariable = keyof typeof CORNER_VARIABLES;
 

@@ -41,15 +41,17 @@ export class OffState {
 
   solve(point: OperatingPoint): void {
     const { part, input } = this.model;
-    const icboA = part.leakage === null ? 0 : leakageA(part.leakage, point.tjDegC);
+    // A Darlington's rows are collector figures: its own resistors keep the leakage off the base.
+    const leakA = part.leakage === null ? 0 : leakageA(part.leakage, point.tjDegC);
+    const icboA = part.junctions > 1 ? 0 : leakA;
     if (this.baseOpen) {
       this.vbeV = NaN;
-      this.collectorA = this.openBaseA(point, icboA + input.drive.leakageA);
+      this.collectorA = this.openBaseA(point, icboA + input.drive.leakageA, leakA - icboA);
     } else {
       this.vbeV = this.heldVbeV(point, icboA);
-      this.collectorA = this.heldA(point, icboA, this.vbeV);
+      this.collectorA = this.heldA(point, leakA, this.vbeV);
     }
-    this.solveReset(point, icboA);
+    this.solveReset(point, icboA, leakA);
     this.reverseV = this.reverse(point);
   }
 
@@ -73,7 +75,7 @@ export class OffState {
     return supplyV - (railV - Math.max(drive.high?.unloadedDropV ?? 0, LEAST_HIGH_DROP_V));
   }
 
-  private solveReset(point: OperatingPoint, icboA: number): void {
+  private solveReset(point: OperatingPoint, icboA: number, leakA: number): void {
     const { drive } = this.model.input;
     if (this.highSide || drive.reset === null) return;
     if (drive.reset.kind === 'driven-low') {
@@ -84,10 +86,10 @@ export class OffState {
     const pinA = this.resetPinA(point);
     if (this.resetOpen) {
       this.resetVbeV = NaN;
-      this.resetCollectorA = this.openBaseA(point, icboA + pinA);
+      this.resetCollectorA = this.openBaseA(point, icboA + pinA, leakA - icboA);
     } else {
       this.resetVbeV = (icboA + pinA) * point.rbeOhm;
-      this.resetCollectorA = this.heldA(point, icboA, this.resetVbeV);
+      this.resetCollectorA = this.heldA(point, leakA, this.resetVbeV);
     }
   }
 
@@ -101,20 +103,20 @@ export class OffState {
     return railV / ((drive.reset.pullUpOhm ?? 0) + point.rbOhm + shuntOhm);
   }
 
-  private heldA(point: OperatingPoint, icboA: number, vbeV: number): number {
-    const { anchor, vbeTempcoVPerK } = this.model.part;
+  private heldA(point: OperatingPoint, leakA: number, vbeV: number): number {
+    const { anchor, vbeTempcoVPerK, junctions } = this.model.part;
     const throughA =
-      anchor === null ? 0 : cutOffCurrentA(anchor, vbeV, point.tjDegC, vbeTempcoVPerK);
-    return Math.min(icboA + throughA, point.condition.fullA);
+      anchor === null ? 0 : cutOffCurrentA(anchor, vbeV, point.tjDegC, vbeTempcoVPerK, junctions);
+    return Math.min(leakA + throughA, point.condition.fullA);
   }
 
-  /** Leakage into an open base comes out amplified. */
-  private openBaseA(point: OperatingPoint, baseA: number): number {
+  /** Leakage into an open base comes out amplified; what the collector leaks besides adds to it. */
+  private openBaseA(point: OperatingPoint, baseA: number, besidesA: number): number {
     const { gain } = this.model.part;
     if (gain === null) return point.condition.fullA;
     const warm = point.tjDegC > SHEET_DEG_C ? gainRatio(point.tjDegC, gain.exponent) : 1;
     const gainMax = maximumGain(gain, baseA) * warm;
-    return Math.min((1 + gainMax) * baseA, point.condition.fullA);
+    return Math.min((1 + gainMax) * baseA + besidesA, point.condition.fullA);
   }
 
   /** Voltage that pulls the base beyond its emitter, a speed-up capacitor's swing included, V. */

@@ -78,8 +78,9 @@ export class OperatingPoint {
     const d = (corner >> shift.drive) & 1;
     const l = (corner >> shift.load) & 1;
     const t = (corner >> shift.instant) & 1;
+    const v = (corner >> shift.vf) & 1;
     const sign = ((corner >> shift.rb) & 1) === 0 ? -1 : 1;
-    const condition = this.model.conditions[(s << 3) | (a << 2) | (l << 1) | t];
+    const condition = this.model.conditions[(s << 4) | (a << 3) | (l << 2) | (t << 1) | v];
     const drive = this.model.drives[(s << 1) | d];
     if (condition === undefined || drive === undefined) return;
     this.condition = condition;
@@ -122,7 +123,7 @@ export class OperatingPoint {
       this.forcedBeta = Infinity;
       this.overdrive = 0;
       this.icA = 0;
-      this.vceV = Math.max(0, availableV);
+      this.vceV = Math.max(0, Math.min(availableV, this.condition.supplyV));
     } else {
       this.forcedBeta = fullA / this.ibA;
       this.overdrive = fullA > 0 ? (this.gain * this.ibA) / fullA : Infinity;
@@ -240,7 +241,7 @@ export class OperatingPoint {
     let current = 0;
     for (;;) {
       const interceptV =
-        interceptAtV(saturation.interceptV[this.piece] ?? 0, tjDegC) +
+        interceptAtV(saturation, this.piece, tjDegC) +
         forcedBetaStepV(
           this.forcedBeta,
           saturation.testBeta[this.piece] ?? 0,

@@ -2,6 +2,7 @@ import { baseEmitterTable, type BaseEmitterTable } from '../physics/base-emitter
 import { gainTable, type GainTable } from '../physics/gain.ts';
 import {
   cutOffAnchor,
+  DARLINGTON_LEAKAGE,
   type CutOffAnchor,
   leakageTable,
   type LeakageTable,
@@ -17,9 +18,12 @@ export interface PartModel {
   readonly saturation: SaturationLine | null;
   readonly baseEmitter: BaseEmitterTable;
   readonly hasVbe: boolean;
+  /** Into the base, or for a Darlington through the collector. */
   readonly leakage: LeakageTable | null;
   /** null where the sheet gives no collector current rating. */
   readonly anchor: CutOffAnchor | null;
+  /** Base–emitter junctions in series: 2 in a Darlington. */
+  readonly junctions: number;
   /** VBE at constant current, V/K. */
   readonly vbeTempcoVPerK: number;
   /** K/W; null where the sheet gives neither a thermal resistance nor a power. */
@@ -30,17 +34,24 @@ export interface PartModel {
 const DARLINGTON_JUNCTIONS = 2;
 
 /** The part as the policy's temperature laws and substitutes read it. */
-export function partModel(part: TransistorData, policy: Policy): PartModel {
-  const junctions = part.darlington ? DARLINGTON_JUNCTIONS : 1;
+export function partModel(
+  part: TransistorData,
+  policy: Policy,
+  darlington = part.darlington,
+): PartModel {
+  const junctions = darlington ? DARLINGTON_JUNCTIONS : 1;
   const vbeMinV = policy.vbeMinV * junctions;
   const baseEmitter = baseEmitterTable(part.baseEmitter, vbeMinV);
   const { limits } = part;
   return {
     gain: gainTable(part.gain, part.saturation, policy.gainExponent * junctions),
-    saturation: saturationLine(part.saturation, part.model?.betaR ?? null, part.darlington),
+    saturation: saturationLine(part.saturation, part.model?.betaR ?? null, darlington),
     baseEmitter,
     hasVbe: baseEmitter.maximum.icA.length > 0,
-    leakage: leakageTable(part.leakage, policy.leakageDoublingK),
+    leakage: darlington
+      ? leakageTable(part.leakage, policy.leakageDoublingK, DARLINGTON_LEAKAGE)
+      : leakageTable(part.leakage, policy.leakageDoublingK),
+    junctions,
     anchor: limits.icA === null ? null : cutOffAnchor(part.baseEmitter, limits.icA, vbeMinV),
     vbeTempcoVPerK: policy.vbeTempcoVPerK * junctions,
     rthJaKPerW: thermalResistanceInUse(part.thermal.rthJaKPerW, limits.powerW, limits.tjMaxDegC),

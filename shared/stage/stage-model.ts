@@ -2,8 +2,8 @@ import { maximumVbeV, minimumVbeV } from '../physics/base-emitter.ts';
 import { maximumGain, minimumGain } from '../physics/gain.ts';
 import { pieceAt } from '../physics/saturation.ts';
 import { type ClampVoltages, clampVoltages } from './clamp-voltages.ts';
-import { collectorPath, loadDegC } from './collector-path.ts';
-import { cornerSpace, type CornerSpace } from './corners.ts';
+import { collectorPath, loadDegC, type LoadEnds } from './collector-path.ts';
+import { cornerSpace, type CornerSpace, type CornerVariable } from './corners.ts';
 import { type DriveSource, driveSource } from './drive-source.ts';
 import { partModel, type PartModel } from './part-model.ts';
 import type { StageInput } from './stage-input.ts';
@@ -30,7 +30,7 @@ export interface StageModel {
   readonly input: StageInput;
   readonly part: PartModel;
   readonly corners: CornerSpace;
-  /** By supply, ambient, load and instant: bit 3, 2, 1, 0. */
+  /** By supply, ambient, load, instant and forward voltage: bit 4, 3, 2, 1, 0. */
   readonly conditions: readonly LoadCondition[];
   /** By supply and drive: bit 1, 0. */
   readonly drives: readonly DriveSource[];
@@ -48,14 +48,25 @@ const ENDS = [0, 1] as const;
 /** Everything of a stage that its base resistor does not change. */
 export function stageModel(input: StageInput): StageModel {
   const { shuntResistor, supplyV, ambientDegC, policy, drive } = input;
-  const part = partModel(input.transistor, policy);
+  const part = partModel(
+    input.transistor,
+    policy,
+    input.transistor.darlington || input.topology === 'low-side-darlington',
+  );
   const supplies = [supplyV.min, supplyV.max] as const;
   const ambients = [ambientDegC.min, ambientDegC.max] as const;
   const conditions = ENDS.flatMap((s) =>
     ENDS.flatMap((a) =>
       ENDS.flatMap((l) =>
-        ENDS.map((t) =>
-          loadCondition(input, part, supplies[s], ambients[a], l === 0 ? -1 : 1, t === 1),
+        ENDS.flatMap((t) =>
+          ENDS.map((v) =>
+            loadCondition(input, part, supplies[s], {
+              ambientDegC: ambients[a],
+              settled: t === 1,
+              sign: 2 * l - 1,
+              forwardSign: 2 * v - 1,
+            }),
+          ),
         ),
       ),
     ),
@@ -70,7 +81,7 @@ export function stageModel(input: StageInput): StageModel {
   return {
     input,
     part,
-    corners: cornerSpace(shuntResistor === null ? ['rbe'] : []),
+    corners: cornerSpace(lacking(input)),
     conditions,
     drives,
     shuntOhm: [shunt.valueOhm * (1 - shunt.tolerance), shunt.valueOhm * (1 + shunt.tolerance)],
@@ -78,27 +89,39 @@ export function stageModel(input: StageInput): StageModel {
     conductionShare:
       input.frequencyHz > 0 && input.frequencyHz >= policy.averagingHz ? input.duty : 1,
     nominal: {
-      condition: loadCondition(input, part, middleV, room, 0, true),
+      condition: loadCondition(input, part, middleV, {
+        ambientDegC: room,
+        settled: true,
+        sign: 0,
+        forwardSign: 0,
+      }),
       drive: driveSource(input, middleV, (drive.railV.min + drive.railV.max) / 2, false, 0),
     },
   };
+}
+
+/** Variables the corners of a stage do without. */
+function lacking({ shuntResistor, load }: StageInput): CornerVariable[] {
+  const lacks: CornerVariable[] = [];
+  if (shuntResistor === null) lacks.push('rbe');
+  if (load.kind === 'lamp') lacks.push('load');
+  if (load.kind !== 'led-string') lacks.push('vf');
+  return lacks;
 }
 
 function loadCondition(
   input: StageInput,
   part: PartModel,
   supplyV: number,
-  ambientDegC: number,
-  sign: number,
-  settled: boolean,
+  ends: LoadEnds,
 ): LoadCondition {
-  const coilDegC = loadDegC(input, ambientDegC, settled);
-  const { availableV, loadOhm } = collectorPath(input, supplyV, sign, coilDegC);
+  const coilDegC = loadDegC(input, ends);
+  const { availableV, loadOhm } = collectorPath(input, supplyV, ends);
   const fullA = Math.max(0, availableV) / loadOhm;
   const { gain, baseEmitter, saturation } = part;
   return {
     supplyV,
-    ambientDegC,
+    ambientDegC: ends.ambientDegC,
     coilDegC,
     availableV,
     loadOhm,

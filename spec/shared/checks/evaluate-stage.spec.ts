@@ -9,6 +9,21 @@ function criterion(evaluation: Evaluation, id: string): Criterion {
   return found;
 }
 
+const LOGIC = {
+  kind: 'logic-input',
+  pullUpOhm: 4700,
+  tolerance: 0.05,
+  ratingW: 0.1,
+  count: 1,
+  vilV: 0.8,
+  vihV: 2,
+  leakageA: 1e-6,
+  lowCurrentA: 1e-6,
+  capacitanceF: null,
+  wiringF: null,
+  riseTimeLimitSec: null,
+};
+
 /** Agreement asked for against the independent calculation of the same stage. */
 const AGREEMENT = 0.005;
 
@@ -132,27 +147,14 @@ describe('evaluateStage', () => {
     expect(evaluation.verdict).not.toBe('open');
   });
 
-  it('says plainly that a topology is not judged yet', () => {
-    const evaluation = evaluateStage(
-      relayStage({
-        topology: 'level-translator',
-        load: {
-          kind: 'logic-input',
-          pullUpOhm: 4700,
-          tolerance: 0.05,
-          ratingW: 0.1,
-          count: 1,
-          vilV: 0.8,
-          vihV: 2,
-          leakageA: 1e-6,
-          lowCurrentA: 1e-6,
-          capacitanceF: null,
-          wiringF: null,
-          riseTimeLimitSec: null,
-        },
-      }),
-    );
+  it('says plainly that a load does not belong to a topology', () => {
+    const evaluation = evaluateStage(highSideStage({ load: LOGIC }));
     expect(evaluation.verdict).toBe('open');
-    expect(evaluation.findings).toHaveLength(1);
+    expect(evaluation.findings).toEqual([
+      {
+        id: 'not-judged',
+        text: 'A load of kind logic-input is not judged in the topology high-side-pnp.',
+      },
+    ]);
   });
 });

@@ -68,9 +68,28 @@ describe('temperature of VCE(sat)', () => {
   it('takes penalties above 25 °C and no credit below', () => {
     expect(resistanceRatio(125, 0.004)).toBeCloseTo(1.4, 12);
     expect(resistanceRatio(-40, 0.004)).toBe(1);
-    expect(interceptAtV(0.1, 125)).toBeCloseTo(0.1 * (398.15 / 298.15), 12);
-    expect(interceptAtV(0.1, -40)).toBe(0.1);
-    expect(interceptAtV(-0.1, 125)).toBe(-0.1);
+    const part = line([
+      { icA: 0.01, ibA: 0.001, maxV: 0.2 },
+      { icA: 0.05, ibA: 0.005, maxV: 0.3 },
+      { icA: 0.1, ibA: 0.01, maxV: 0.8 },
+    ]);
+    const [, rising = 0, negative = 0] = part.interceptV;
+    expect(interceptAtV(part, 1, 125)).toBeCloseTo(rising * (398.15 / 298.15), 12);
+    expect(interceptAtV(part, 1, -40)).toBe(rising);
+    expect(negative).toBeLessThan(0);
+    expect(interceptAtV(part, 2, 125)).toBe(negative);
+  });
+});
+
+describe('VCE(sat) of a Darlington', () => {
+  it('starts 0.6 V higher and grows by 2 mV/K in the cold, not with heat', () => {
+    const part = saturationLine([{ icA: 3, ibA: 0.012, maxV: 2 }], null, true);
+    expect(part).not.toBeNull();
+    if (part === null) return;
+    const intrinsicV = thermalVoltageV(25) * Math.log(1 + 251 / 0.5) + 0.6;
+    expect(interceptAtV(part, 0, 25)).toBeCloseTo(intrinsicV, 12);
+    expect(interceptAtV(part, 0, 125)).toBeCloseTo(intrinsicV, 12);
+    expect(interceptAtV(part, 0, -25)).toBeCloseTo(intrinsicV + 0.1, 12);
   });
 });
 

@@ -1,5 +1,5 @@
 /// <reference lib="webworker" />
-import '../../zod-config.ts';
+import '../../zod-without-eval.ts';
 import { evaluateStage } from '../../../shared/checks/evaluate-stage.ts';
 import { sizeStage } from '../../../shared/sizing/size-stage.ts';
 import type { EngineReply, EngineRequest } from './engine-worker-message.ts';

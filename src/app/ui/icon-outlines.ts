@@ -183,3 +183,5 @@ export function iconOutline(name: IconName): string {
   outlines.set(name, outline);
   return outline;
 }
+
+export const ICON_NAMES = [...Object.keys(GENERIC), ...Object.keys(DOMAIN)] as readonly IconName[];

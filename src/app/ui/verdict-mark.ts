@@ -32,6 +32,7 @@ const ICONS: Record<CriterionStatus, IconName> = {
       display: inline-flex;
       align-items: center;
       gap: 5px;
+      vertical-align: middle;
       font-weight: 600;
       color: var(--mat-sys-on-surface-variant);
       white-space: nowrap;
