@@ -5,6 +5,7 @@ import { createApp } from './app.ts';
 import type { Config } from './config.ts';
 import { Database } from './persistence/database.ts';
 import { DataFolder } from './persistence/data-folder.ts';
+import { prepareDatabase } from './seed/prepare-database.ts';
 import { createServices, type Services } from './services.ts';
 import { StartRefusal } from './start-refusal.ts';
 
@@ -47,6 +48,7 @@ export class RunningServer {
       const database = await Database.open(folder.databaseFile);
       const services = createServices(config, database, folder.mailbox, logger);
       const { express } = createApp(services, secrets, logger);
+      await prepareDatabase(services, tell);
       const timers = [setInterval(() => void services.sessions.sweep(), SWEEP_EVERY_MS)];
       const running = new RunningServer(http, folder, services, timers, logger);
       http.removeListener('request', notYet);

@@ -77,7 +77,7 @@ export async function answerPart(
 export async function answerPartRevision(
   manager: EntityManager,
   partRevisionId: string,
-): Promise<{ body: z.input<typeof PartRevision> }> {
+): Promise<{ body: PartRevision }> {
   const revision = await manager.findOneBy(PartRevisionEntity, { id: partRevisionId });
   if (revision === null) throw notFound();
   const verifications = await manager.findBy(PartVerificationEntity, { partRevisionId });
@@ -92,7 +92,7 @@ function revisionReply(
   { authorId, comment, createdAtMs, id, number, partId, record, summary }: PartRevisionEntity,
   verifications: readonly PartVerificationEntity[],
   named: (id: string) => PersonRef,
-): z.input<typeof PartRevision> {
+): PartRevision {
   const found = verifications.find(({ partRevisionId }) => partRevisionId === id);
   const verification: PartVerification | null = found
     ? {
