@@ -18,6 +18,10 @@ const NEEDS: Partial<Record<Topology, TopologyNeeds>> = {
     polarity: 'npn',
     loads: ['coil', 'resistor', 'led-string', 'lamp', 'logic-input'],
   },
+  'low-side-pre-biased': {
+    polarity: 'npn',
+    loads: ['coil', 'resistor', 'led-string', 'lamp', 'logic-input'],
+  },
   'level-translator': { polarity: 'npn', loads: ['logic-input'] },
 };
 

@@ -1,5 +1,6 @@
 import { cornerNamed, cornerNumber } from '../stage/corners.ts';
-import { OperatingPoint } from '../stage/operating-point.ts';
+import { operatingPoint } from '../stage/input-driven-point.ts';
+import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageInput } from '../stage/stage-input.ts';
 import { stageModel } from '../stage/stage-model.ts';
 import type { Corner, CornerFigures, Nominal } from './evaluation.ts';
@@ -30,12 +31,13 @@ const finite = (value: number) => (Number.isFinite(value) ? value : null);
 /** The figures of a point as a result states them. */
 export function nominalOf(point: OperatingPoint): Nominal {
   const { gain, saturation, hasVbe } = point.model.part;
+  const byInput = point.model.inside?.byInput === true;
   return {
     icA: finite(point.icA),
     ibA: finite(point.ibA),
     driveA: finite(point.driveA),
     vceV: saturation === null ? null : finite(point.vceV),
-    vbeV: hasVbe ? finite(point.vbeV) : null,
+    vbeV: hasVbe || byInput ? finite(point.vbeV) : null,
     rceSatOhm: saturation === null ? null : finite(point.rceSatOhm),
     forcedBeta: finite(point.forcedBeta),
     overdriveFactor: gain === null ? null : finite(point.overdrive),
@@ -67,7 +69,8 @@ function figuresOf(point: OperatingPoint, corner: Corner): CornerFigures {
 
 /** Voltage at the output while on, against the logic's return: high for an NPN, low for a PNP. */
 function outputV(point: OperatingPoint): number {
-  const acrossV = point.vbeV + point.driveA * point.rbOhm;
+  const seriesOhm = point.model.inside?.byInput === true ? point.outerRbOhm : point.rbOhm;
+  const acrossV = point.vbeV + point.driveA * seriesOhm;
   return point.model.input.topology === 'high-side-pnp'
     ? point.condition.supplyV - acrossV
     : acrossV;
@@ -79,7 +82,7 @@ function outputV(point: OperatingPoint): number {
  * @param corner ends by name, as a criterion reports them; what it leaves out stands at its first end
  */
 export function figuresAtCorner(input: StageInput, corner: Corner): CornerFigures {
-  const point = new OperatingPoint(stageModel(input));
+  const point = operatingPoint(stageModel(input));
   const { corners } = point.model;
   const index = cornerNumber(corners, corner);
   point.place(index, input.baseResistor.valueOhm ?? Infinity);
@@ -91,7 +94,7 @@ export function figuresAtCorner(input: StageInput, corner: Corner): CornerFigure
 
 /** The on state at the middle of every tolerance, settled. */
 export function nominalFigures(input: StageInput): CornerFigures {
-  const point = new OperatingPoint(stageModel(input));
+  const point = operatingPoint(stageModel(input));
   point.placeNominal(input.baseResistor.valueOhm ?? Infinity);
   point.settle(point.condition.ambientDegC);
   return figuresOf(point, NOMINAL_CORNER);

@@ -32,6 +32,7 @@ function words(
 /** Every criterion, in the order a result lists them. */
 export const CRITERIA = {
   'overdrive-factor': on('Overdrive factor', '>=', '1', ['ODF', '']),
+  'input-on': on('Input voltage while on', '>=', 'V', ['V', 'I']),
   'forced-beta': on('Forced β', '<=', '1', ['β', 'f']),
   'load-voltage': on('Coil voltage', '>=', 'V', ['V', 'coil']),
   'saturation-voltage': on('VCE(sat)', '<=', 'V', ['V', 'CE(sat)']),
@@ -47,12 +48,14 @@ export const CRITERIA = {
   'output-low': on('Low output level', '<=', 'V', ['V', 'OL']),
   'rise-time': on('Rise time', '<=', 's', ['t', 'r']),
   'rc-dissipation': on('RC dissipation', '<=', 'W', ['P', 'RC']),
+  'input-voltage': on('Largest input voltage', '<=', 'V', ['V', 'I(max)']),
   'load-overvoltage': on('Coil overvoltage', '<=', 'V', ['V', 'coil']),
   'holding-voltage': on('Holding voltage', '>=', 'V', ['V', 'hold']),
   'rb-dissipation': on('RB dissipation', '<=', 'W', ['P', 'RB']),
   'rbe-dissipation': on('RBE dissipation', '<=', 'W', ['P', 'RBE']),
   'pull-up-dissipation': on('Pull-up dissipation', '<=', 'W', ['P', 'pull-up']),
   'off-base-voltage': words('off-state', 'Off-state VBE', '<=', 'V', ['V', 'BE(off)']),
+  'input-off': words('off-state', 'Input voltage while off', '<=', 'V', ['V', 'I(off)']),
   'off-collector-current': words('off-state', 'Off-state current', '<=', 'A', ['I', 'C(off)']),
   'output-high': words('off-state', 'High output level', '>=', 'V', ['V', 'OH']),
   'off-collector-voltage': words('off-state', 'Off-state VCE', '<=', 'V', ['V', 'CE(off)']),

@@ -51,7 +51,7 @@ function onDrive({ input }: StageModel, traits: CornerTraits): Remark[] {
   return remarks;
 }
 
-function onPartData({ input, part }: StageModel, traits: CornerTraits): Remark[] {
+function onPartData({ input, part, inside }: StageModel, traits: CornerTraits): Remark[] {
   const remarks: Remark[] = [];
   if (traits.beyondRows.length > 0) {
     remarks.push(
@@ -69,7 +69,7 @@ function onPartData({ input, part }: StageModel, traits: CornerTraits): Remark[]
       ),
     );
   }
-  if (part.hasVbe && !part.baseEmitter.guaranteed) {
+  if (part.hasVbe && !part.baseEmitter.guaranteed && inside?.byInput !== true) {
     remarks.push(
       note(
         'vbe-sat-not-guaranteed',
@@ -83,7 +83,8 @@ function onPartData({ input, part }: StageModel, traits: CornerTraits): Remark[]
 function onOffState(model: StageModel, criteria: readonly Criterion[]): Remark[] {
   const { input } = model;
   const remarks: Remark[] = [];
-  if (input.shuntResistor === null) {
+  const shunted = model.inside === null ? input.shuntResistor : model.inside.ratio;
+  if (shunted === null) {
     remarks.push(
       note(
         'no-base-emitter-resistor',

@@ -55,7 +55,7 @@ export class OffStateChecks {
       policy.offBaseV * this.model.part.junctions +
       this.model.part.vbeTempcoVPerK * (point.tjDegC - SHEET_DEG_C);
     const currentLimitA = this.currentLimitA(point);
-    if (!off.baseOpen) worst.note(BASE, off.vbeV, vbeLimitV, corner);
+    if (!off.baseOpen && this.model.inside === null) worst.note(BASE, off.vbeV, vbeLimitV, corner);
     worst.note(CURRENT, off.collectorA, currentLimitA, corner);
     this.visitOutput(corner);
     const { vceoV } = transistor.limits;

@@ -40,6 +40,8 @@ export class OnStateChecks {
   private readonly pullUpLimitW: number;
   private readonly pullUpOhm: number;
   private readonly pullUpFeedsBase: boolean;
+  /** Whether a base current turns the part on, not a printed input voltage. */
+  private readonly byBaseCurrent: boolean;
 
   constructor(model: StageModel, worst: WorstCases) {
     this.model = model;
@@ -47,6 +49,7 @@ export class OnStateChecks {
     const { policy, transistor, drive, baseResistor, shuntResistor } = model.input;
     const { limits } = transistor;
     const openCollector = drive.kind === 'open-collector';
+    this.byBaseCurrent = model.inside?.byInput !== true;
     this.pullUpFeedsBase = openCollector && !isHighSide(model.input);
     this.collectorLimitA = derated(limits.icA, policy.currentDerating);
     this.peakLimitA = derated(limits.icPeakA ?? limits.icA, policy.currentDerating);
@@ -66,14 +69,16 @@ export class OnStateChecks {
     const { policy, transistor } = this.model.input;
     const { worst } = this;
     const { ambientDegC } = point.condition;
-    worst.note(OVERDRIVE, point.overdrive, policy.overdriveFactor, corner);
-    worst.note(FORCED_BETA, point.forcedBeta, this.forcedBetaLimit(point), corner);
+    if (this.byBaseCurrent) {
+      worst.note(OVERDRIVE, point.overdrive, policy.overdriveFactor, corner);
+      worst.note(FORCED_BETA, point.forcedBeta, this.forcedBetaLimit(point), corner);
+      worst.note(BASE, point.ibA, this.baseLimitA, corner);
+    }
     worst.note(SATURATION, point.vceV, this.model.input.saturationLimitV ?? NaN, corner);
     worst.note(COLLECTOR, point.icA, this.collectorLimitA, corner);
     if (this.model.input.load.kind !== 'lamp') {
       worst.note(PEAK, point.icA, this.peakLimitA, corner);
     }
-    worst.note(BASE, point.ibA, this.baseLimitA, corner);
     const share = powerShare(ambientDegC, transistor.limits.tjMaxDegC);
     worst.note(POWER, point.powerW, this.powerLimitW * share, corner);
     worst.note(JUNCTION, point.tjDegC, this.junctionLimitDegC, corner);
@@ -95,8 +100,9 @@ export class OnStateChecks {
     const railV = drive.railTracksSupply ? point.condition.supplyV : drive.railV.max;
     const driveA = this.pullUpFeedsBase ? railV / this.pullUpOhm : point.driveA;
     worst.note(DRIVE, driveA, this.driveLimitA, corner);
-    worst.note(RB_POWER, point.driveA * point.driveA * point.rbOhm, this.rbLimitW * share, corner);
-    if (shuntResistor !== null) {
+    const rbW = point.driveA * point.driveA * point.outerRbOhm;
+    worst.note(RB_POWER, rbW, this.rbLimitW * share, corner);
+    if (shuntResistor !== null && this.model.inside === null) {
       const powerW = (point.vbeV * point.vbeV) / point.rbeOhm;
       worst.note(RBE_POWER, powerW, this.rbeLimitW * share, corner);
     }

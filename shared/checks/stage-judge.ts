@@ -1,8 +1,10 @@
 import { cornerNumber, type CornerSpace } from '../stage/corners.ts';
-import { OperatingPoint } from '../stage/operating-point.ts';
+import { operatingPoint } from '../stage/input-driven-point.ts';
+import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageInput } from '../stage/stage-input.ts';
 import { type StageModel, stageModel } from '../stage/stage-model.ts';
 import type { Criterion } from './evaluation.ts';
+import { InputChecks } from './input.ts';
 import { LoadChecks } from './load.ts';
 import { OffStateChecks } from './off-state.ts';
 import { OnStateChecks } from './on-state.ts';
@@ -15,6 +17,7 @@ import { WorstCases } from './worst-cases.ts';
 /** Criteria that a few corners can already refute a base resistor by. */
 const PROBED = [
   'overdrive-factor',
+  'input-on',
   'forced-beta',
   'drive-current',
   'base-current',
@@ -59,6 +62,7 @@ export class StageJudge {
   private readonly on: OnStateChecks;
   private readonly off: OffStateChecks;
   private readonly load: LoadChecks;
+  private readonly input: InputChecks | null;
   private readonly turnOff: TurnOffChecks;
   private readonly switching: SwitchingChecks;
   private readonly tested: TestedRange;
@@ -69,10 +73,12 @@ export class StageJudge {
 
   constructor(input: StageInput) {
     this.model = stageModel(input);
-    this.point = new OperatingPoint(this.model);
+    this.point = operatingPoint(this.model);
     this.on = new OnStateChecks(this.model, this.worst);
     this.off = new OffStateChecks(this.model, this.worst);
     this.load = new LoadChecks(this.model, this.worst);
+    const { inside } = this.model;
+    this.input = inside === null ? null : new InputChecks(this.model, inside, this.worst);
     this.turnOff = new TurnOffChecks(this.model, this.worst);
     this.switching = new SwitchingChecks(this.model, this.worst);
     this.tested = new TestedRange(this.model);
@@ -83,6 +89,9 @@ export class StageJudge {
   criteria(rbOhm: number): Criterion[] {
     this.run(rbOhm);
     standOnData(this.model, this.worst, this.switching.known);
+    if (this.input?.beyondTest === true && this.worst.takesPart('input-on')) {
+      this.worst.stand('input-on', 'at-best-open');
+    }
     standOffState(this.model, this.worst, this.off.baseOpen);
     const { corners, input } = this.model;
     return [...this.worst.criteria(corners, input.policy.marginalBand), this.tested.criterion()];
@@ -111,6 +120,7 @@ export class StageJudge {
       point.place(corner, rbOhm);
       point.solve(point.condition.ambientDegC);
       this.on.visit(point, corner);
+      this.input?.visit(point, corner);
       beyondPin ||= point.beyondPin;
     }
     const margin = Math.min(...PROBED.map((id) => worst.key(id)));
@@ -142,10 +152,14 @@ export class StageJudge {
       }
       this.on.visit(point, corner);
       this.turnOff.visit(point, corner);
+      this.input?.visit(point, corner);
       if (hasOwnChecks) this.load.visit(point, corner);
       this.tested.visit(point);
       if (switches) this.switching.visit(point, corner);
-      if (settled && ((corner >> shift.supply) & 1) === 1) this.off.visit(point, corner);
+      if (settled && ((corner >> shift.supply) & 1) === 1) {
+        this.off.visit(point, corner);
+        this.input?.visitOff(corner);
+      }
       this.notice(point);
     }
   }

@@ -1,4 +1,5 @@
 import type { CoilLoad } from '../stage/load.ts';
+import type { PartModel } from '../stage/part-model.ts';
 import type { StageInput } from '../stage/stage-input.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import type { WorstCases } from './worst-cases.ts';
@@ -12,22 +13,23 @@ export function standOnData(model: StageModel, worst: WorstCases, switchingKnown
   if (model.input.frequencyHz > 0) standOnSwitching(model.input, worst, switchingKnown);
 }
 
-function standOnPart({ part, input }: StageModel, worst: WorstCases): void {
+function standOnDrive(part: PartModel, worst: WorstCases): void {
   if (!part.baseEmitter.guaranteed) {
     worst.stand('overdrive-factor', 'at-best-marginal');
     worst.stand('forced-beta', 'at-best-marginal');
   }
-  if (part.gain === null) worst.stand('overdrive-factor', 'unknown');
+  if (part.saturation === null) worst.stand('forced-beta', 'at-best-open');
+  if (!part.hasVbe || part.gain === null) worst.stand('overdrive-factor', 'unknown');
+  if (!part.hasVbe) worst.stand('forced-beta', 'unknown');
+}
+
+function standOnPart({ part, input, inside }: StageModel, worst: WorstCases): void {
+  if (inside?.byInput !== true) standOnDrive(part, worst);
   if (part.saturation === null) {
-    worst.stand('forced-beta', 'at-best-open');
     worst.stand('saturation-voltage', 'unknown');
     worst.stand('dissipation', 'unknown');
     worst.stand('junction-temperature', 'unknown');
     if (input.load.kind === 'coil') worst.stand('load-voltage', 'unknown');
-  }
-  if (!part.hasVbe) {
-    worst.stand('overdrive-factor', 'unknown');
-    worst.stand('forced-beta', 'unknown');
   }
   if (part.rthJaKPerW === null) worst.stand('junction-temperature', 'unknown');
 }
@@ -45,7 +47,7 @@ function standOnRatings(input: StageInput, worst: WorstCases): void {
   }
   if (limits.powerW === null) worst.stand('dissipation', 'at-best-open');
   if (baseResistor.ratingW === null) worst.stand('rb-dissipation', 'at-best-open');
-  if (shuntResistor !== null && shuntResistor.ratingW === null) {
+  if (shuntResistor?.ratingW === null && worst.takesPart('rbe-dissipation')) {
     worst.stand('rbe-dissipation', 'at-best-open');
   }
   if (drive.kind === 'open-collector' && drive.pullUp.ratingW === null) {
@@ -60,7 +62,7 @@ export function standOffState(model: StageModel, worst: WorstCases, baseOpen: bo
   const currentUnknown =
     part.leakage === null || (baseOpen ? part.gain === null : part.anchor === null);
   // A Darlington's leakage rows are collector figures: its base voltage does without them.
-  const baseUnknown = part.leakage === null && part.junctions === 1;
+  const baseUnknown = part.leakage === null && part.junctions === 1 && model.inside === null;
   if (baseUnknown && !baseOpen) worst.stand('off-base-voltage', 'unknown');
   if (currentUnknown) worst.stand('off-collector-current', 'unknown');
   else if (load.kind === 'coil' && load.releaseV === null) {

@@ -26,9 +26,11 @@ export class TestedRange {
   }
 
   begin(): void {
-    const { part, conditions } = this.model;
+    const { part, conditions, inside } = this.model;
     const above = (lastA: number) => conditions.some(({ fullA }) => fullA > lastA);
-    const lastGainA = part.gain?.lastIcA ?? Infinity;
+    // A part judged by its input voltage uses no gain figure.
+    const usesGain = inside?.byInput !== true;
+    const lastGainA = (usesGain ? part.gain?.lastIcA : undefined) ?? Infinity;
     this.gain = above(lastGainA) || largestInrushA(this.model) > lastGainA;
     this.baseEmitter = part.hasVbe && above(part.baseEmitter.lastIcA);
     this.saturation = false;

@@ -171,4 +171,19 @@ export const DECISIONS: readonly MethodDecision[] = [
     title: 'A Darlington without collector leakage row',
     text: 'If only ICBO is printed nothing is guaranteed about the collector current of the whole device, so its off-state current is open. The base voltage needs no leakage figure.',
   },
+  {
+    id: 'pre-biased-resistors',
+    title: 'Resistors around a pre-biased part',
+    text: 'RB of the stage is an outer resistor in series with R1. A resistor outside from the input to ground is not counted: R2 inside is what holds the base off. With a printed VI(on) the gain rows are not used, the input current is the drive and base current, and the forced-β difference is not added to VO(on).',
+  },
+  {
+    id: 'pre-biased-input-test',
+    title: 'Load current above the test of VI(on)',
+    text: 'The full load current is compared with the tested one; without a stated test current every load counts as above it. Without a printed GI nothing is added and the criterion is open all the same.',
+  },
+  {
+    id: 'pre-biased-off',
+    title: 'Off state of a pre-biased part',
+    text: 'The low level is held to VI(off) as input-off, which takes the place of the off-state base voltage. The collector current is computed behind RB + R1 and R2.',
+  },
 ];

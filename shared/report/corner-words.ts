@@ -14,6 +14,8 @@ const WORDS: Record<string, Record<string, string>> = {
   vceSat: { '0': 'VCE zero', max: 'VCE(sat) high' },
   instant: { start: 'at start', settled: 'settled' },
   vf: { min: 'VF low', max: 'VF high' },
+  r1: { '-': 'R1 low', '+': 'R1 high' },
+  ratio: { '-': 'R2/R1 low', '+': 'R2/R1 high' },
 };
 
 /** Variables worth naming for a criterion, those that decide it first. */
@@ -29,6 +31,9 @@ const NAMED: Partial<Record<CriterionId, readonly string[]>> = {
   'junction-temperature': ['supply', 'ambient', 'instant'],
   dissipation: ['supply', 'ambient', 'drive', 'instant'],
   'load-overvoltage': ['supply', 'ambient'],
+  'input-on': ['supply', 'ambient', 'drive', 'rb'],
+  'input-voltage': ['drive', 'rb'],
+  'input-off': ['supply'],
   'load-current': ['supply', 'ambient', 'load', 'vf'],
   'load-current-low': ['supply', 'ambient', 'load', 'vf'],
   'inrush-saturation': ['ambient', 'drive', 'rb'],

@@ -11,6 +11,7 @@ const STRONGER_DRIVE = 'a stronger output, or a pre-driver in front';
 const CURES: Partial<Record<CriterionId, string>> = {
   'overdrive-factor': MORE_GAIN,
   'forced-beta': LOWER_DEMAND,
+  'input-on': 'an output with a higher level, or a part with a lower VI(on)',
   'drive-current': STRONGER_DRIVE,
   'tested-range':
     'an output tested at a higher current, a transistor with rows up to this current, or a pre-driver in front',

@@ -4,6 +4,7 @@ import type { Criterion } from '../checks/evaluation.ts';
 /** What a base resistor decides by its nature: where the search for the window starts. */
 export const DECIDED_BY_RB: readonly CriterionId[] = [
   'overdrive-factor',
+  'input-on',
   'forced-beta',
   'drive-current',
   'base-current',

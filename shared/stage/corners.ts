@@ -15,6 +15,9 @@ export const CORNER_VARIABLES = {
   instant: ['start', 'settled'],
   /** Forward voltage of an LED string. */
   vf: ['min', 'max'],
+  /** Resistors inside a pre-biased part: R1, and R2/R1. */
+  r1: ['-', '+'],
+  ratio: ['-', '+'],
 } as const satisfies Record<string, readonly [string, string]>;
 export type CornerVariable = keyof typeof CORNER_VARIABLES;
 

@@ -31,12 +31,14 @@ export class OffState {
   private readonly highSide: boolean;
 
   constructor(model: StageModel) {
-    const { drive, shuntResistor } = model.input;
+    const { drive } = model.input;
+    const held = model.inside === null ? model.input.shuntResistor : model.inside.ratio;
+    const shunted = held !== null;
     this.model = model;
     this.highSide = isHighSide(model.input);
-    this.baseOpen = this.highSide && drive.kind === 'open-collector' && shuntResistor === null;
-    const held = drive.reset === null || drive.reset.kind === 'driven-low';
-    this.resetOpen = !this.highSide && !held && shuntResistor === null;
+    this.baseOpen = this.highSide && drive.kind === 'open-collector' && !shunted;
+    const driven = drive.reset === null || drive.reset.kind === 'driven-low';
+    this.resetOpen = !this.highSide && !driven && !shunted;
   }
 
   solve(point: OperatingPoint): void {

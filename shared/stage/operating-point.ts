@@ -2,6 +2,7 @@ import { SHEET_DEG_C } from '../physics/constants.ts';
 import { gainRatio } from '../physics/gain.ts';
 import { forcedBetaStepV, interceptAtV, resistanceRatio } from '../physics/saturation.ts';
 import type { DriveSource } from './drive-source.ts';
+import type { InsideModel } from './internal-resistors.ts';
 import type { LoadCondition, StageModel } from './stage-model.ts';
 import { switchingLossW } from './switching-loss.ts';
 
@@ -23,8 +24,9 @@ const BISECTIONS = 48;
 export class OperatingPoint {
   condition: LoadCondition;
   drive: DriveSource;
-  /** RB as chosen, and at the corner's end of its tolerance. */
+  /** RB as chosen, at the corner's end of its tolerance, and with what lies in series inside the part. */
   chosenRbOhm = 0;
+  outerRbOhm = 0;
   rbOhm = 0;
   rbeOhm = Infinity;
   /** Figures at the solved junction temperature. */
@@ -86,8 +88,16 @@ export class OperatingPoint {
     this.condition = condition;
     this.drive = drive;
     this.chosenRbOhm = rbOhm;
-    this.rbOhm = rbOhm * (1 + sign * tolerance);
+    this.outerRbOhm = rbOhm * (1 + sign * tolerance);
+    this.rbOhm = this.outerRbOhm;
     this.rbeOhm = this.model.shuntOhm[((corner >> shift.rbe) & 1) as 0 | 1];
+    if (this.model.inside !== null) {
+      this.placeInside(
+        this.model.inside,
+        ((corner >> shift.r1) & 1) as 0 | 1,
+        ((corner >> shift.ratio) & 1) as 0 | 1,
+      );
+    }
     this.highGain = ((corner >> shift.gain) & 1) === 1;
     this.gain25 = this.highGain ? condition.gainMax : condition.gainMin;
     this.vbe25V = ((corner >> shift.vbe) & 1) === 1 ? condition.vbeMaxV : condition.vbeMinV;
@@ -100,12 +110,25 @@ export class OperatingPoint {
     this.condition = condition;
     this.drive = drive;
     this.chosenRbOhm = rbOhm;
+    this.outerRbOhm = rbOhm;
     this.rbOhm = rbOhm;
     this.rbeOhm = this.model.input.shuntResistor?.valueOhm ?? Infinity;
+    const { internal } = this.model.input.transistor;
+    if (this.model.inside !== null && internal !== null) {
+      this.rbOhm = rbOhm + internal.r1Ohm;
+      this.rbeOhm = internal.r2Ohm ?? Infinity;
+    }
     this.highGain = false;
     this.gain25 = condition.gainMin;
     this.vbe25V = condition.vbeMaxV;
     this.fullDrop = true;
+  }
+
+  /** R1 lies in series with RB, R2 from base to emitter. */
+  private placeInside(inside: InsideModel, r1: 0 | 1, ratio: 0 | 1): void {
+    const r1Ohm = inside.r1Ohm[r1];
+    this.rbOhm = this.outerRbOhm + r1Ohm;
+    this.rbeOhm = inside.ratio === null ? Infinity : inside.ratio[ratio] * r1Ohm;
   }
 
   /** Fills the figures for a junction at `tjDegC`; tells whether the corner is saturated there. */
@@ -131,16 +154,21 @@ export class OperatingPoint {
       if (!this.saturated) {
         this.icA = this.gain * this.ibA;
         this.vceV = Math.max(0, availableV - this.icA * this.condition.loadOhm);
-      } else if (this.fullDrop && this.model.part.saturation !== null) this.dropAcross(tjDegC);
-      else {
+      } else if (this.fullDrop && this.model.part.saturation !== null) {
+        this.dropAcross(tjDegC, this.forcedBeta);
+      } else {
         this.icA = fullA;
         this.vceV = 0;
       }
     }
+    this.sumPower();
+    return this.saturated;
+  }
+
+  protected sumPower(): void {
     this.powerW =
       this.model.conductionShare * (this.vceV * this.icA + this.vbeV * this.ibA) +
       switchingLossW(this);
-    return this.saturated;
   }
 
   /**
@@ -226,7 +254,7 @@ export class OperatingPoint {
     return (bentV - this.vbeV) / (beyondOhm + this.rbOhm);
   }
 
-  private slopeOhm(tjDegC: number): number {
+  protected slopeOhm(tjDegC: number): number {
     const { saturation } = this.model.part;
     if (saturation === null) return 0;
     const tempco = this.model.input.policy.rceTempcoPerK;
@@ -234,7 +262,7 @@ export class OperatingPoint {
   }
 
   /** Load line against the saturation line: piece by piece downwards from the full load current. */
-  private dropAcross(tjDegC: number): void {
+  protected dropAcross(tjDegC: number, forcedBeta: number): void {
     const { saturation } = this.model.part;
     const { availableV, loadOhm, fullA } = this.condition;
     if (saturation === null) return;
@@ -243,7 +271,7 @@ export class OperatingPoint {
       const interceptV =
         interceptAtV(saturation, this.piece, tjDegC) +
         forcedBetaStepV(
-          this.forcedBeta,
+          forcedBeta,
           saturation.testBeta[this.piece] ?? 0,
           this.gain,
           saturation.reverseGain,

@@ -9,6 +9,7 @@ import {
 } from '../physics/leakage.ts';
 import { saturationLine, type SaturationLine } from '../physics/saturation.ts';
 import { thermalResistanceInUse } from '../physics/thermal.ts';
+import { insideGain, type InsideModel } from './internal-resistors.ts';
 import type { Policy } from './policy.ts';
 import type { TransistorData } from './transistor-data.ts';
 
@@ -38,13 +39,15 @@ export function partModel(
   part: TransistorData,
   policy: Policy,
   darlington = part.darlington,
+  inside: InsideModel | null = null,
 ): PartModel {
   const junctions = darlington ? DARLINGTON_JUNCTIONS : 1;
   const vbeMinV = policy.vbeMinV * junctions;
   const baseEmitter = baseEmitterTable(part.baseEmitter, vbeMinV);
   const { limits } = part;
+  const gainRows = inside === null ? part.gain : insideGain(part.gain, inside);
   return {
-    gain: gainTable(part.gain, part.saturation, policy.gainExponent * junctions),
+    gain: gainTable(gainRows, part.saturation, policy.gainExponent * junctions),
     saturation: saturationLine(part.saturation, part.model?.betaR ?? null, darlington),
     baseEmitter,
     hasVbe: baseEmitter.maximum.icA.length > 0,

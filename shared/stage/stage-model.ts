@@ -5,6 +5,7 @@ import { type ClampVoltages, clampVoltages } from './clamp-voltages.ts';
 import { collectorPath, loadDegC, type LoadEnds } from './collector-path.ts';
 import { cornerSpace, type CornerSpace, type CornerVariable } from './corners.ts';
 import { type DriveSource, driveSource } from './drive-source.ts';
+import { insideModel, type InsideModel } from './internal-resistors.ts';
 import { partModel, type PartModel } from './part-model.ts';
 import type { StageInput } from './stage-input.ts';
 
@@ -36,6 +37,8 @@ export interface StageModel {
   readonly drives: readonly DriveSource[];
   /** Ends of RBE, Ω; Infinity where none is fitted. */
   readonly shuntOhm: readonly [number, number];
+  /** null for parts without resistors inside. */
+  readonly inside: InsideModel | null;
   /** null for loads that are no coil, and for coils without clamp. */
   readonly clamp: ClampVoltages | null;
   /** Share of the time conduction loss counts. */
@@ -48,10 +51,12 @@ const ENDS = [0, 1] as const;
 /** Everything of a stage that its base resistor does not change. */
 export function stageModel(input: StageInput): StageModel {
   const { shuntResistor, supplyV, ambientDegC, policy, drive } = input;
+  const inside = insideModel(input);
   const part = partModel(
     input.transistor,
     policy,
     input.transistor.darlington || input.topology === 'low-side-darlington',
+    inside,
   );
   const supplies = [supplyV.min, supplyV.max] as const;
   const ambients = [ambientDegC.min, ambientDegC.max] as const;
@@ -81,10 +86,11 @@ export function stageModel(input: StageInput): StageModel {
   return {
     input,
     part,
-    corners: cornerSpace(lacking(input)),
+    corners: cornerSpace(lacking(input, inside)),
     conditions,
     drives,
     shuntOhm: [shunt.valueOhm * (1 - shunt.tolerance), shunt.valueOhm * (1 + shunt.tolerance)],
+    inside,
     clamp: input.load.kind === 'coil' ? clampVoltages(input) : null,
     conductionShare:
       input.frequencyHz > 0 && input.frequencyHz >= policy.averagingHz ? input.duty : 1,
@@ -101,9 +107,14 @@ export function stageModel(input: StageInput): StageModel {
 }
 
 /** Variables the corners of a stage do without. */
-function lacking({ shuntResistor, load }: StageInput): CornerVariable[] {
+function lacking(
+  { shuntResistor, load }: StageInput,
+  inside: InsideModel | null,
+): CornerVariable[] {
   const lacks: CornerVariable[] = [];
-  if (shuntResistor === null) lacks.push('rbe');
+  if (shuntResistor === null || inside !== null) lacks.push('rbe');
+  if (inside === null) lacks.push('r1');
+  if (inside?.ratio == null) lacks.push('ratio');
   if (load.kind === 'lamp') lacks.push('load');
   if (load.kind !== 'led-string') lacks.push('vf');
   return lacks;

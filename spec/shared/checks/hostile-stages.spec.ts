@@ -50,6 +50,65 @@ const BASES: unknown[] = [
     supplyV: { min: 10, max: 20, surge: 60, dip: 6 },
     load: { kind: 'resistor', resistanceOhm: 220, tolerance: 0.1 },
   },
+  {
+    ...RELAY_FILE,
+    load: {
+      kind: 'led-string',
+      count: 3,
+      forwardV: { min: 1.8, max: 2.4 },
+      resistanceOhm: 1000,
+      tolerance: 0.05,
+      maximumA: 0.03,
+      minimumA: 0.01,
+    },
+  },
+  { ...HIGH_SIDE_FILE, load: { kind: 'lamp', nominalV: 24, currentA: 0.02, coldRatio: 12 } },
+  {
+    ...RELAY_FILE,
+    topology: 'low-side-darlington',
+    transistor: { ...RELAY_FILE.transistor, darlington: true },
+  },
+  {
+    ...RELAY_FILE,
+    topology: 'low-side-pre-biased',
+    frequencyHz: 10,
+    duty: 0.5,
+    transistor: {
+      ...RELAY_FILE.transistor,
+      internal: {
+        r1Ohm: 4700,
+        r2Ohm: 1e4,
+        input: {
+          onV: 2.5,
+          onOutputA: 0.02,
+          offV: 0.3,
+          currentA: 1e-3,
+          testV: 5,
+          gi: 50,
+          maximumV: 20,
+        },
+      },
+    },
+  },
+  {
+    ...RELAY_FILE,
+    topology: 'level-translator',
+    supplyV: { min: 4.5, max: 5.5 },
+    load: {
+      kind: 'logic-input',
+      pullUpOhm: 4700,
+      tolerance: 0.05,
+      ratingW: 0.1,
+      count: 2,
+      vilV: 0.8,
+      vihV: 2,
+      leakageA: 1e-6,
+      lowCurrentA: 4e-4,
+      capacitanceF: 1e-11,
+      wiringF: 1e-11,
+      riseTimeLimitSec: 1e-6,
+    },
+  },
 ];
 
 /** A stage file with up to six of its values replaced by numbers good, odd and absurd. */

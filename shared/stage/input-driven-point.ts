@@ -1,0 +1,64 @@
+import { INSIDE_VBE_V } from './internal-resistors.ts';
+import { OperatingPoint } from './operating-point.ts';
+import type { StageModel } from './stage-model.ts';
+
+/**
+ * The on state of a pre-biased part whose sheet prints VI(on): the voltage at its input decides whether it is on, and
+ * VO(on) is its VCE(sat). `vbeV` and `ibA` are the terminal figures V_I and I_I.
+ */
+export class InputDrivenPoint extends OperatingPoint {
+  private readonly leastR1Ohm: number;
+  /** Input conductance the sheet tests, A/V; 0 where it prints none. */
+  private readonly testedAPerV: number;
+
+  constructor(model: StageModel) {
+    super(model);
+    this.leastR1Ohm = model.inside?.r1Ohm[0] ?? Infinity;
+    const input = model.inside?.input;
+    this.testedAPerV =
+      input?.currentA == null || input.testV === null ? 0 : input.currentA / input.testV;
+  }
+
+  override solve(tjDegC: number): boolean {
+    const { fullA } = this.condition;
+    this.tjDegC = tjDegC;
+    this.solveInput();
+    this.ibA = this.driveA;
+    this.gain = Infinity;
+    this.saturated = true;
+    this.forcedBeta = this.ibA > 0 ? fullA / this.ibA : Infinity;
+    this.overdrive = Infinity;
+    this.piece = this.condition.piece;
+    this.rceSatOhm = this.slopeOhm(tjDegC);
+    if (this.fullDrop && this.model.part.saturation !== null) this.dropAcross(tjDegC, 0);
+    else {
+      this.icA = fullA;
+      this.vceV = 0;
+    }
+    this.sumPower();
+    return this.saturated;
+  }
+
+  /** V_I behind the output and the outer RB, with the larger of the two input currents the sheet allows. */
+  private solveInput(): void {
+    const { openV, sourceOhm, testedA, beyondOhm } = this.drive;
+    this.inputBehind(openV, sourceOhm + this.outerRbOhm);
+    this.beyondPin = this.driveA > testedA * (1 + 1e-12);
+    if (this.beyondPin) {
+      const bentV = openV + (beyondOhm - sourceOhm) * testedA;
+      this.inputBehind(bentV, beyondOhm + this.outerRbOhm);
+    }
+  }
+
+  private inputBehind(openV: number, ohm: number): void {
+    const byR1V = (openV * this.leastR1Ohm + INSIDE_VBE_V * ohm) / (this.leastR1Ohm + ohm);
+    const byTestV = openV / (1 + ohm * this.testedAPerV);
+    this.vbeV = Math.max(0, Math.min(openV, byR1V, byTestV));
+    this.driveA = Math.max(0, (openV - this.vbeV) / ohm);
+  }
+}
+
+/** The operating point that suits a stage's topology. */
+export function operatingPoint(model: StageModel): OperatingPoint {
+  return model.inside?.byInput === true ? new InputDrivenPoint(model) : new OperatingPoint(model);
+}
