@@ -19,8 +19,12 @@ export function openApiDocument(endpoints: readonly Endpoint[]): object {
   });
 }
 
+const FILE = {
+  'application/octet-stream': { schema: { type: 'string', format: 'binary' } },
+} as const;
+
 function pathOf({ route, access }: Endpoint): RouteConfig {
-  const status = route.status ?? (route.reply === null ? 204 : 200);
+  const status = route.status ?? (route.reply === null && route.file !== true ? 204 : 200);
   const etag = {
     ETag: { description: 'Version of the resource', schema: { type: 'string' as const } },
   };
@@ -39,6 +43,7 @@ function pathOf({ route, access }: Endpoint): RouteConfig {
         description: 'Done',
         ...(route.guarded === true && { headers: etag }),
         ...(route.reply && { content: { 'application/json': { schema: route.reply } } }),
+        ...(route.file === true && { content: FILE }),
       },
       default: {
         description: 'Refused',

@@ -1,8 +1,11 @@
 import { In, type EntityManager } from 'typeorm';
 import type { SearchHit } from '../../shared/contract/search.ts';
+import { utcDate } from '../../shared/report/bom-note-text.ts';
 import { naturalOrder } from '../../shared/report/natural-order.ts';
 import { revisionLetter, STATE_WORDS } from '../../shared/review/revision-state.ts';
 import type { Actor } from '../audit/act.ts';
+import { issuedRow } from '../bom-notes/issued-note.ts';
+import { BomNoteEntity } from '../bom-notes/bom-note-entity.ts';
 import { partList } from '../parts/part-list.ts';
 import { projectIdsOf } from '../projects/project-access.ts';
 import { ProjectEntity } from '../projects/project-entity.ts';
@@ -10,7 +13,7 @@ import { revisionLines } from '../revisions/revision-line.ts';
 
 const MOST_HITS = 20;
 
-/** Projects, stages and parts whose names contain the text; of what the person may see only. */
+/** Projects, stages, parts and issued notes whose names contain the text; of what the person may see only. */
 export async function findByText(
   manager: EntityManager,
   actor: Actor,
@@ -23,6 +26,7 @@ export async function findByText(
     ...projectHits(projects, wanted),
     ...(await stageHits(manager, projects, wanted)),
     ...(await partHits(manager, wanted)),
+    ...(await noteHits(manager, projects, wanted)),
   ];
   return hits.sort((a, b) => rank(a, wanted) - rank(b, wanted)).slice(0, MOST_HITS);
 }
@@ -75,6 +79,25 @@ async function partHits(manager: EntityManager, wanted: string): Promise<SearchH
     title: partNumber,
     detail: summary,
   }));
+}
+
+async function noteHits(
+  manager: EntityManager,
+  projects: readonly ProjectEntity[],
+  wanted: string,
+): Promise<SearchHit[]> {
+  const projectId = In(projects.map(({ id }) => id));
+  const order = { issuedAtMs: 'DESC' } as const;
+  const notes = await manager.find(BomNoteEntity, { where: { projectId }, order });
+  return notes
+    .map((entity) => ({ ...issuedRow(entity), projectId: entity.projectId }))
+    .filter(({ identification }) => identification.toLowerCase().includes(wanted))
+    .map(({ id, identification, issuedAtMs, issuedBy, projectId: project }) => ({
+      kind: 'bom-note',
+      link: `/p/${project}/bom-note/${id}`,
+      title: identification,
+      detail: `issued ${utcDate(issuedAtMs)} by ${issuedBy}`,
+    }));
 }
 
 /** What begins with the text comes first. */

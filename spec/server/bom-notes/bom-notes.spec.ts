@@ -183,6 +183,20 @@ describe('BOM notes over HTTP', () => {
       expect((await floor.outsider.client.get(`/api/bom-notes/${issued.id}`)).status).toBe(404);
     });
 
+    it('is found by its number', async () => {
+      const found = await floor.designer.client.get('/api/search?text=bom-0001');
+      expect((found.body as { hits: object[] }).hits).toEqual([
+        {
+          kind: 'bom-note',
+          link: `/p/${floor.projectId}/bom-note/${issued.id}`,
+          title: 'CR-40-BOM-0001',
+          detail: `issued 2026-01-12 by ${floor.exporter.name}`,
+        },
+      ]);
+      const foreign = await floor.outsider.client.get('/api/search?text=bom-0001');
+      expect((foreign.body as { hits: object[] }).hits).toEqual([]);
+    });
+
     it('refuses what is not locked, naming it, and issues nothing', async () => {
       const before = (await floor.exporter.client.get(notesPath)).body as object;
       const reply = await issue(floor.exporter, q1, q3);

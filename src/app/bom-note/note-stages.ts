@@ -26,6 +26,10 @@ import { StateChip } from '../ui/state-chip.ts';
     }
   </ul>`,
   styles: `
+    :host {
+      --mat-checkbox-disabled-label-color: var(--mat-sys-on-surface-variant);
+    }
+
     ul {
       display: grid;
       padding: 0;
