@@ -21,6 +21,7 @@ import { StateChip } from '../ui/state-chip.ts';
 import { SymbolText } from '../ui/symbol-text.ts';
 import { StatusAnnouncer } from '../ui/status-announcer.ts';
 import { StripCell, TitleStrip } from '../ui/title-strip.ts';
+import { VerdictMark } from '../ui/verdict-mark.ts';
 import { BrowserEngine } from './browser-engine.ts';
 import { CircuitPanel } from './circuit-panel.ts';
 import { fieldId } from './field-row.ts';
@@ -34,6 +35,7 @@ import { StageStore } from './stage-store.ts';
 import { submitNote } from './submit-note.ts';
 import type { KeepsWork } from './unsaved-guard.ts';
 import { VerdictPanel } from './verdict-panel.ts';
+import { verdictSentence } from './verdict-words.ts';
 import { WindowLadder } from './window-ladder.ts';
 
 type Tab = 'circuit' | 'values' | 'verdicts';
@@ -60,6 +62,7 @@ const TABS: readonly (readonly [Tab, string])[] = [
     StripCell,
     SymbolText,
     TitleStrip,
+    VerdictMark,
     VerdictPanel,
     WindowLadder,
   ],
@@ -115,6 +118,10 @@ export class StageSheet implements KeepsWork {
       changed: standing.filter(({ revision, latestRevision }) => latestRevision > revision),
       verified: transistor !== null && standing.length > 0 && standing.every((p) => p.verified),
     };
+  });
+  protected readonly sentence = computed(() => {
+    const evaluation = this.store.evaluation();
+    return evaluation === null ? '' : verdictSentence(evaluation);
   });
   protected readonly note = computed(() => {
     const view = this.view();

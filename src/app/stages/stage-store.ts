@@ -1,4 +1,14 @@
-import { computed, DestroyRef, effect, inject, Injectable, signal, untracked } from '@angular/core';
+import {
+  afterNextRender,
+  computed,
+  DestroyRef,
+  effect,
+  inject,
+  Injectable,
+  Injector,
+  signal,
+  untracked,
+} from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { Subject } from 'rxjs';
 import { readProject, type Project } from '../../../shared/contract/project.ts';
@@ -26,7 +36,9 @@ import type { FieldPath } from './stage-fields.ts';
 export class StageStore {
   private readonly api = inject(ApiClient);
   private readonly engine = inject(BrowserEngine);
+  private readonly injector = inject(Injector);
   private readonly inputs = new Subject<StageInput>();
+  private changedAtMs: number | null = null;
   private readonly held = signal<Revision | null>(null);
   private readonly current = signal<Draft | null>(null);
   private readonly judged = signal<Judgement | null>(null);
@@ -58,6 +70,7 @@ export class StageStore {
       .pipe(takeUntilDestroyed())
       .subscribe((judgement) => {
         this.judged.set(judgement);
+        this.measure();
         if (judgement.sizing !== null) this.sizing.set(judgement.sizing);
       });
     effect(() => {
@@ -166,7 +179,18 @@ export class StageStore {
     this.replaced.update((count) => count + 1);
   }
 
+  /** From the change to verdicts on the screen; shows up in the browser's performance tools. */
+  private measure(): void {
+    const start = this.changedAtMs;
+    this.changedAtMs = null;
+    if (start === null) return;
+    afterNextRender(() => performance.measure('change to verdicts', { start }), {
+      injector: this.injector,
+    });
+  }
+
   private change(draft: Draft, field: string): void {
+    this.changedAtMs = performance.now();
     this.current.set(draft);
     this.wrong.set([]);
     this.history.record(draft, field, Date.now());

@@ -50,6 +50,9 @@ export function measure(root: MathNode): Measured | string {
       case 'ParenthesisNode':
         return below(shape.content ?? refuse('An empty bracket.'));
       case 'OperatorNode':
+        if (shape.fn === 'pow' && isWord(shape.args?.[0])) {
+          refuse('Put the quantity in brackets before its power, such as (12 V)^2.');
+        }
         return operate(String(shape.fn), (shape.args ?? []).map(below));
       case 'FunctionNode':
         return call(functionName(shape.fn), (shape.args ?? []).map(below));
@@ -65,6 +68,9 @@ export function measure(root: MathNode): Measured | string {
     throw error;
   }
 }
+
+/** In `12V^2` only the unit would be squared, which nobody means. */
+const isWord = (node: MathNode | undefined) => node?.type === 'SymbolNode';
 
 const functionName = (fn: unknown): string => {
   const name = (fn as { name?: unknown } | undefined)?.name;
