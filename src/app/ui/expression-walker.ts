@@ -50,10 +50,7 @@ export function measure(root: MathNode): Measured | string {
       case 'ParenthesisNode':
         return below(shape.content ?? refuse('An empty bracket.'));
       case 'OperatorNode':
-        if (shape.fn === 'pow' && isWord(shape.args?.[0])) {
-          refuse('Put the quantity in brackets before its power, such as (12 V)^2.');
-        }
-        return operate(String(shape.fn), (shape.args ?? []).map(below));
+        return operator(shape, below);
       case 'FunctionNode':
         return call(functionName(shape.fn), (shape.args ?? []).map(below));
       default:
@@ -71,6 +68,13 @@ export function measure(root: MathNode): Measured | string {
 
 /** In `12V^2` only the unit would be squared, which nobody means. */
 const isWord = (node: MathNode | undefined) => node?.type === 'SymbolNode';
+
+function operator({ fn, args = [] }: Shape, below: (node: MathNode) => Measured): Measured {
+  if (fn === 'pow' && isWord(args[0])) {
+    refuse('Put the quantity in brackets before its power, such as (12 V)^2.');
+  }
+  return operate(String(fn), args.map(below));
+}
 
 const functionName = (fn: unknown): string => {
   const name = (fn as { name?: unknown } | undefined)?.name;
