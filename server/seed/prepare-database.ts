@@ -20,7 +20,7 @@ export async function prepareDatabase(
   services: Services,
   tell: (line: string) => void,
 ): Promise<void> {
-  const { config, database, demo, hashes, now, signIns } = services;
+  const { config, database, demo, hashes, now } = services;
   await loadLibrary(database, now());
   if (!config.demo) return;
   const { people, workspace } = await database.read(async (manager) => ({
@@ -30,7 +30,7 @@ export async function prepareDatabase(
   if (people.length === 0) {
     tell('Making the demo: two projects with their history. This takes a few seconds, once.');
     const crew = await DemoCrew.gather(database, hashes, now());
-    await new DemoStory(database, crew, new DemoDesk(database, signIns, crew)).tell();
+    await new DemoStory(database, crew, new DemoDesk(database, crew)).tell();
     await nameWorkspace(database, now());
   } else if (workspace === null) {
     throw new StartRefusal(
