@@ -92,6 +92,12 @@ describe('the demo', () => {
     expect(await kinds('approver')).toEqual(['to-approve']);
   });
 
+  it('has an issued note that search finds', async () => {
+    const client = await enter('exporter');
+    const { body } = await client.get('/api/search?text=CR-40-BOM');
+    expect(body.hits).toMatchObject([{ kind: 'bom-note', title: 'CR-40-BOM-0001' }]);
+  });
+
   it('keeps its history in order and its chain whole', async () => {
     const chain = await server.database.read(verifyChain);
     expect(chain).toMatchObject({ whole: true, faults: [] });
