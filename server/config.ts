@@ -112,6 +112,8 @@ function readSecrets(text: string | undefined): string[] {
 function readTrustProxy(text: string | undefined): Config['trustProxy'] {
   if (text === undefined || text === '' || text === '0') return false;
   if (/^[1-9]$/.test(text)) return Number(text);
+  if (/^\d+$/.test(text))
+    throw new StartRefusal('SINKWELL_TRUST_PROXY: expected at most 9 proxies');
   const addresses = text.split(',').map((address) => address.trim());
   const named =
     /^(loopback|linklocal|uniquelocal|[\d.]+(\/\d{1,2})?|[\da-f:]*:[\da-f:]*(\/\d{1,3})?)$/i;

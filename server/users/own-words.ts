@@ -1,4 +1,5 @@
 import type { EntityManager } from 'typeorm';
+import { ProjectEntity } from '../projects/project-entity.ts';
 import type { PersonEntity } from './person-entity.ts';
 import { WorkspaceEntity } from './workspace-entity.ts';
 
@@ -8,5 +9,6 @@ export async function ownWordsOf(
   person: Pick<PersonEntity, 'name' | 'email'>,
 ): Promise<string[]> {
   const workspace = await manager.findOneBy(WorkspaceEntity, { id: 1 });
-  return [person.name, person.email, workspace?.name ?? ''];
+  const projects = await manager.find(ProjectEntity, { select: { id: true, code: true } });
+  return [person.name, person.email, workspace?.name ?? '', ...projects.map(({ code }) => code)];
 }

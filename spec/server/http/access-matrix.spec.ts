@@ -232,7 +232,7 @@ function barred(access: Access): number[] {
 /** The status as far as access goes: a wrong set-up code, own session or password is another matter. */
 function refusal(reply: Reply): number {
   const { code, detail } = (reply.body ?? {}) as { code?: string; detail?: string };
-  if (code === 'wrong-credentials' || /code is not the one/.test(detail ?? '')) return 0;
+  if (code === 'wrong-credentials' || (detail ?? '').includes('code is not the one')) return 0;
   return reply.status;
 }
 
