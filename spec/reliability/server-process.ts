@@ -11,7 +11,8 @@ const ROOT = path.resolve(import.meta.dirname, '../..');
 
 /** The server's sources as one plain JavaScript file: a process of its own starts from it in a second. */
 export function bundleServer(): string {
-  const outfile = path.join(ROOT, 'dist', 'reliability', `server-${process.pid}.mjs`);
+  // as deep as dist/node/server/seed, from where the part library is found
+  const outfile = path.join(ROOT, 'dist/reliability/server/seed', `server-${process.pid}.mjs`);
   buildSync({
     ...{ entryPoints: [path.join(ROOT, 'server/main.ts')], outfile, bundle: true },
     ...{

@@ -51,8 +51,8 @@ describe('password hashes', () => {
       known.push(await time(stored));
       unknown.push(await time(null));
     }
-    const median = (times: number[]): number => times.sort((a, b) => a - b)[times.length / 2]!;
-    expect(Math.abs(median(known) - median(unknown))).toBeLessThan(15);
+    const typical = (times: number[]): number => times.sort((a, b) => a - b)[times.length / 4]!;
+    expect(Math.abs(typical(known) - typical(unknown))).toBeLessThan(15);
   });
 
   it('S-05: run two at once, keep fifty waiting, then answer busy; memory and event loop stay calm', async () => {

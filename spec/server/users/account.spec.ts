@@ -140,9 +140,10 @@ describe('an account', () => {
           shapes.add(`${reply.status} ${reply.text} ${names}`);
         }
       }
-      const median = (of: number[]): number => of.sort((a, b) => a - b)[of.length / 2]!;
+      // the quicker quarter: what else the machine does shows in the slower ones
+      const typical = (of: number[]): number => of.sort((a, b) => a - b)[of.length / 4]!;
       expect(shapes.size).toBe(1);
-      expect(Math.abs(median(times.known) - median(times.unknown))).toBeLessThan(15);
+      expect(Math.abs(typical(times.known) - typical(times.unknown))).toBeLessThan(15);
       await open.stop();
     });
 
