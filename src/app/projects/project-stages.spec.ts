@@ -87,17 +87,19 @@ describe('the stages of a project', () => {
       ],
     });
     const http = TestBed.inject(HttpTestingController);
-    const harness = await RouterTestingHarness.create(`/p/${PROJECT}/stages${query}`);
+    // Not awaited yet: the page is stable only once its calls have been answered.
+    const opening = RouterTestingHarness.create(`/p/${PROJECT}/stages${query}`);
     const flush = async (path: string, body: object) => {
       const call = await vi.waitFor(() =>
         http.expectOne((request) => request.url.split('?')[0] === path),
       );
       call.flush(body);
-      await harness.fixture.whenStable();
       return call.request.urlWithParams;
     };
     await flush(`/api/projects/${PROJECT}`, project);
     const asked = await flush(`/api/projects/${PROJECT}/stages`, rows);
+    const harness = await opening;
+    await harness.fixture.whenStable();
     const loader = TestbedHarnessEnvironment.loader(harness.fixture);
     return { asked, flush, harness, loader, element: harness.fixture.nativeElement as HTMLElement };
   };
@@ -125,13 +127,15 @@ describe('the stages of a project', () => {
     const { loader, flush } = await open();
     const menus = await loader.getAllHarnesses(MatMenuHarness);
     await menus[1]!.open();
-    await menus[1]!.clickItem({ text: 'Marginal' });
+    const filtering = menus[1]!.clickItem({ text: 'Marginal' });
     const filtered = await flush(`/api/projects/${PROJECT}/stages`, rows);
+    await filtering;
     expect(filtered).toContain('verdict=marginal');
     const sort = await loader.getHarness(MatSortHarness);
     const [header] = await sort.getSortHeaders({ label: 'Title' });
-    await header!.click();
+    const sorting = header!.click();
     await flush(`/api/projects/${PROJECT}/stages`, rows);
+    await sorting;
     expect(TestBed.inject(Router).url).toContain('verdict=marginal&sort=title');
   });
 
