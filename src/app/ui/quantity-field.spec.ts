@@ -138,6 +138,14 @@ describe('QuantityField', () => {
     expect(fixture.componentInstance.resistor.valid).toBe(true);
   });
 
+  it('shows figure and unit whole and selected on entering, so that typing replaces them', async () => {
+    box().focus();
+    expect(box().value.replace('\u00a0', ' ')).toBe('1.44 kΩ');
+    expect([box().selectionStart, box().selectionEnd]).toEqual([0, box().value.length]);
+    await fixture.whenStable();
+    expect([box().selectionStart, box().selectionEnd]).toEqual([0, box().value.length]);
+  });
+
   it('holds both ends of a pair and refuses them in the wrong order', async () => {
     await type('30', 'supply-max');
     expect(fixture.componentInstance.supply.value).toEqual({ min: 21.6, max: 30 });

@@ -117,9 +117,10 @@ export class QuantityField implements ControlValueAccessor, Validator {
 
   protected focus(): void {
     this.focused.set(true);
-    queueMicrotask(() => {
-      this.box().nativeElement.select();
-    });
+    // At once, not with the next rendering: that would undo the selection.
+    const box = this.box().nativeElement;
+    box.value = this.shownText();
+    box.select();
   }
 
   protected blur(): void {

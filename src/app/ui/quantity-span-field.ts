@@ -109,9 +109,9 @@ export class QuantitySpanField implements ControlValueAccessor, Validator {
 
   protected focus(key: 'min' | 'max', box: HTMLInputElement): void {
     this.focused.set(key);
-    queueMicrotask(() => {
-      box.select();
-    });
+    // At once, not with the next rendering: that would undo the selection.
+    box.value = this.text(key, key === 'min' ? this.low : this.high);
+    box.select();
   }
 
   protected blur(entry: QuantityEntry): void {
