@@ -14,6 +14,10 @@ const NEEDS: Partial<Record<Topology, TopologyNeeds>> = {
     loads: ['coil', 'resistor', 'led-string', 'lamp', 'logic-input'],
   },
   'high-side-pnp': { polarity: 'pnp', loads: ['coil', 'resistor', 'led-string', 'lamp'] },
+  'two-transistor-high-side': {
+    polarity: 'pnp',
+    loads: ['coil', 'resistor', 'led-string', 'lamp'],
+  },
   'low-side-darlington': {
     polarity: 'npn',
     loads: ['coil', 'resistor', 'led-string', 'lamp', 'logic-input'],
@@ -43,6 +47,11 @@ export function obstacleTo(input: StageInput): Obstacle | null {
   }
   if (transistor.polarity !== needs.polarity) {
     const text = `${transistor.partNumber} is ${transistor.polarity.toUpperCase()}, but ${topology} needs ${needs.polarity.toUpperCase()}.`;
+    return { verdict: 'fail', finding: { id: 'polarity', text } };
+  }
+  const front = input.preDriver?.transistor;
+  if (topology === 'two-transistor-high-side' && front?.polarity === 'pnp') {
+    const text = `${front.partNumber} is PNP, but the transistor in front must be NPN.`;
     return { verdict: 'fail', finding: { id: 'polarity', text } };
   }
   return null;

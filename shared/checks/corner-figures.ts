@@ -1,9 +1,8 @@
 import { cornerNamed, cornerNumber } from '../stage/corners.ts';
-import { operatingPoint } from '../stage/input-driven-point.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageInput } from '../stage/stage-input.ts';
-import { stageModel } from '../stage/stage-model.ts';
 import type { Corner, CornerFigures, Nominal } from './evaluation.ts';
+import { judgeFor } from './judge.ts';
 
 /** The nominal figures have no corner. */
 const NOMINAL_CORNER: Corner = {};
@@ -76,16 +75,20 @@ function outputV(point: OperatingPoint): number {
     : acrossV;
 }
 
+/** Stands for a base resistor left open, Ω: nothing comes through. */
+const OPEN_OHM = 1e12;
+
 /**
- * The on state at one corner, for the drawing.
+ * The on state at one corner, for the drawing. Of a two-transistor high side the corner of a `pre-` criterion shows the
+ * transistor in front, any other the one behind.
  *
  * @param corner ends by name, as a criterion reports them; what it leaves out stands at its first end
  */
 export function figuresAtCorner(input: StageInput, corner: Corner): CornerFigures {
-  const point = operatingPoint(stageModel(input));
+  const { point, rbOhm } = pointFor(input, 'veb' in corner);
   const { corners } = point.model;
   const index = cornerNumber(corners, corner);
-  point.place(index, input.baseResistor.valueOhm ?? Infinity);
+  point.place(index, rbOhm);
   const { ambientDegC } = point.condition;
   if (corner['instant'] === 'settled') point.settle(ambientDegC);
   else point.solve(ambientDegC);
@@ -94,8 +97,19 @@ export function figuresAtCorner(input: StageInput, corner: Corner): CornerFigure
 
 /** The on state at the middle of every tolerance, settled. */
 export function nominalFigures(input: StageInput): CornerFigures {
-  const point = operatingPoint(stageModel(input));
-  point.placeNominal(input.baseResistor.valueOhm ?? Infinity);
+  const { point, rbOhm } = pointFor(input, false);
+  point.placeNominal(rbOhm);
   point.settle(point.condition.ambientDegC);
   return figuresOf(point, NOMINAL_CORNER);
+}
+
+/** The operating point of the stage's output transistor, or of the one in front of it. */
+function pointFor(input: StageInput, inFront: boolean) {
+  const rbOhm = input.baseResistor.valueOhm ?? OPEN_OHM;
+  const judge = judgeFor(input);
+  // Two transistors know of each other only after a run.
+  if (input.preDriver !== null) judge.criteria(rbOhm);
+  return inFront && judge.preJudge != null && input.preDriver !== null
+    ? { point: judge.preJudge.point, rbOhm: input.preDriver.baseResistor.valueOhm }
+    : { point: judge.point, rbOhm };
 }

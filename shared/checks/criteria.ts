@@ -29,8 +29,7 @@ function words(
   return { group, name, symbol: parts, relation, unit };
 }
 
-/** Every criterion, in the order a result lists them. */
-export const CRITERIA = {
+const OWN = {
   'overdrive-factor': on('Overdrive factor', '>=', '1', ['ODF', '']),
   'input-on': on('Input voltage while on', '>=', 'V', ['V', 'I']),
   'forced-beta': on('Forced β', '<=', '1', ['β', 'f']),
@@ -71,7 +70,22 @@ export const CRITERIA = {
   'storage-time': words('switching', 'Storage and fall time', '<=', 's', ['t', 's']),
   'tested-range': words('data', 'Figures beyond tested rows', '<=', '1'),
 } as const satisfies Record<string, CriterionWords>;
-export type CriterionId = keyof typeof CRITERIA;
+type OwnId = keyof typeof OWN;
+export type CriterionId = OwnId | `pre-${OwnId}`;
+
+/** Prefix of the criteria of the transistor in front of a two-transistor high side. */
+export const PRE = 'pre-';
+
+/** The same criteria of a transistor in front, named so. */
+const IN_FRONT = Object.fromEntries(
+  Object.entries<CriterionWords>(OWN).map(([id, each]) => [
+    PRE + id,
+    { ...each, name: `Pre-driver: ${each.name}` },
+  ]),
+) as Record<`pre-${OwnId}`, CriterionWords>;
+
+/** Every criterion, in the order a result lists them. */
+export const CRITERIA: Record<CriterionId, CriterionWords> = { ...OWN, ...IN_FRONT };
 
 const IDS = Object.keys(CRITERIA) as CriterionId[];
 

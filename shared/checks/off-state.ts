@@ -47,10 +47,18 @@ export class OffStateChecks {
     return this.off.baseOpen;
   }
 
+  /** Largest collector current since `begin`, A. */
+  largestA = 0;
+
+  begin(): void {
+    this.largestA = 0;
+  }
+
   visit(point: OperatingPoint, corner: number): void {
     const { worst, off } = this;
     const { policy, transistor, drive } = this.model.input;
     off.solve(point);
+    this.largestA = Math.max(this.largestA, off.collectorA);
     const vbeLimitV =
       policy.offBaseV * this.model.part.junctions +
       this.model.part.vbeTempcoVPerK * (point.tjDegC - SHEET_DEG_C);

@@ -2,7 +2,7 @@ import { cornerNumber, type CornerSpace } from '../stage/corners.ts';
 import { operatingPoint } from '../stage/input-driven-point.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageInput } from '../stage/stage-input.ts';
-import { type StageModel, stageModel } from '../stage/stage-model.ts';
+import { type StageModel, stageModel, type Surroundings } from '../stage/stage-model.ts';
 import type { Criterion } from './evaluation.ts';
 import { InputChecks } from './input.ts';
 import { LoadChecks } from './load.ts';
@@ -41,6 +41,11 @@ function probeCorners(corners: CornerSpace): number[] {
   );
 }
 
+/** Somebody who needs a figure of every corner besides the criteria. */
+export interface CornerObserver {
+  visit(point: OperatingPoint, corner: number): void;
+}
+
 /** What a run over the corners found besides the criteria. */
 export interface CornerTraits {
   /** Quantities used above their last tested row. */
@@ -66,13 +71,23 @@ export class StageJudge {
   private readonly turnOff: TurnOffChecks;
   private readonly switching: SwitchingChecks;
   private readonly tested: TestedRange;
+  private readonly observer: CornerObserver | null;
   private probes: readonly number[] = [];
   private readonly startW: Float64Array;
   private beyondTestBeta = false;
   private runaway = false;
 
-  constructor(input: StageInput) {
-    this.model = stageModel(input);
+  /**
+   * @param around what stands in place of logic output and load's return for one transistor of two
+   * @param observer is shown the operating point of every corner
+   */
+  constructor(
+    input: StageInput,
+    around: Surroundings = {},
+    observer: CornerObserver | null = null,
+  ) {
+    this.observer = observer;
+    this.model = stageModel(input, around);
     this.point = operatingPoint(this.model);
     this.on = new OnStateChecks(this.model, this.worst);
     this.off = new OffStateChecks(this.model, this.worst);
@@ -95,6 +110,16 @@ export class StageJudge {
     standOffState(this.model, this.worst, this.off.baseOpen);
     const { corners, input } = this.model;
     return [...this.worst.criteria(corners, input.policy.marginalBand), this.tested.criterion()];
+  }
+
+  /** Number of corners a run goes through. */
+  get cornerCount(): number {
+    return this.model.corners.count;
+  }
+
+  /** Largest collector current of the last run's off states, A. */
+  get largestOffA(): number {
+    return this.off.largestA;
   }
 
   /** What the last run found. */
@@ -136,6 +161,7 @@ export class StageJudge {
     this.turnOff.begin();
     this.load.begin();
     this.tested.begin();
+    this.off.begin();
     this.beyondTestBeta = false;
     this.runaway = false;
     const switches = model.input.frequencyHz > 0;
@@ -161,6 +187,7 @@ export class StageJudge {
         this.input?.visitOff(corner);
       }
       this.notice(point);
+      this.observer?.visit(point, corner);
     }
   }
 

@@ -186,4 +186,14 @@ export const DECISIONS: readonly MethodDecision[] = [
     title: 'Off state of a pre-biased part',
     text: 'The low level is held to VI(off) as input-off, which takes the place of the off-state base voltage. The collector current is computed behind RB + R1 and R2.',
   },
+  {
+    id: 'two-transistor-passes',
+    title: 'What the two transistors of a high side know of each other',
+    text: 'VEB behind the NPN is the smallest and largest over all corners of the PNP with its base resistor pulled to 0 V, at the same supply and ambient, start and settled alike. The drop of the NPN is its largest over all its corners there. The PNP is held off against the largest off-state current of the NPN at any corner. The pin is judged at the NPN, so the PNP has no drive current of its own; each transistor counts its own tested range.',
+  },
+  {
+    id: 'two-transistor-nominal',
+    title: 'Nominal figures of a two-transistor high side',
+    text: 'Those of the PNP, with the nominal drop of the NPN as its low level; the drive current is that of RB.',
+  },
 ];

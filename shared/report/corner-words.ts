@@ -1,4 +1,4 @@
-import type { CriterionId } from '../checks/criteria.ts';
+import { type CriterionId, PRE } from '../checks/criteria.ts';
 import type { Corner } from '../checks/evaluation.ts';
 
 /** How each end of a corner's variable is said: first end, second end. */
@@ -13,6 +13,7 @@ const WORDS: Record<string, Record<string, string>> = {
   vbe: { min: 'VBE low', max: 'VBE high' },
   vceSat: { '0': 'VCE zero', max: 'VCE(sat) high' },
   instant: { start: 'at start', settled: 'settled' },
+  veb: { min: 'VEB low', max: 'VEB high' },
   vf: { min: 'VF low', max: 'VF high' },
   r1: { '-': 'R1 low', '+': 'R1 high' },
   ratio: { '-': 'R2/R1 low', '+': 'R2/R1 high' },
@@ -72,10 +73,11 @@ const JUST_SWITCHED_OFF: readonly string[] = [
  * @param corner the ends it stands at; ends the criterion does not depend on are left out
  */
 export function cornerWords(corner: Corner, criterionId: string): string {
-  const named = NAMED[criterionId as CriterionId] ?? Object.keys(WORDS);
+  const own = criterionId.startsWith(PRE) ? criterionId.slice(PRE.length) : criterionId;
+  const named = NAMED[own as CriterionId] ?? Object.keys(WORDS);
   const words = named
     .map((variable) => WORDS[variable]?.[corner[variable] ?? ''])
     .filter((word) => word !== undefined);
-  if (JUST_SWITCHED_OFF.includes(criterionId)) words.push('just switched off');
+  if (JUST_SWITCHED_OFF.includes(own)) words.push('just switched off');
   return words.join(', ');
 }

@@ -14,6 +14,11 @@ export const DECIDED_BY_RB: readonly CriterionId[] = [
   'reset-off',
   'storage-time',
   'tested-range',
+  'pre-overdrive-factor',
+  'pre-forced-beta',
+  'pre-collector-current',
+  'pre-dissipation',
+  'pre-tested-range',
 ];
 
 /** Movement between the ends of the window above which a criterion counts as RB-dependent. */
@@ -21,7 +26,7 @@ const MOVES = 0.01;
 
 /** Ids of the criteria that move between two judged values; `tested-range` always counts. */
 export function movingCriteria(at: readonly Criterion[], other: readonly Criterion[]): Set<string> {
-  const moving = new Set<string>(['tested-range']);
+  const moving = new Set<string>(['tested-range', 'pre-tested-range']);
   for (const criterion of at) {
     const end = other.find(({ id }) => id === criterion.id);
     if (end !== undefined && moves(criterion.value, end.value)) moving.add(criterion.id);

@@ -1,5 +1,5 @@
 import { obstacleTo } from '../checks/applicability.ts';
-import { StageJudge } from '../checks/stage-judge.ts';
+import { type Judge, judgeFor } from '../checks/judge.ts';
 import type { StageInput } from '../stage/stage-input.ts';
 import { preferredValues } from '../units/preferred-values.ts';
 import { conflictAt } from './conflict.ts';
@@ -31,7 +31,7 @@ const NOTHING: Sizing = {
  */
 export function sizeStage(input: StageInput): Sizing {
   if (obstacleTo(input) !== null) return NOTHING;
-  const judge = new StageJudge(input);
+  const judge = judgeFor(input);
   const judged = judgedValues(input, judge);
   const dependent = settledDependence(judged);
   const candidates = judged.map((value) => candidateOf(value, dependent));
@@ -54,7 +54,7 @@ export function sizeStage(input: StageInput): Sizing {
   };
 }
 
-function judgedValues(input: StageInput, judge: StageJudge): JudgedValue[] {
+function judgedValues(input: StageInput, judge: Judge): JudgedValue[] {
   const { series, smallestOhm, largestOhm } = input.policy;
   const values = preferredValues(series, smallestOhm, largestOhm);
   const probed = values.map((valueOhm) => judge.probeMargin(valueOhm));

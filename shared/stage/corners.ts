@@ -18,6 +18,8 @@ export const CORNER_VARIABLES = {
   /** Resistors inside a pre-biased part: R1, and R2/R1. */
   r1: ['-', '+'],
   ratio: ['-', '+'],
+  /** Base–emitter voltage of the transistor behind a pre-driver. */
+  veb: ['min', 'max'],
 } as const satisfies Record<string, readonly [string, string]>;
 export type CornerVariable = keyof typeof CORNER_VARIABLES;
 

@@ -15,7 +15,8 @@ export interface DriveSource {
 /** Judgement, not measurement: how much steeper the output is beyond its tested current. */
 const BEYOND_TESTED = 3;
 
-const stiff = (openV: number): DriveSource => ({
+/** A voltage without resistance, tested against nothing. */
+export const stiffSource = (openV: number): DriveSource => ({
   openV,
   sourceOhm: 0,
   testedA: Infinity,
@@ -45,14 +46,14 @@ export function driveSource(
   const { drive } = input;
   const rail = drive.railTracksSupply ? supplyV : railV;
   if (isHighSide(input)) {
-    return strong ? stiff(supplyV) : tested(supplyV, drive.low.levelV, 0, drive.low.currentA);
+    return strong ? stiffSource(supplyV) : tested(supplyV, drive.low.levelV, 0, drive.low.currentA);
   }
   if (drive.kind === 'open-collector') {
     const pullUpOhm = drive.pullUp.valueOhm * (1 + pullUpSign * drive.pullUp.tolerance);
     const lostV = strong ? 0 : drive.leakageA * pullUpOhm;
-    return { ...stiff(rail - lostV), sourceOhm: pullUpOhm };
+    return { ...stiffSource(rail - lostV), sourceOhm: pullUpOhm };
   }
-  if (strong) return stiff(rail);
+  if (strong) return stiffSource(rail);
   const { dropV, unloadedDropV, currentA } = drive.high;
   return tested(rail - unloadedDropV - drive.groundShiftV, dropV, unloadedDropV, currentA);
 }

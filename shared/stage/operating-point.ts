@@ -80,10 +80,10 @@ export class OperatingPoint {
     const d = (corner >> shift.drive) & 1;
     const l = (corner >> shift.load) & 1;
     const t = (corner >> shift.instant) & 1;
-    const v = (corner >> shift.vf) & 1;
+    const v = ((corner >> shift.vf) | (corner >> shift.veb)) & 1;
     const sign = ((corner >> shift.rb) & 1) === 0 ? -1 : 1;
     const condition = this.model.conditions[(s << 4) | (a << 3) | (l << 2) | (t << 1) | v];
-    const drive = this.model.drives[(s << 1) | d];
+    const drive = this.model.drives[(s << 2) | (a << 1) | d];
     if (condition === undefined || drive === undefined) return;
     this.condition = condition;
     this.drive = drive;

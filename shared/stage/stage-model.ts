@@ -31,9 +31,9 @@ export interface StageModel {
   readonly input: StageInput;
   readonly part: PartModel;
   readonly corners: CornerSpace;
-  /** By supply, ambient, load, instant and forward voltage: bit 4, 3, 2, 1, 0. */
+  /** By supply, ambient, load, instant and the load's own voltage: bit 4, 3, 2, 1, 0. */
   readonly conditions: readonly LoadCondition[];
-  /** By supply and drive: bit 1, 0. */
+  /** By supply, ambient and drive: bit 2, 1, 0. */
   readonly drives: readonly DriveSource[];
   /** Ends of RBE, Ω; Infinity where none is fitted. */
   readonly shuntOhm: readonly [number, number];
@@ -48,8 +48,18 @@ export interface StageModel {
 
 const ENDS = [0, 1] as const;
 
+/** What stands around a transistor that is only one of two in its stage. */
+export interface Surroundings {
+  /** Sources in place of the logic output, by supply, ambient and drive: bit 2, 1, 0. */
+  readonly drives?: readonly DriveSource[];
+  readonly nominalDrive?: DriveSource;
+  /** Voltage in series with the load, by supply, ambient and end: bit 2, 1, 0. V */
+  readonly seriesV?: readonly number[];
+  readonly nominalSeriesV?: number;
+}
+
 /** Everything of a stage that its base resistor does not change. */
-export function stageModel(input: StageInput): StageModel {
+export function stageModel(input: StageInput, around: Surroundings = {}): StageModel {
   const { shuntResistor, supplyV, ambientDegC, policy, drive } = input;
   const inside = insideModel(input);
   const part = partModel(
@@ -65,43 +75,54 @@ export function stageModel(input: StageInput): StageModel {
       ENDS.flatMap((l) =>
         ENDS.flatMap((t) =>
           ENDS.map((v) =>
-            loadCondition(input, part, supplies[s], {
-              ambientDegC: ambients[a],
-              settled: t === 1,
-              sign: 2 * l - 1,
-              forwardSign: 2 * v - 1,
-            }),
+            loadCondition(
+              input,
+              part,
+              supplies[s],
+              {
+                ambientDegC: ambients[a],
+                settled: t === 1,
+                sign: 2 * l - 1,
+                forwardSign: 2 * v - 1,
+              },
+              around.seriesV?.[(s << 2) | (a << 1) | v] ?? 0,
+            ),
           ),
         ),
       ),
     ),
   );
-  const drives = ENDS.flatMap((s) => [
-    driveSource(input, supplies[s], drive.railV.min, false, 1),
-    driveSource(input, supplies[s], drive.railV.max, true, -1),
-  ]);
+  const drives = ENDS.flatMap((s) =>
+    ENDS.flatMap(() => [
+      driveSource(input, supplies[s], drive.railV.min, false, 1),
+      driveSource(input, supplies[s], drive.railV.max, true, -1),
+    ]),
+  );
   const shunt = shuntResistor ?? { valueOhm: Infinity, tolerance: 0 };
   const middleV = (supplyV.min + supplyV.max) / 2;
   const room = Math.min(ambientDegC.max, Math.max(ambientDegC.min, 25));
   return {
     input,
     part,
-    corners: cornerSpace(lacking(input, inside)),
+    corners: cornerSpace(lacking(input, inside, around)),
     conditions,
-    drives,
+    drives: around.drives ?? drives,
     shuntOhm: [shunt.valueOhm * (1 - shunt.tolerance), shunt.valueOhm * (1 + shunt.tolerance)],
     inside,
     clamp: input.load.kind === 'coil' ? clampVoltages(input) : null,
     conductionShare:
       input.frequencyHz > 0 && input.frequencyHz >= policy.averagingHz ? input.duty : 1,
     nominal: {
-      condition: loadCondition(input, part, middleV, {
-        ambientDegC: room,
-        settled: true,
-        sign: 0,
-        forwardSign: 0,
-      }),
-      drive: driveSource(input, middleV, (drive.railV.min + drive.railV.max) / 2, false, 0),
+      condition: loadCondition(
+        input,
+        part,
+        middleV,
+        { ambientDegC: room, settled: true, sign: 0, forwardSign: 0 },
+        around.nominalSeriesV ?? 0,
+      ),
+      drive:
+        around.nominalDrive ??
+        driveSource(input, middleV, (drive.railV.min + drive.railV.max) / 2, false, 0),
     },
   };
 }
@@ -110,6 +131,7 @@ export function stageModel(input: StageInput): StageModel {
 function lacking(
   { shuntResistor, load }: StageInput,
   inside: InsideModel | null,
+  around: Surroundings,
 ): CornerVariable[] {
   const lacks: CornerVariable[] = [];
   if (shuntResistor === null || inside !== null) lacks.push('rbe');
@@ -117,6 +139,7 @@ function lacking(
   if (inside?.ratio == null) lacks.push('ratio');
   if (load.kind === 'lamp') lacks.push('load');
   if (load.kind !== 'led-string') lacks.push('vf');
+  if (around.seriesV === undefined) lacks.push('veb');
   return lacks;
 }
 
@@ -125,9 +148,12 @@ function loadCondition(
   part: PartModel,
   supplyV: number,
   ends: LoadEnds,
+  seriesV: number,
 ): LoadCondition {
   const coilDegC = loadDegC(input, ends);
-  const { availableV, loadOhm } = collectorPath(input, supplyV, ends);
+  const path = collectorPath(input, supplyV, ends);
+  const availableV = path.availableV - seriesV;
+  const { loadOhm } = path;
   const fullA = Math.max(0, availableV) / loadOhm;
   const { gain, baseEmitter, saturation } = part;
   return {

@@ -65,6 +65,17 @@ const BASES: unknown[] = [
   { ...HIGH_SIDE_FILE, load: { kind: 'lamp', nominalV: 24, currentA: 0.02, coldRatio: 12 } },
   {
     ...RELAY_FILE,
+    topology: 'two-transistor-high-side',
+    transistor: HIGH_SIDE_FILE.transistor,
+    baseResistor: { valueOhm: 6200, tolerance: 0.05, ratingW: 0.5 },
+    preDriver: {
+      transistor: RELAY_FILE.transistor,
+      baseResistor: { valueOhm: 4700, tolerance: 0.05, ratingW: 0.1 },
+      shuntResistor: null,
+    },
+  },
+  {
+    ...RELAY_FILE,
     topology: 'low-side-darlington',
     transistor: { ...RELAY_FILE.transistor, darlington: true },
   },
