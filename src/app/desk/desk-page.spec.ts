@@ -40,7 +40,7 @@ describe('My desk', () => {
     fixture.componentRef.setInput('view', view);
     fixture.detectChanges();
     const http = TestBed.inject(HttpTestingController);
-    (await vi.waitFor(() => http.expectOne('/api/desk'))).flush(body);
+    (await vi.waitFor(() => http.expectOne('/api/desk'), 10_000)).flush(body);
     await fixture.whenStable();
     return fixture.nativeElement as HTMLElement;
   };

@@ -67,7 +67,8 @@ const rows = {
   loads: ['coil'],
 };
 
-describe('the stages of a project', () => {
+// Harnesses read a whole page cell by cell: slow on a busy machine.
+describe('the stages of a project', { timeout: 30_000 }, () => {
   const open = async (query = '') => {
     TestBed.configureTestingModule({
       providers: [
@@ -90,8 +91,9 @@ describe('the stages of a project', () => {
     // Not awaited yet: the page is stable only once its calls have been answered.
     const opening = RouterTestingHarness.create(`/p/${PROJECT}/stages${query}`);
     const flush = async (path: string, body: object) => {
-      const call = await vi.waitFor(() =>
-        http.expectOne((request) => request.url.split('?')[0] === path),
+      const call = await vi.waitFor(
+        () => http.expectOne((request) => request.url.split('?')[0] === path),
+        10_000,
       );
       call.flush(body);
       return call.request.urlWithParams;
