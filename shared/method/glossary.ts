@@ -79,6 +79,13 @@ export const GLOSSARY: readonly GlossaryTerm[] = [
     meaning: 'A named and versioned set of limits and deratings that a project adopts.',
   },
   {
+    id: 'release-time',
+    term: 'Release time',
+    symbol: 'trel',
+    meaning:
+      'Time from turn-off until the coil’s current has fallen to its must-release value, found with the smallest clamp voltage and the largest coil current.',
+  },
+  {
     id: 'rce-sat',
     term: 'Saturation resistance',
     symbol: 'RCE(sat)',
@@ -86,11 +93,11 @@ export const GLOSSARY: readonly GlossaryTerm[] = [
       'Slope of the saturation voltage over collector current between the rows the data sheet prints. With the offset V0 it gives VCE(sat) at the current in use.',
   },
   {
-    id: 'release-time',
-    term: 'Release time',
-    symbol: 'trel',
+    id: 'vce-sat',
+    term: 'Saturation voltage',
+    symbol: 'VCE(sat)',
     meaning:
-      'Time from turn-off until the coil’s current has fallen to its must-release value, found with the smallest clamp voltage and the largest coil current.',
+      'Voltage that stays between collector and emitter of a transistor that is fully on. Times the collector current it is most of the heat.',
   },
   {
     id: 'snapshot',
@@ -117,12 +124,5 @@ export const GLOSSARY: readonly GlossaryTerm[] = [
     term: 'Tested range',
     symbol: null,
     meaning: 'The currents between the first and the last row the data sheet prints for a figure.',
-  },
-  {
-    id: 'vce-sat',
-    term: 'Saturation voltage',
-    symbol: 'VCE(sat)',
-    meaning:
-      'Voltage that stays between collector and emitter of a transistor that is fully on. Times the collector current it is most of the heat.',
   },
 ];

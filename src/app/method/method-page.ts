@@ -1,0 +1,86 @@
+import {
+  afterNextRender,
+  ChangeDetectionStrategy,
+  Component,
+  effect,
+  inject,
+  Injector,
+} from '@angular/core';
+import { toSignal } from '@angular/core/rxjs-interop';
+import { ActivatedRoute } from '@angular/router';
+import { CRITERIA, criterionIds, type CriterionGroup } from '../../../shared/checks/criteria.ts';
+import { CAUTIONS } from '../../../shared/method/cautions.ts';
+import { CRITERIA_TEXT } from '../../../shared/method/criteria-text.ts';
+import { DECISIONS } from '../../../shared/method/decisions.ts';
+import { GLOSSARY } from '../../../shared/method/glossary.ts';
+import { Icon } from '../ui/icon.ts';
+import { PageHeading } from '../ui/page-focus.ts';
+import { SymbolText } from '../ui/symbol-text.ts';
+
+const GROUP_WORDS: Record<CriterionGroup, string> = {
+  'on-state': 'On state',
+  'off-state': 'Off state',
+  'turn-off': 'Turn-off',
+  switching: 'Switching',
+  data: 'Data',
+};
+
+/** What is judged and how, the words used, and the cautions. Each criterion has an anchor of its id. */
+@Component({
+  selector: 'app-method-page',
+  imports: [Icon, PageHeading, SymbolText],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  templateUrl: './method-page.html',
+  styleUrl: './method-page.scss',
+  host: { class: 'page' },
+})
+export class MethodPage {
+  private readonly injector = inject(Injector);
+  private readonly fragment = toSignal(inject(ActivatedRoute).fragment);
+
+  protected readonly cautions = CAUTIONS;
+  protected readonly glossary = GLOSSARY;
+  protected readonly decisions = DECISIONS;
+  protected readonly groups = Object.entries(GROUP_WORDS).map(([group, name]) => ({
+    id: group,
+    name,
+    criteria: criterionIds()
+      .filter((id) => CRITERIA[id].group === group)
+      .map((id) => ({
+        id,
+        name: CRITERIA[id].name,
+        relation: CRITERIA[id].relation === '>=' ? '≥ limit' : '≤ limit',
+        ...CRITERIA_TEXT[id],
+      })),
+  }));
+  protected readonly contents = [
+    { id: 'cautions', text: 'Cautions' },
+    { id: 'criteria', text: 'Criteria' },
+    { id: 'glossary', text: 'Glossary' },
+    { id: 'decisions', text: 'Decisions' },
+  ];
+
+  constructor() {
+    effect(() => {
+      const id = this.fragment();
+      if (!id) return;
+      afterNextRender(
+        () => {
+          this.show(id);
+        },
+        { injector: this.injector },
+      );
+    });
+  }
+
+  protected go(event: Event, id: string): void {
+    event.preventDefault();
+    this.show(id);
+  }
+
+  private show(id: string): void {
+    const target = document.getElementById(id);
+    target?.scrollIntoView();
+    target?.focus({ preventScroll: true });
+  }
+}
