@@ -1,4 +1,5 @@
 import type { Routes } from '@angular/router';
+import { leaveGuard } from './parts/leave-guard.ts';
 import { unsentGuard } from './review/unsent-guard.ts';
 import {
   administratorGuard,
@@ -132,6 +133,33 @@ export const routes: Routes = [
             loadComponent: () => import('./people/mailbox-page.ts').then((m) => m.MailboxPage),
           },
         ],
+      },
+      {
+        path: 'parts',
+        title: 'Parts',
+        loadComponent: () => import('./parts/part-list.ts').then((m) => m.PartList),
+      },
+      {
+        path: 'parts/new',
+        title: 'New part',
+        canDeactivate: [leaveGuard],
+        loadComponent: () => import('./parts/part-edit.ts').then((m) => m.PartEdit),
+      },
+      {
+        path: 'parts/:partId',
+        title: 'Part',
+        loadComponent: () => import('./parts/part-page.ts').then((m) => m.PartPage),
+      },
+      {
+        path: 'parts/:partId/edit',
+        title: 'New revision',
+        canDeactivate: [leaveGuard],
+        loadComponent: () => import('./parts/part-edit.ts').then((m) => m.PartEdit),
+      },
+      {
+        path: 'method',
+        title: 'Method',
+        loadComponent: () => import('./method/method-page.ts').then((m) => m.MethodPage),
       },
       {
         path: 'p/:projectId/s/:stageId/r/:revisionId/check',
