@@ -22,7 +22,7 @@ import { PanelHead } from './panel-head.ts';
   template: `<app-panel-head heading="Findings" headingId="findings-heading" icon="message">
       @if (revision().may.check.allowed && !raising()) {
         <button matButton type="button" class="new" (click)="raising.set(true)">
-          <app-icon matButtonIcon name="plus" [size]="16" />New finding
+          <app-icon name="plus" [size]="16" />New finding
         </button>
       }
     </app-panel-head>
