@@ -44,7 +44,7 @@ export class DraftService {
       const context = await openRevision(manager, act.actor, revisionId);
       permit(context, 'save', ifMatch); // adopting another policy moves the version on
       await rename(manager, context, definition.reference);
-      await storePartLinks(manager, revisionId, parts);
+      await storePartLinks(manager, revisionId, parts, judged.definition);
       const { stage, revision } = context;
       await updateRevision(manager, revision, {
         ...columnsOf(judged),

@@ -38,7 +38,7 @@ export async function startNextRevision(
       designators: source.designators,
     });
     const links = await manager.findBy(RevisionPartEntity, { revisionId: source.id });
-    await storePartLinks(manager, revision.id, asPartLinks(links));
+    await storePartLinks(manager, revision.id, asPartLinks(links), judged.definition);
     await auditRevision(
       manager,
       act,

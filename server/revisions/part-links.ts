@@ -1,8 +1,10 @@
 import type { EntityManager } from 'typeorm';
 import type { PartLinks, PartStanding } from '../../shared/contract/revision.ts';
 import type { PartKind } from '../../shared/parts/part-record.ts';
+import type { StageInput } from '../../shared/stage/stage-input.ts';
 import { invalidField } from '../http/invalid-field.ts';
 import { PartRevisionEntity } from '../parts/part-revision-entity.ts';
+import { isFromLibrary } from './library-figures.ts';
 import { RevisionPartEntity } from './revision-part-entity.ts';
 
 type Role = PartStanding['role'];
@@ -17,7 +19,8 @@ const KINDS: Record<Role, PartKind> = {
 const ROLES = Object.keys(KINDS) as Role[];
 
 /**
- * Replaces the part links of a draft.
+ * Replaces the part links of a draft. A transistor whose figures are no longer those of the linked record loses its
+ * link: they count as typed by hand then.
  *
  * @throws {ApiError} invalid-input naming a link to nothing, or to a part of the wrong kind
  */
@@ -25,13 +28,18 @@ export async function storePartLinks(
   manager: EntityManager,
   revisionId: string,
   links: { readonly [K in Role]?: PartLinks[K] | undefined },
+  definition: StageInput,
 ): Promise<void> {
+  const transistors: Partial<Record<Role, StageInput['transistor'] | undefined>> = {
+    transistor: definition.transistor,
+    preDriver: definition.preDriver?.transistor,
+  };
   await manager.delete(RevisionPartEntity, { revisionId });
   for (const role of ROLES) {
     const link = links[role] ?? null;
     if (link === null) continue;
     const found = await manager.findOne(PartRevisionEntity, {
-      select: { id: true, part: { kind: true } },
+      select: { id: true, record: true, part: { kind: true } },
       relations: { part: true },
       where: { id: link.partRevisionId },
     });
@@ -41,6 +49,8 @@ export async function storePartLinks(
         `expected a library revision of a part of kind ${KINDS[role]}`,
       );
     }
+    const figures = transistors[role];
+    if (figures !== undefined && !isFromLibrary(found.record, link.choice, figures)) continue;
     await manager.insert(RevisionPartEntity, {
       revisionId,
       role,

@@ -51,7 +51,7 @@ export class StageService {
           body.designators ?? {},
         ),
       });
-      await storePartLinks(manager, revision.id, body.parts ?? {});
+      await storePartLinks(manager, revision.id, body.parts ?? {}, judged.definition);
       await auditRevision(
         manager,
         act,

@@ -4,6 +4,8 @@ import { loadLibrary } from '../../../server/seed/load-library.ts';
 import { listParts, Part, type PartRow } from '../../../shared/contract/part.ts';
 import { Problem } from '../../../shared/contract/problem.ts';
 import { Revision } from '../../../shared/contract/revision.ts';
+import { deriveTransistor } from '../../../shared/parts/derive-transistor.ts';
+import type { TransistorData } from '../../../shared/stage/transistor-data.ts';
 import { done, ProjectFloor } from '../project-floor.ts';
 import { relayDriver } from '../relay-driver.ts';
 import type { Reply } from '../test-client.ts';
@@ -208,17 +210,23 @@ describe('verifying part data', () => {
 });
 
 describe('a stage filled from the library', () => {
-  const linked = async (reference: string, partRevisionId: string) =>
+  const figuresOf = (part: Part): TransistorData => {
+    const { record } = part.latest;
+    const derived = record.kind === 'transistor' ? deriveTransistor(record) : null;
+    if (derived?.ok !== true) throw new Error(`no figures of ${record.partNumber}`);
+    return derived.data;
+  };
+  const linked = async (reference: string, part: Part, transistor = figuresOf(part)) =>
     done(
       await floor.designer.client.post(`/api/projects/${floor.projectId}/stages`, {
-        definition: relayDriver({ reference }),
-        parts: { transistor: { partRevisionId, choice: { group: '' } } },
+        definition: relayDriver({ reference, transistor }),
+        parts: { transistor: { partRevisionId: part.latest.id, choice: { group: '' } } },
       }),
     );
 
   it('says how its parts stand now', async () => {
     const part = Part.parse((await read('2N3904')).body);
-    const made = await linked('Q1', part.latest.id);
+    const made = await linked('Q1', part);
     expect(made.body.revision.partStanding).toEqual([
       {
         role: 'transistor',
@@ -274,9 +282,18 @@ describe('a stage filled from the library', () => {
     expect((await strict.lock(checked)).status).toBe(409);
   });
 
+  it('loses the link, and with it the verification, when a figure was edited by hand', async () => {
+    const part = Part.parse((await read('2N3904')).body);
+    const figures = figuresOf(part);
+    const edited = { ...figures, limits: { ...figures.limits, vceoV: 60 } };
+    const made = await linked('Q4', part, edited);
+    expect(made.body.revision.parts.transistor).toBeNull();
+    expect(made.body.revision.partStanding).toEqual([]);
+  });
+
   it('freezes the data it was filled from at submission', async () => {
     const part = Part.parse((await read('2N3904')).body);
-    const made = await linked('Q3', part.latest.id);
+    const made = await linked('Q3', part);
     const draft = { ...made, body: made.body.revision as unknown };
     const inCheck = done(await floor.act(floor.designer, draft, '/submission'));
     const rows = await server.database.read((manager) =>
