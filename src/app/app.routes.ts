@@ -1,12 +1,8 @@
 import type { Routes } from '@angular/router';
 import { leaveGuard } from './parts/leave-guard.ts';
+import { LINK_PAGES } from '../../shared/contract/account.ts';
 import { unsentGuard } from './review/unsent-guard.ts';
-import {
-  administratorGuard,
-  signedInGuard,
-  signedOutGuard,
-  withToken,
-} from './session/session-guards.ts';
+import { administratorGuard, signedInGuard, signedOutGuard } from './session/session-guards.ts';
 
 /** Pages before sign-in stand alone; all others stand in the shell. Tabs are path segments, filters are queries. */
 export const routes: Routes = [
@@ -23,17 +19,21 @@ export const routes: Routes = [
     loadComponent: () => import('./session/set-up.ts').then((m) => m.SetUp),
   },
   {
-    path: 'invitation',
+    path: LINK_PAGES.invitation,
     title: 'Invitation',
     data: { purpose: 'invitation' },
     loadComponent: () => import('./session/new-password.ts').then((m) => m.NewPassword),
   },
   {
-    path: 'reset',
+    path: LINK_PAGES.passwordReset,
     title: 'New password',
-    canMatch: [withToken],
     data: { purpose: 'reset' },
     loadComponent: () => import('./session/new-password.ts').then((m) => m.NewPassword),
+  },
+  {
+    path: LINK_PAGES.emailChange,
+    title: 'E-mail address',
+    loadComponent: () => import('./session/confirm-email.ts').then((m) => m.ConfirmEmail),
   },
   {
     path: 'reset',

@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
-import { RouterLink } from '@angular/router';
+import { ActivatedRoute, RouterLink } from '@angular/router';
 import { acceptInvitation, redeemPasswordReset } from '../../../shared/contract/account.ts';
 import { ApiClient } from '../api/api-client.ts';
 import { toApiProblem } from '../api/api-problem.ts';
@@ -20,11 +20,11 @@ import { PASSWORD_HINT } from './password-hint.ts';
 })
 export class NewPassword {
   private readonly api = inject(ApiClient);
+  /** Behind the # of the link, where no server and no referrer sees it. */
+  private readonly token = inject(ActivatedRoute).snapshot.fragment ?? '';
 
   /** Of the route: which link it was. */
   readonly purpose = input.required<'invitation' | 'reset'>();
-  /** Of the link. */
-  readonly token = input<string>('');
 
   protected readonly hint = PASSWORD_HINT;
   protected readonly heading = computed(() =>
@@ -41,7 +41,7 @@ export class NewPassword {
     if (this.form.invalid) return;
     const route = this.purpose() === 'invitation' ? acceptInvitation : redeemPasswordReset;
     try {
-      await this.api.send(route, { body: { token: this.token(), ...this.form.getRawValue() } });
+      await this.api.send(route, { body: { token: this.token, ...this.form.getRawValue() } });
       this.done.set(true);
     } catch (error) {
       this.problem.set(problemToForm(toApiProblem(error), this.form));

@@ -1,5 +1,5 @@
 import { inject } from '@angular/core';
-import { Router, type CanActivateFn, type CanMatchFn } from '@angular/router';
+import { Router, type CanActivateFn } from '@angular/router';
 import { SessionStore } from './session-store.ts';
 
 /** Pages of signed-in people; others go to the sign-in page, which leads back. */
@@ -28,7 +28,3 @@ export const administratorGuard: CanActivateFn = () =>
   inject(SessionStore).person()?.administrator === true
     ? true
     : inject(Router).createUrlTree(['/desk']);
-
-/** A mailed link carries its token in the query. */
-export const withToken: CanMatchFn = () =>
-  inject(Router).currentNavigation()?.extractedUrl.queryParamMap.has('token') === true;
