@@ -3,6 +3,7 @@ import { MatButtonToggleModule } from '@angular/material/button-toggle';
 import { MatSlideToggle } from '@angular/material/slide-toggle';
 import { PageHeading } from '../ui/page-focus.ts';
 import { Appearance, DENSITIES, SCHEMES, type Density, type Scheme } from './appearance.ts';
+import { ChangeEmail } from './change-email.ts';
 import { ChangePassword } from './change-password.ts';
 import { OwnSessions } from './own-sessions.ts';
 import { SessionStore } from './session-store.ts';
@@ -10,7 +11,14 @@ import { SessionStore } from './session-store.ts';
 /** The own account: who one is, password, sessions, and how this browser shows things. */
 @Component({
   selector: 'app-account-page',
-  imports: [ChangePassword, MatButtonToggleModule, MatSlideToggle, OwnSessions, PageHeading],
+  imports: [
+    ChangeEmail,
+    ChangePassword,
+    MatButtonToggleModule,
+    MatSlideToggle,
+    OwnSessions,
+    PageHeading,
+  ],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './account-page.html',
   styleUrl: './account-page.scss',

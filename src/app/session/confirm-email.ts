@@ -27,7 +27,7 @@ export class ConfirmEmail {
       const answer = await this.api.send(confirmEmailChange, { body: { token: this.token } });
       this.changed.set(answer.value.changed);
     } catch (error) {
-      this.problem.set(toApiProblem(error).message);
+      this.problem.set(toApiProblem(error).detail);
     }
   }
 }
