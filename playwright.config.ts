@@ -6,6 +6,7 @@ export default defineConfig({
   testMatch: '**/*.e2e.ts',
   outputDir: 'test-results',
   timeout: 60_000,
+  expect: { timeout: 15_000 },
   workers: 1,
   fullyParallel: false,
   forbidOnly: Boolean(process.env['CI']),
@@ -13,6 +14,7 @@ export default defineConfig({
   use: {
     viewport: { width: 1280, height: 900 },
     screenshot: 'only-on-failure',
+    actionTimeout: 20_000,
     launchOptions: {
       executablePath: process.env['CHROMIUM_PATH'] ?? '/usr/bin/chromium',
       args: [

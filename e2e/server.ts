@@ -47,6 +47,11 @@ export async function startServer(demo: boolean): Promise<RunningServer> {
       SINKWELL_DATA: folder,
       SINKWELL_PORT: String(port),
       SINKWELL_DEMO: demo ? '1' : '0',
+      // Suites sign in often and ask fast.
+      SINKWELL_SCRYPT_COST: '10',
+      SINKWELL_REQUESTS_PER_MINUTE: '6000',
+      // On a port of its own, whatever the shell around says.
+      SINKWELL_URL: url,
     },
   });
   let printed = '';
