@@ -1,4 +1,4 @@
-import { readFile, writeFile } from 'node:fs/promises';
+import { readFile } from 'node:fs/promises';
 import { expect, type Page } from '@playwright/test';
 import { DEMO_PEOPLE } from '../server/seed/demo-accounts.ts';
 import { readCsv } from '../spec/server/documents/read-csv.ts';
@@ -7,11 +7,15 @@ import { test } from './demo-test.ts';
 import { StageSheet } from './stage-sheet.ts';
 
 const REFERENCE = 'Q40';
-const PROJECT = /^CR-40/;
+const TITLE = 'Agitator contactor pilot relay, second line';
+const PROJECT = 'CR-40';
 
 async function openProject(page: Page): Promise<void> {
   await page.getByRole('navigation', { name: 'Main' }).getByText('Projects').click();
-  await page.getByRole('table', { name: 'Projects' }).getByRole('link', { name: PROJECT }).click();
+  await page
+    .getByRole('table', { name: 'Projects' })
+    .getByRole('link', { name: PROJECT, exact: true })
+    .click();
 }
 
 /** The stage as its data stand in the order of the form, in the notations people type. */
@@ -76,11 +80,12 @@ async function takeTransistor(sheet: StageSheet): Promise<void> {
   await expect(dialog).toBeHidden();
 }
 
-async function design(page: Page): Promise<void> {
+/** @returns the designator of the base resistor */
+async function design(page: Page): Promise<string> {
   await openProject(page);
   await page.getByRole('link', { name: 'New stage' }).click();
   await page.getByLabel('Designator').fill(REFERENCE);
-  await page.getByLabel('Title').fill('Agitator contactor pilot relay, second line');
+  await page.getByLabel('Title').fill(TITLE);
   await page.getByLabel('Topology').selectOption('low-side-npn');
   await page.getByRole('button', { name: 'Open the sheet' }).click();
   const sheet = new StageSheet(page);
@@ -101,6 +106,8 @@ async function design(page: Page): Promise<void> {
   await sheet.saved();
   await page.getByRole('button', { name: 'Submit for check' }).click();
   await expect(page.getByText('In check').first()).toBeVisible();
+  const drawn = page.getByRole('button', { name: /^R\d+, base resistor, 620/ });
+  return /^R\d+/.exec((await drawn.getAttribute('aria-label')) ?? '')?.[0] ?? '';
 }
 
 async function check(page: Page): Promise<void> {
@@ -108,10 +115,10 @@ async function check(page: Page): Promise<void> {
   await page.getByRole('radio', { name: 'By hand' }).click();
   await page.getByLabel('My figure').fill('5.6');
   await page
-    .getByLabel('Note')
+    .getByRole('textbox', { name: 'Note' })
     .fill('Gain rows at 10 mA and 50 mA, line on logarithmic axes, 33 °C colder by the exponent.');
   const criteria = page.getByRole('table', { name: 'Criteria' });
-  for (const box of await criteria.getByRole('checkbox').all()) await box.check({ force: true });
+  for (const box of await criteria.getByRole('checkbox').all()) await box.check();
   await page
     .getByRole('textbox', { name: 'Justification, coil voltage' })
     .fill('The cabinet supply holds 23 V at least; pull-in was seen at 19 V and 60 °C.');
@@ -141,21 +148,40 @@ async function download(page: Page, format: string): Promise<Buffer> {
   return readFile(await file.path());
 }
 
-test('four people take one stage from the form to the BOM note', async ({ signedIn }) => {
-  test.slow();
-  await design(await signedIn('designer'));
-  await check(await signedIn('checker'));
-  const hash = await lock(await signedIn('approver'));
-
-  const page = await signedIn('exporter');
+/** @returns CSV records and the letters of the PDF without any space */
+async function issueNote(page: Page): Promise<{ records: string[][]; pdf: string }> {
   await openProject(page);
-  await page.getByRole('link', { name: 'BOM note' }).click();
+  await page.getByRole('tab', { name: 'BOM note' }).click();
   await expect(page.getByRole('checkbox', { name: `${REFERENCE} A` })).toBeChecked();
   await page.getByRole('button', { name: 'Issue note' }).click();
   await page.getByRole('dialog').getByRole('button', { name: 'Issue note' }).click();
   await expect(page.getByText('Content and hash fit.')).toBeVisible();
+  const csv = await download(page, 'CSV');
+  const pages = await readPdf(await download(page, 'PDF'));
+  const pdf = pages.flat().map(({ text }) => text);
+  return { records: readCsv(csv.toString('utf8')), pdf: pdf.join('').replaceAll(/\s/g, '') };
+}
 
-  const records = readCsv((await download(page, 'CSV')).toString('utf8'));
-  const pdf = (await readPdf(await download(page, 'PDF'))).flat().map(({ text }) => text);
-  await writeFile('/tmp/bom.json', JSON.stringify({ records, pdf, hash }));
+test('four people take one stage from the form to the BOM note', async ({ signedIn }) => {
+  test.slow();
+  const resistor = await design(await signedIn('designer'));
+  await check(await signedIn('checker'));
+  const hash = await lock(await signedIn('approver'));
+  const { records, pdf } = await issueNote(await signedIn('exporter'));
+
+  const lineOf = (designator: string) =>
+    records.find(([, , designators = '']) => designators.split(', ').includes(designator));
+  expect(lineOf(REFERENCE)).toEqual(
+    expect.arrayContaining(['Transistor, NPN', '2N3904', 'verified']),
+  );
+  expect(lineOf(resistor)).toEqual(
+    expect.arrayContaining(['Resistor', '620\u00a0Ω', '±5\u00a0%, 0.1\u00a0W']),
+  );
+  const standsOn = records.find(([stage, , title]) => stage === REFERENCE && title === TITLE);
+  expect(standsOn).toEqual(
+    expect.arrayContaining(['A', 'Locked', hash, 'A. Designer', 'B. Checker', 'C. Approver']),
+  );
+  expect(pdf).toContain('2N3904');
+  expect(pdf).toContain('Resistor620Ω±5%,0.1W');
+  expect(pdf).toMatch(new RegExp(`${REFERENCE}ALocked\\d{4}-\\d\\d-\\d\\d${hash.slice(0, 12)}`));
 });

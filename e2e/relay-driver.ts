@@ -6,7 +6,7 @@ export function relayDriver(reference: string, valueOhm: number): StageFile {
   return {
     ...RELAY_FILE,
     ...{ reference, title: `Pilot relay ${reference}` },
-    load: { ...RELAY_FILE.load, maximumV: 31, coilMaxDegC: 130 },
+    load: { ...RELAY_FILE.load, maximumV: 31, maximumReferenceDegC: 60, coilMaxDegC: 130 },
     baseResistor: { ...RELAY_FILE.baseResistor, valueOhm },
   };
 }

@@ -29,7 +29,7 @@ export class StageSheet {
 
   /** @param label without the designator that may follow it: `RB` finds `RB, R30` */
   field(group: string, label: string): Locator {
-    const words = new RegExp(`^\\s*${label}(, [A-Z]+\\d+)?\\s*$`);
+    const words = new RegExp(`^\\s*${label.replaceAll(' ', '\\s')}(, [A-Z]+\\d+)?\\s*$`);
     return this.group(group).getByLabel(words);
   }
 
@@ -60,6 +60,6 @@ export class StageSheet {
 
   /** The server holds what is on the sheet. */
   async saved(): Promise<void> {
-    await expect(this.page.getByRole('status').filter({ hasText: /^\s*Saved \d/ })).toBeVisible();
+    await expect(this.page.getByRole('status').filter({ hasText: /^\s*Saved\s*\d/ })).toBeVisible();
   }
 }
