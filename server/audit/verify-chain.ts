@@ -43,9 +43,12 @@ export async function verifyChain(manager: EntityManager): Promise<ChainVerifica
   };
 }
 
-/** Plain rows: filling entities would take most of the time. */
-async function linesAfter(manager: EntityManager, sequence: number): Promise<AuditLineEntity[]> {
-  const rows: (AuditLineEntity & { detail: string })[] = await manager.query(
+/** A line as a plain row: filling entities would take most of the time. */
+type AuditRow = Pick<AuditLineEntity, keyof AuditLineEntity>;
+
+async function linesAfter(manager: EntityManager, sequence: number): Promise<AuditRow[]> {
+  type Stored = Omit<AuditRow, 'detail'> & { detail: string };
+  const rows: Stored[] = await manager.query(
     `SELECT sequence, at_ms AS "atMs", who_id AS "whoId", who, action, object_kind AS "objectKind",
             object_id AS "objectId", object_name AS "objectName", project_id AS "projectId",
             summary, detail, request_id AS "requestId", hash
@@ -54,6 +57,6 @@ async function linesAfter(manager: EntityManager, sequence: number): Promise<Aud
   );
   return rows.map((row) => ({
     ...row,
-    detail: JSON.parse(row.detail) as AuditLineEntity['detail'],
+    detail: JSON.parse(row.detail) as AuditRow['detail'],
   }));
 }

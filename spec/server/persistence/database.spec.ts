@@ -134,7 +134,7 @@ describe('the database door', () => {
 
   it('can undo every migration and do it again', async () => {
     const writer = await openWriter(file);
-    for (const _ of migrations) await writer.undoLastMigration();
+    for (let count = migrations.length; count > 0; count--) await writer.undoLastMigration();
     const left: { name: string }[] = await writer.query(
       `SELECT name FROM sqlite_schema WHERE name NOT LIKE 'sqlite_%' AND name <> 'migrations'`,
     );
