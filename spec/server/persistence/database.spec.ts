@@ -134,7 +134,10 @@ describe('the database door', () => {
 
   it('can undo every migration and do it again', async () => {
     const writer = await openWriter(file);
-    for (let count = migrations.length; count > 0; count--) await writer.undoLastMigration();
+    await migrations.reduce(
+      (before) => before.then(() => writer.undoLastMigration()),
+      Promise.resolve(),
+    );
     const left: { name: string }[] = await writer.query(
       `SELECT name FROM sqlite_schema WHERE name NOT LIKE 'sqlite_%' AND name <> 'migrations'`,
     );
