@@ -1,4 +1,5 @@
 import { expect, test, type Page } from '@playwright/test';
+import { PageWatch } from './page-watch.ts';
 import { startServer, type RunningServer } from './server.ts';
 
 const FIRST = {
@@ -69,6 +70,15 @@ test('the printed code makes the first administrator, whose invitation brings in
   await expect(other.getByRole('heading', { name: 'My desk' })).toBeVisible();
   await expect(other.getByRole('button', { name: SECOND.name })).toBeVisible();
   await other.context().close();
+});
+
+test('the set-up page is accessible in light and dark, quiet, no wider than 320 px', async ({
+  page,
+}) => {
+  const watch = await PageWatch.over(page);
+  await page.goto(server.url);
+  await expect(page.getByRole('heading', { name: 'Set up' })).toBeVisible();
+  await watch.expectSound();
 });
 
 test('a wrong set-up code is refused and makes nobody', async ({ page }) => {
