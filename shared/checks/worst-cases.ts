@@ -124,7 +124,7 @@ export class WorstCases {
 }
 
 function finite(value: number): number | null {
-  return Number.isFinite(value) ? value : null;
+  return Number.isFinite(value) ? value + 0 : null; // + 0: no minus zero in a result
 }
 
 function status(standing: Standing, margin: number, band: number): Criterion['status'] {

@@ -163,7 +163,7 @@ describe(`${STAGES} hostile stage files, seed ${SEED}`, () => {
         expect(unsound(result)).toEqual([]);
         expect(JSON.parse(JSON.stringify(result))).toEqual(result);
       }),
-      { seed: SEED, numRuns: STAGES },
+      { seed: SEED, numRuns: STAGES, endOnFailure: true },
     );
     // Most changes must get through the parser, or the engine has not been tried.
     expect(judged).toBeGreaterThan(STAGES / 8);
