@@ -4,7 +4,7 @@ import { FONTS } from './pdf-fonts.ts';
 const COVERAGE = [FONTS.Roboto.normal, FONTS.Roboto.bold].map(fontCoverage);
 
 /** How the trade writes them without the sign. */
-const SPELLED: Readonly<Record<string, string>> = { '→': '->', '∥': '||', '⁻': '-' };
+const SPELLED: Readonly<Record<string, string>> = { '→': '->', '∥': '||', '\u207b': '-' };
 
 /**
  * Text that the PDF's fonts can show. A glyph that is missing would vanish without a word (85 µA became

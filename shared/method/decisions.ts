@@ -39,7 +39,7 @@ export const DECISIONS: readonly MethodDecision[] = [
   {
     id: 'equal-corners',
     title: 'Equal worst corners',
-    text: 'Corners whose margins differ by less than one part in 10⁹ count as equal and the first in the stated order is reported. The junction temperature is solved to 0.1 µK, far finer than the 1 mK asked for, so that numerical noise decides nothing.',
+    text: 'Corners whose margins differ by less than one part in a thousand million count as equal and the first in the stated order is reported. The junction temperature is solved to 0.1 µK, far finer than the 1 mK asked for, so that numerical noise decides nothing.',
   },
   {
     id: 'junction-balance',
