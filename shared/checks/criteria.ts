@@ -94,6 +94,11 @@ export function criterionIds(): readonly CriterionId[] {
   return IDS;
 }
 
+/** The criteria that have a text of their own: those of a transistor in front ask the same of it. */
+export function ownCriterionIds(): readonly CriterionId[] {
+  return IDS.filter((id) => !id.startsWith(PRE));
+}
+
 /** Place of a criterion in the table: what the corner loop knows it by. */
 export function criterionNumber(id: CriterionId): number {
   return IDS.indexOf(id);

@@ -16,6 +16,18 @@ export const CRITERIA_TEXT: Readonly<Record<string, CriterionText>> = {
     limit:
       'At most the policy’s forced β; with guaranteed figures only, at most the ratio of the rows in use where that is smaller.',
   },
+  'input-on': {
+    asks: 'Does the output lift the input of a pre-biased part high enough to turn it on?',
+    limit: 'At least the printed VI(on), raised when cold and above its test current.',
+  },
+  'input-off': {
+    asks: 'Does the low output keep the input of a pre-biased part below what may turn it on?',
+    limit: 'At most the printed VI(off).',
+  },
+  'input-voltage': {
+    asks: 'Does the input of a pre-biased part stay within its rating?',
+    limit: 'At most the printed highest input voltage.',
+  },
   'load-voltage': {
     asks: 'Does the coil get enough voltage to pull in when it is hot and the supply is low?',
     limit: 'At least the must-operate voltage, raised by the copper’s resistance when hot.',

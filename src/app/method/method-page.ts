@@ -8,7 +8,7 @@ import {
 } from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
 import { ActivatedRoute } from '@angular/router';
-import { CRITERIA, criterionIds, type CriterionGroup } from '../../../shared/checks/criteria.ts';
+import { CRITERIA, ownCriterionIds, type CriterionGroup } from '../../../shared/checks/criteria.ts';
 import { CAUTIONS } from '../../../shared/method/cautions.ts';
 import { CRITERIA_TEXT } from '../../../shared/method/criteria-text.ts';
 import { DECISIONS } from '../../../shared/method/decisions.ts';
@@ -44,7 +44,7 @@ export class MethodPage {
   protected readonly groups = Object.entries(GROUP_WORDS).map(([group, name]) => ({
     id: group,
     name,
-    criteria: criterionIds()
+    criteria: ownCriterionIds()
       .filter((id) => CRITERIA[id].group === group)
       .map((id) => ({
         id,
