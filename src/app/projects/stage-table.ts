@@ -4,7 +4,7 @@ import { MatSortModule, type Sort, type SortDirection } from '@angular/material/
 import { MatTableModule } from '@angular/material/table';
 import { RouterLink } from '@angular/router';
 import type { StageRow } from '../../../shared/contract/stage.ts';
-import { criterionName } from '../ui/criterion-name.ts';
+import { criterionName } from '../../../shared/report/criterion-name.ts';
 import { fixedFigure, marginText } from '../ui/fixed-figure.ts';
 import { Icon } from '../ui/icon.ts';
 import { MarginBar } from '../ui/margin-bar.ts';
