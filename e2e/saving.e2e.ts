@@ -6,6 +6,8 @@ import { StageSheet } from './stage-sheet.ts';
 /** The target is 50 ms (page target of the sheet); a shared machine gets five times as long. */
 const KEYSTROKE_MS = 50;
 const SLOW_MACHINE = 5;
+/** How long a typist holds a key. */
+const TYPING_MS = 100;
 
 async function draftIn(page: Page, code: string, reference: string): Promise<StageSheet> {
   await page.goto('/projects');
@@ -92,7 +94,7 @@ test('a keystroke brings new verdicts at once', async ({ signedIn }) => {
   await sheet.page.evaluate(watchVerdicts, await value.elementHandle());
   for (let round = 0; round < 30; round += 1) {
     const before = await value.innerText();
-    await box.press(round % 8 < 4 ? 'ArrowUp' : 'ArrowDown');
+    await box.press(round % 8 < 4 ? 'ArrowUp' : 'ArrowDown', { delay: TYPING_MS });
     await expect(value).not.toHaveText(before);
   }
   const timesMs = await sheet.page.evaluate(() =>
@@ -100,14 +102,16 @@ test('a keystroke brings new verdicts at once', async ({ signedIn }) => {
   );
   expect(timesMs).toHaveLength(30);
   const p95Ms = timesMs.sort((a, b) => a - b)[28] ?? NaN;
-  test.info().annotations.push({ type: 'p95', description: `${p95Ms.toFixed(1)} ms` });
+  process.stdout.write(`keystroke to verdicts: p95 ${p95Ms.toFixed(1)} ms\n`);
   expect(p95Ms).toBeLessThan(SLOW_MACHINE * KEYSTROKE_MS);
 });
 
 /** Runs in the page: measures from each key to the change of the criterion's line. */
 function watchVerdicts(line: unknown): void {
   let pressedMs: number | null = null;
-  document.addEventListener('keydown', () => (pressedMs = performance.now()), { capture: true });
+  document.addEventListener('keydown', ({ timeStamp }) => (pressedMs = timeStamp), {
+    capture: true,
+  });
   new MutationObserver(() => {
     if (pressedMs === null) return;
     performance.measure('keystroke to verdicts', { start: pressedMs });

@@ -1,4 +1,4 @@
-import { concat, debounceTime, defer, map, of, switchMap, timer, type Observable } from 'rxjs';
+import { concat, defer, map, of, switchMap, timer, type Observable } from 'rxjs';
 import type { Evaluation } from '../../../shared/checks/evaluation.ts';
 import type { Sizing } from '../../../shared/sizing/sizing.ts';
 import type { StageInput } from '../../../shared/stage/stage-input.ts';
@@ -18,18 +18,16 @@ export interface Engine {
   size(input: StageInput): Observable<Sizing>;
 }
 
-/** Keystrokes closer together than this are judged once. */
-export const DEBOUNCE_MS = 12;
 /** Sizing waits until typing rests. */
 export const SIZING_REST_MS = 120;
 
 /**
- * Every state of the sheet judged: verdicts first, the window when the worker has it. A newer state drops
- * whatever is still under way for an older one. A base resistor left open is judged at the recommended value.
+ * Every state of the sheet judged: verdicts first and at once, so that one rendering shows the change and them; the
+ * window when the worker has it. A newer state drops whatever is still under way for an older one. A base resistor
+ * left open is judged at the recommended value.
  */
 export function judgements(inputs: Observable<StageInput>, engine: Engine): Observable<Judgement> {
   return inputs.pipe(
-    debounceTime(DEBOUNCE_MS),
     switchMap((input) =>
       input.baseResistor.valueOhm === null ? sizedFirst(input, engine) : judgedFirst(input, engine),
     ),
