@@ -1,17 +1,18 @@
 import path from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { repeats, seed } from '../long-run.ts';
 import { GENERAL, projectFields } from '../server/project-floor.ts';
 import { relayDriver } from '../server/relay-driver.ts';
 import type { TestClient } from '../server/test-client.ts';
 import { openWriter } from '../../server/persistence/connection.ts';
 import { bundleServer, ServerProcess } from './server-process.ts';
 
-const ROUNDS = Number(process.env['KILL_ROUNDS'] ?? 20);
+const ROUNDS = repeats(20, 200);
 const SAVERS = 4;
 
 /** Draws the moments of death; printed, so that a round can be had again. */
-const SEED = Number(process.env['SEED'] ?? 20260112);
+const SEED = seed(20260112);
 
 describe('kill -9 during saves', () => {
   let server: ServerProcess;

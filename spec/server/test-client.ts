@@ -45,7 +45,7 @@ export class TestClient {
     const all: Record<string, string> = {
       ...(body !== undefined && { 'Content-Type': 'application/json' }),
       ...(method !== 'GET' && token !== undefined && { 'X-XSRF-TOKEN': token }),
-      ...(this.cookies.size > 0 && { Cookie: this.#cookieHeader() }),
+      ...(this.cookies.size > 0 && { Cookie: this.cookieHeader }),
       ...headers,
     };
     const sent = Object.fromEntries(Object.entries(all).filter(([, value]) => value !== ''));
@@ -58,7 +58,8 @@ export class TestClient {
     return read(response);
   }
 
-  #cookieHeader(): string {
+  /** All cookies as one header. */
+  get cookieHeader(): string {
     return [...this.cookies].map(([name, value]) => `${name}=${value}`).join('; ');
   }
 

@@ -3,9 +3,11 @@ import { mkdtemp, rm } from 'node:fs/promises';
 import { createServer, type Server } from 'node:http';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
-import type { Router } from 'express';
+import type { RequestHandler, Router } from 'express';
 import { type Config, readConfig } from '../../server/config.ts';
 import { createApp } from '../../server/app.ts';
+import type { Endpoint } from '../../server/http/endpoint.ts';
+import { endpointOf } from '../../server/http/mount.ts';
 import { createLogger } from '../../server/http/request-log.ts';
 import { Database } from '../../server/persistence/database.ts';
 import { createServices, type Services } from '../../server/services.ts';
@@ -21,6 +23,17 @@ export interface TestPerson {
   readonly id: string;
   readonly name: string;
   readonly email: string;
+}
+
+/** What lies in a router; `route` is missing for anything but a route. */
+export interface Layer {
+  readonly route?: { readonly path: string; readonly stack: { handle: RequestHandler }[] };
+}
+
+/** The declarations behind all routes of a router. */
+export function endpointsOf(router: Router): Endpoint[] {
+  const handlers = (router.stack as Layer[]).flatMap(({ route }) => route?.stack ?? []);
+  return handlers.flatMap(({ handle }) => endpointOf(handle) ?? []);
 }
 
 /** A whole server on a free port of loopback, over a database file in a temp folder of its own. */

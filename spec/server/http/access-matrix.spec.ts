@@ -1,4 +1,3 @@
-import type { RequestHandler } from 'express';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { Access } from '../../../server/http/access.ts';
 import { SHIPPED_LIMITS } from '../../../server/http/limits.ts';
@@ -6,16 +5,12 @@ import type { Endpoint } from '../../../server/http/endpoint.ts';
 import { endpointOf } from '../../../server/http/mount.ts';
 import { type Hand, ProjectFloor } from '../project-floor.ts';
 import type { Reply, TestClient } from '../test-client.ts';
-import { TestServer } from '../test-server.ts';
+import { endpointsOf, type Layer, TestServer } from '../test-server.ts';
 import { bodyFor, type Ids, idsOf, keyOf, pathFor } from './route-examples.ts';
 
 const ROLES = ['designer', 'checker', 'approver', 'exporter'] as const;
 const CALLERS = ['visitor', 'outsider', ...ROLES, 'administrator'] as const;
 type Caller = (typeof CALLERS)[number];
-
-interface Layer {
-  readonly route?: { readonly path: string; readonly stack: { handle: RequestHandler }[] };
-}
 
 /** A well-formed tag no version has: whoever may change the object gets 412, and nothing changes. */
 const STALE = { 'If-Match': '"00000000-0000-4000-8000-000000000000-999"' };
@@ -34,8 +29,7 @@ describe('the role × route matrix', () => {
     floor = await ProjectFloor.open(server);
     ids = await idsOf(floor);
     foreignIds = await idsOf(await ProjectFloor.open(server, 'VX-12'));
-    const handlers = (server.router.stack as Layer[]).flatMap(({ route }) => route?.stack ?? []);
-    endpoints = handlers.flatMap(({ handle }) => endpointOf(handle) ?? []);
+    endpoints = endpointsOf(server.router);
   }, 60_000);
   afterAll(() => server.stop());
 

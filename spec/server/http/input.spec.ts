@@ -80,6 +80,15 @@ describe('input', () => {
     expect(({} as Record<string, unknown>)['polluted']).toBeUndefined();
   });
 
+  it.each([
+    ['{"name":"half \\ud83d of a pair"}', '/name'],
+    ['{"name":"end\\u0000of text"}', '/name'],
+    ['{"nested":{"\\udc00":1}}', '/nested/\udc00'],
+  ])('S-31: refuses %s, which no database could give back', async (text, pointer) => {
+    const { status, body } = await admin.post('/api/people', text);
+    expect([status, body.errors[0].pointer]).toEqual([422, pointer]);
+  });
+
   it('S-34: refuses a repeated and an unknown query key', async () => {
     const twice = await admin.get('/api/audit?limit=1&limit=2');
     expect([twice.status, twice.body.errors[0].pointer]).toEqual([422, '/query/limit']);

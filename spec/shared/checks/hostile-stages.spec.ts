@@ -3,11 +3,12 @@ import { describe, expect, it } from 'vitest';
 import { judgeStage } from '../../../shared/sizing/judge-stage.ts';
 import { stageResult } from '../../../shared/sizing/result.ts';
 import { StageInput } from '../../../shared/stage/stage-input.ts';
+import { leaves, replaced } from '../../document-places.ts';
+import { repeats, seed } from '../../long-run.ts';
 import { HIGH_SIDE_FILE, RELAY_FILE } from '../relay-stage.ts';
 
-/** A long run takes more stages and another seed: SINKWELL_STAGES=100000 SINKWELL_SEED=7 npx vitest run … */
-const STAGES = Number(process.env['SINKWELL_STAGES'] ?? 2000);
-const SEED = Number(process.env['SINKWELL_SEED'] ?? 20261201);
+const STAGES = repeats(2000, 100_000);
+const SEED = seed(20261201);
 
 /** Numbers that slip through or sit at the edge of every range. */
 const NASTY = [
@@ -20,24 +21,6 @@ const number = fc.oneof(
   fc.double({ min: 1e-6, max: 1e3, noNaN: true }),
 );
 const anything = fc.oneof(number, fc.constantFrom(null, '', 'x', true, [], {}, 'NaN'));
-
-type Path = (string | number)[];
-
-/** Every place of a document that holds a value. */
-function leaves(value: unknown, path: Path = []): Path[] {
-  if (value === null || typeof value !== 'object') return [path];
-  return Object.entries(value).flatMap(([key, inner]) =>
-    leaves(inner, [...path, Array.isArray(value) ? Number(key) : key]),
-  );
-}
-
-function replaced(document: unknown, path: Path, value: unknown): unknown {
-  const copy = structuredClone(document);
-  let holder = copy as Record<string | number, unknown>;
-  for (const step of path.slice(0, -1)) holder = holder[step] as Record<string | number, unknown>;
-  holder[path[path.length - 1] ?? ''] = value;
-  return copy;
-}
 
 const BASES: unknown[] = [
   RELAY_FILE,
