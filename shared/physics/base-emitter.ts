@@ -11,6 +11,7 @@ export interface BaseEmitterPoint {
 
 interface Curve {
   readonly icA: readonly number[];
+  readonly logA: readonly number[];
   readonly volt: readonly number[];
 }
 
@@ -20,6 +21,8 @@ export interface BaseEmitterTable {
   readonly maximum: Curve;
   /** Empty where the sheet prints neither a minimum nor a typical figure. */
   readonly minimum: Curve;
+  /** What a usual specimen lies below the maximum: the typical figures where printed. */
+  readonly gap: Curve;
   /** Whether the maximum is the sheet's own VBE(sat), not a substitute. */
   readonly guaranteed: boolean;
   readonly lastIcA: number;
@@ -30,6 +33,9 @@ export interface BaseEmitterTable {
 const ON_TO_SAT_V = 0.05;
 const TYP_TO_MAX_V = 0.15;
 const TYP_TO_MIN_V = 0.1;
+
+/** Judgement: what a usual specimen lies below the maximum where no typical figure is printed, V. */
+const USUAL_GAP_V = 0.1;
 
 /**
  * VBE(sat) table of a part from its printed rows, with the substitutes for what the sheet leaves out.
@@ -49,6 +55,7 @@ export function baseEmitterTable(
   return {
     maximum,
     minimum: minimumOf(saturated, on),
+    gap: gapBelow(maximum, saturated, on),
     guaranteed,
     lastIcA: maximum.icA[maximum.icA.length - 1] ?? 0,
     usualMinV,
@@ -78,6 +85,16 @@ function minimumOf(saturated: BaseEmitterPoint[], on: BaseEmitterPoint[]): Curve
   return typical.icA.length > 0 ? typical : curveOf(on, typLess, Math.min);
 }
 
+/** How far the typical figures lie below the maximum; VBE(on) rows count where no VBE(sat) row prints one. */
+function gapBelow(maximum: Curve, saturated: BaseEmitterPoint[], on: BaseEmitterPoint[]): Curve {
+  const below = (row: BaseEmitterPoint) =>
+    row.typV === null || maximum.icA.length === 0
+      ? null
+      : Math.max(0, highestV(maximum, row.icA, Math.log(row.icA)) - row.typV);
+  const typical = curveOf(saturated, below, Math.max);
+  return typical.icA.length > 0 ? typical : curveOf(on, below, Math.max);
+}
+
 function curveOf(
   rows: readonly BaseEmitterPoint[],
   read: (row: BaseEmitterPoint) => number | null,
@@ -95,18 +112,21 @@ function curveOf(
       volt.push(value);
     }
   }
-  return { icA, volt };
+  return { icA, logA: icA.map(Math.log), volt };
 }
 
-/** Straight in ln IC between the rows that enclose IC. */
-function between(curve: Curve, icA: number): number {
+/** Straight in ln IC between the rows that enclose IC; held outside them. */
+function between({ logA: rowLogA, volt }: Curve, logA: number): number {
+  const last = rowLogA.length - 1;
+  if (logA <= (rowLogA[0] ?? Infinity)) return volt[0] ?? 0;
+  if (logA >= (rowLogA[last] ?? -Infinity)) return volt[last] ?? 0;
   let k = 0;
-  while (k < curve.icA.length - 2 && icA > (curve.icA[k + 1] ?? Infinity)) k++;
-  const x0 = curve.icA[k] ?? 1;
-  const x1 = curve.icA[k + 1] ?? 1;
-  const y0 = curve.volt[k] ?? 0;
-  const y1 = curve.volt[k + 1] ?? 0;
-  return y0 + ((y1 - y0) * Math.log(icA / x0)) / Math.log(x1 / x0);
+  while (logA > (rowLogA[k + 1] ?? Infinity)) k++;
+  const x0 = rowLogA[k] ?? 0;
+  const x1 = rowLogA[k + 1] ?? 1;
+  const y0 = volt[k] ?? 0;
+  const y1 = volt[k + 1] ?? 0;
+  return y0 + ((y1 - y0) * (logA - x0)) / (x1 - x0);
 }
 
 /**
@@ -115,29 +135,42 @@ function between(curve: Curve, icA: number): number {
  * criteria that need a maximum are then open.
  */
 export function maximumVbeV(table: BaseEmitterTable, icA: number): number {
-  const { icA: rowA, volt } = table.maximum;
+  return table.maximum.icA.length === 0
+    ? table.usualMinV
+    : highestV(table.maximum, icA, Math.log(icA));
+}
+
+function highestV(maximum: Curve, icA: number, logA: number): number {
+  const { icA: rowA, logA: rowLogA, volt } = maximum;
   const last = rowA.length - 1;
-  if (last < 0) return table.usualMinV;
   const lastA = rowA[last] ?? 1;
+  if (icA <= lastA) return between(maximum, logA);
   const lastV = volt[last] ?? 0;
-  if (icA > lastA) {
-    const junctionV = lastV + thermalVoltageV(SHEET_DEG_C) * Math.log(icA / lastA);
-    if (last === 0) return junctionV;
-    const slopeOhm = (lastV - (volt[last - 1] ?? 0)) / (lastA - (rowA[last - 1] ?? 0));
-    return Math.max(junctionV, lastV + slopeOhm * (icA - lastA));
-  }
-  return icA <= (rowA[0] ?? 0) ? (volt[0] ?? 0) : between(table.maximum, icA);
+  const junctionV = lastV + thermalVoltageV(SHEET_DEG_C) * (logA - (rowLogA[last] ?? 0));
+  if (last === 0) return junctionV;
+  const slopeOhm = (lastV - (volt[last - 1] ?? 0)) / (lastA - (rowA[last - 1] ?? 0));
+  return Math.max(junctionV, lastV + slopeOhm * (icA - lastA));
 }
 
 /** Smallest VBE(sat) at 25 °C, V: the junction law below the first row, held above the last. */
 export function minimumVbeV(table: BaseEmitterTable, icA: number): number {
-  const { icA: rowA, volt } = table.minimum;
-  const last = rowA.length - 1;
-  if (last < 0) return table.usualMinV;
-  const firstA = rowA[0] ?? 1;
-  if (icA < firstA) {
-    const junctionV = (volt[0] ?? 0) + thermalVoltageV(SHEET_DEG_C) * Math.log(icA / firstA);
-    return Math.max(0, junctionV);
-  }
-  return icA >= (rowA[last] ?? 0) ? (volt[last] ?? 0) : between(table.minimum, icA);
+  const { logA: rowLogA, volt } = table.minimum;
+  if (rowLogA.length === 0) return table.usualMinV;
+  const logA = Math.log(icA);
+  const firstLogA = rowLogA[0] ?? 0;
+  if (logA >= firstLogA) return between(table.minimum, logA);
+  return Math.max(0, (volt[0] ?? 0) + thermalVoltageV(SHEET_DEG_C) * (logA - firstLogA));
+}
+
+/**
+ * VBE(sat) at 25 °C of one specimen, V: as far below the maximum as the typical figures are, or a usual gap; without any
+ * figure the usual minimum.
+ *
+ * @param share 0 at the typical figure, 1 at the maximum, −1 as far below the typical one
+ */
+export function vbeBetweenV(table: BaseEmitterTable, icA: number, share: number): number {
+  if (table.maximum.icA.length === 0) return table.usualMinV;
+  const logA = Math.log(icA);
+  const gapV = table.gap.icA.length === 0 ? USUAL_GAP_V : between(table.gap, logA);
+  return highestV(table.maximum, icA, logA) - (1 - share) * gapV;
 }

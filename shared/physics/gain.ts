@@ -16,9 +16,12 @@ export interface SaturatedPair {
   readonly ibA: number;
 }
 
+/** hFE over IC; logarithms stand beside the figures, since hFE is read on log–log paper. */
 interface Curve {
   readonly icA: readonly number[];
   readonly gain: readonly number[];
+  readonly logA: Float64Array;
+  readonly logGain: Float64Array;
 }
 
 /** hFE over IC at 25 °C with its limits, and how the minimum falls in the cold. */
@@ -27,7 +30,7 @@ export interface GainTable {
   readonly maximum: Curve;
   readonly typical: Curve;
   /** What a saturation row proves: hFE cannot be lower than its IC/IB at that IC or below. */
-  readonly proven: readonly SaturatedPair[];
+  readonly proven: Curve;
   readonly lastIcA: number;
   /** X of hFE(T) = hFE(25)·(T/298.15 K)^X for limit figures. */
   readonly exponent: number;
@@ -54,7 +57,10 @@ export function gainTable(
     minimum,
     maximum: maximumCurve(sheet),
     typical: curveOf(sheet, (row) => row.typ, Math.min),
-    proven: saturated,
+    proven: logarithmic(
+      saturated.map(({ icA }) => icA),
+      saturated.map(({ icA, ibA }) => icA / ibA),
+    ),
     lastIcA: minimum.icA[minimum.icA.length - 1] ?? 0,
     exponent: coldExponent(rows) ?? defaultExponent,
   };
@@ -78,7 +84,21 @@ function curveOf(
       gain.push(value);
     }
   }
-  return { icA, gain };
+  return logarithmic(icA, gain);
+}
+
+function logarithmic(icA: readonly number[], gain: readonly number[]): Curve {
+  const logA = Float64Array.from(icA, Math.log);
+  return { icA, gain, logA, logGain: Float64Array.from(gain, Math.log) };
+}
+
+/** hFE of a logarithm; where it is a row's, the figure as printed. */
+function figureOf(log: number, ...curves: readonly Curve[]): number {
+  for (const { gain, logGain } of curves) {
+    const printed = gain[logGain.indexOf(log)];
+    if (printed !== undefined) return printed;
+  }
+  return Math.exp(log);
 }
 
 function minimumCurve(sheet: readonly GainPoint[]): Curve {
@@ -130,60 +150,88 @@ function coldExponent(rows: readonly GainPoint[]): number | null {
   return exponent;
 }
 
-/** Straight in log IC – log hFE on the segment from row k to k + 1, continued where IC lies outside. */
-function onSegment(curve: Curve, k: number, icA: number): number {
-  const x0 = Math.log(curve.icA[k] ?? 1);
-  const x1 = Math.log(curve.icA[k + 1] ?? 1);
-  const y0 = Math.log(curve.gain[k] ?? 1);
-  const y1 = Math.log(curve.gain[k + 1] ?? 1);
-  return Math.exp(y0 + ((y1 - y0) / (x1 - x0)) * (Math.log(icA) - x0));
+/** ln hFE straight in ln IC on the segment from row k to k + 1, continued where IC lies outside. */
+function onSegment(curve: Curve, k: number, logA: number): number {
+  const x0 = curve.logA[k] ?? 0;
+  const y0 = curve.logGain[k] ?? 0;
+  return y0 + slopeOf(curve, k) * (logA - x0);
 }
 
-function segmentOf(curve: Curve, icA: number): number {
+function slopeOf({ logA, logGain }: Curve, k: number): number {
+  const run = (logA[k + 1] ?? 0) - (logA[k] ?? 0);
+  return run > 0 ? ((logGain[k + 1] ?? 0) - (logGain[k] ?? 0)) / run : 0;
+}
+
+function segmentOf({ logA }: Curve, atLogA: number): number {
   let k = 0;
-  while (k < curve.icA.length - 2 && icA > (curve.icA[k + 1] ?? Infinity)) k++;
+  while (k < logA.length - 2 && atLogA > (logA[k + 1] ?? Infinity)) k++;
   return k;
 }
 
-/** Value of a curve; held outside its rows. */
-function held(curve: Curve, icA: number): number {
-  const last = curve.icA.length - 1;
-  if (last === 0 || icA <= (curve.icA[0] ?? 0)) return curve.gain[0] ?? 0;
-  if (icA >= (curve.icA[last] ?? 0)) return curve.gain[last] ?? 0;
-  return onSegment(curve, segmentOf(curve, icA), icA);
+/** ln of a curve's value; held outside its rows. */
+function held(curve: Curve, logA: number): number {
+  const last = curve.logA.length - 1;
+  if (last === 0 || logA <= (curve.logA[0] ?? 0)) return curve.logGain[0] ?? 0;
+  if (logA >= (curve.logA[last] ?? 0)) return curve.logGain[last] ?? 0;
+  return onSegment(curve, segmentOf(curve, logA), logA);
+}
+
+/** ln of the guaranteed minimum; outside the rows the end segment goes on only where that lowers hFE. */
+function logMinimum(table: GainTable, logA: number): number {
+  const { minimum } = table;
+  const last = minimum.logA.length - 1;
+  if (last === 0) return singleRowMinimum(table, logA);
+  if (logA < (minimum.logA[0] ?? 0)) {
+    return slopeOf(minimum, 0) > 0 ? onSegment(minimum, 0, logA) : (minimum.logGain[0] ?? 0);
+  }
+  if (logA > (minimum.logA[last] ?? 0)) {
+    const falls = slopeOf(minimum, last - 1) < 0;
+    return falls ? onSegment(minimum, last - 1, logA) : (minimum.logGain[last] ?? 0);
+  }
+  return onSegment(minimum, segmentOf(minimum, logA), logA);
+}
+
+/** One printed minimum: scaled by the typical curve above its row, else falling with 1/IC. */
+function singleRowMinimum({ minimum, typical, proven }: GainTable, logA: number): number {
+  const rowLogA = minimum.logA[0] ?? 0;
+  const rowLog = minimum.logGain[0] ?? 0;
+  if (logA <= rowLogA) return rowLog;
+  const firstTyp = typical.logA[0] ?? Infinity;
+  const lastTyp = typical.logA[typical.logA.length - 1] ?? -Infinity;
+  const reach = rowLogA >= firstTyp && logA <= lastTyp;
+  let log = reach ? rowLog + held(typical, logA) - held(typical, rowLogA) : rowLog + rowLogA - logA;
+  proven.logA.forEach((provenLogA, k) => {
+    if (provenLogA >= logA) log = Math.max(log, proven.logGain[k] ?? log);
+  });
+  return log;
 }
 
 /** Guaranteed minimum of hFE at 25 °C for a collector current in A. */
 export function minimumGain(table: GainTable, icA: number): number {
-  const { minimum } = table;
-  if (minimum.icA.length === 1) return singleRowMinimum(table, icA);
-  const last = minimum.icA.length - 1;
-  const inside = icA >= (minimum.icA[0] ?? 0) && icA <= (minimum.icA[last] ?? 0);
-  const line = onSegment(minimum, segmentOf(minimum, icA), icA);
-  // Outside the rows the end segment goes on only where that lowers hFE.
-  return inside ? line : Math.min(line, held(minimum, icA));
-}
-
-/** One printed minimum: scaled by the typical curve above its row, else falling with 1/IC. */
-function singleRowMinimum(table: GainTable, icA: number): number {
-  const rowA = table.minimum.icA[0] ?? 0;
-  const rowGain = table.minimum.gain[0] ?? 0;
-  if (icA <= rowA) return rowGain;
-  const { typical, proven } = table;
-  const firstTypA = typical.icA[0] ?? Infinity;
-  const lastTypA = typical.icA[typical.icA.length - 1] ?? 0;
-  const reach = rowA >= firstTypA && icA <= lastTypA;
-  let gain = reach ? rowGain * (held(typical, icA) / held(typical, rowA)) : rowGain * (rowA / icA);
-  for (const row of proven) if (row.icA >= icA) gain = Math.max(gain, row.icA / row.ibA);
-  return gain;
+  return figureOf(logMinimum(table, Math.log(icA)), table.minimum, table.proven);
 }
 
 /** Largest hFE at 25 °C for a collector current in A; held outside the rows. */
 export function maximumGain(table: GainTable, icA: number): number {
-  return held(table.maximum, icA);
+  return figureOf(held(table.maximum, Math.log(icA)), table.maximum);
 }
+
+/**
+ * hFE at 25 °C of one specimen for a collector current in A, a straight way along the logarithm.
+ *
+ * @param share −1 at the guaranteed minimum, 1 at the maximum
+ */
+export function gainBetween(table: GainTable, icA: number, share: number): number {
+  const logA = Math.log(icA);
+  const low = logMinimum(table, logA);
+  return Math.exp(low + ((1 + share) / 2) * (held(table.maximum, logA) - low));
+}
+
+/** X of hFE(T) for expected figures, both ways. */
+export const EXPECTED_GAIN_EXPONENT = 1.5;
 
 /** How hFE moves with temperature, (T/298.15 K)^X. */
 export function gainRatio(degC: number, exponent: number): number {
-  return Math.pow(Math.max(0, degC + ZERO_CELSIUS_K) / SHEET_K, exponent);
+  const ratio = Math.max(0, degC + ZERO_CELSIUS_K) / SHEET_K;
+  return exponent === EXPECTED_GAIN_EXPONENT ? ratio * Math.sqrt(ratio) : Math.pow(ratio, exponent);
 }
