@@ -1,4 +1,5 @@
 import type { StageInput } from './stage-input.ts';
+import type { Writable } from './writable.ts';
 
 /** Voltages of a coil's clamp; forward drops and zener voltages at their worst ends. */
 export interface ClampVoltages {
@@ -19,37 +20,37 @@ const LEAST_FORWARD_V = 0.5;
 
 /** @returns null where the stage has no clamp */
 export function clampVoltages(input: StageInput): ClampVoltages | null {
+  if (input.clamp.kind === 'none') return null;
+  const voltages = { peakV: 0, smallestV: 0, ownV: 0, largestV: 0, standOffV: null };
+  setClampVoltages(voltages, input);
+  return voltages;
+}
+
+/** Writes the voltages of a stage's clamp at its highest supply. */
+export function setClampVoltages(voltages: Writable<ClampVoltages>, input: StageInput): void {
   const { clamp, supplyV } = input;
   const forwardV = clamp.forwardV ?? 0;
-  const zener = clamp.zenerV ?? { min: 0, max: 0 };
+  const leastZenerV = clamp.zenerV?.min ?? 0;
+  const mostZenerV = clamp.zenerV?.max ?? 0;
   switch (clamp.kind) {
     case 'none':
-      return null;
+      return;
     case 'diode':
-      return acrossCoil(supplyV.max, forwardV, LEAST_FORWARD_V);
-    case 'diode-zener':
-      return acrossCoil(supplyV.max, forwardV + zener.max, zener.min + LEAST_FORWARD_V);
+    case 'diode-zener': {
+      const inSeries = clamp.kind === 'diode-zener';
+      voltages.ownV = forwardV + (inSeries ? mostZenerV : 0);
+      voltages.largestV = voltages.ownV;
+      voltages.peakV = supplyV.max + voltages.ownV;
+      voltages.smallestV = LEAST_FORWARD_V + (inSeries ? leastZenerV : 0);
+      return;
+    }
     case 'zener-across-transistor':
-      return acrossTransistor(supplyV.max, zener, zener.min);
     case 'tvs-across-transistor':
-      return acrossTransistor(supplyV.max, zener, clamp.standOffV ?? zener.min);
+      voltages.ownV = mostZenerV;
+      voltages.peakV = mostZenerV;
+      voltages.smallestV = leastZenerV - supplyV.max;
+      voltages.largestV = Math.max(0, mostZenerV - supplyV.max);
+      voltages.standOffV =
+        clamp.kind === 'tvs-across-transistor' ? (clamp.standOffV ?? leastZenerV) : leastZenerV;
   }
-}
-
-function acrossCoil(supplyV: number, largestV: number, smallestV: number): ClampVoltages {
-  return { peakV: supplyV + largestV, smallestV, ownV: largestV, largestV, standOffV: null };
-}
-
-function acrossTransistor(
-  supplyV: number,
-  zener: { min: number; max: number },
-  standOffV: number,
-): ClampVoltages {
-  return {
-    peakV: zener.max,
-    smallestV: zener.min - supplyV,
-    ownV: zener.max,
-    largestV: Math.max(0, zener.max - supplyV),
-    standOffV,
-  };
 }

@@ -68,3 +68,8 @@ function forwardV(load: LedStringLoad, { forwardSign, ambientDegC }: LoadEnds): 
   if (forwardSign > 0) return max + LED_V_PER_K * Math.max(0, -awayK);
   return (min + max) / 2;
 }
+
+/** Forward voltage of one specimen of an LED at an ambient, V: expected figures move both ways. */
+export function expectedForwardV(sheetV: number, ambientDegC: number): number {
+  return Math.max(0, sheetV - LED_V_PER_K * (ambientDegC - LED_SHEET_DEG_C));
+}

@@ -1,4 +1,5 @@
 import type { StageInput } from './stage-input.ts';
+import type { Writable } from './writable.ts';
 
 /**
  * The logic output as the base resistor sees it: a voltage behind a resistance, and a steeper resistance
@@ -43,27 +44,48 @@ export function driveSource(
   strong: boolean,
   pullUpSign: number,
 ): DriveSource {
+  const source = stiffSource(0);
+  setDriveSource(source, input, supplyV, railV, strong, pullUpSign);
+  return source;
+}
+
+/** Writes the output as `driveSource` gives it. */
+export function setDriveSource(
+  source: Writable<DriveSource>,
+  input: StageInput,
+  supplyV: number,
+  railV: number,
+  strong: boolean,
+  pullUpSign: number,
+): void {
   const { drive } = input;
   const rail = drive.railTracksSupply ? supplyV : railV;
+  source.sourceOhm = 0;
+  source.testedA = Infinity;
+  source.beyondOhm = 0;
   if (isHighSide(input)) {
-    return strong ? stiffSource(supplyV) : tested(supplyV, drive.low.levelV, 0, drive.low.currentA);
-  }
-  if (drive.kind === 'open-collector') {
+    source.openV = supplyV;
+    if (!strong) setTested(source, drive.low.levelV, 0, drive.low.currentA);
+  } else if (drive.kind === 'open-collector') {
     const pullUpOhm = drive.pullUp.valueOhm * (1 + pullUpSign * drive.pullUp.tolerance);
-    const lostV = strong ? 0 : drive.leakageA * pullUpOhm;
-    return { ...stiffSource(rail - lostV), sourceOhm: pullUpOhm };
+    source.openV = rail - (strong ? 0 : drive.leakageA * pullUpOhm);
+    source.sourceOhm = pullUpOhm;
+  } else if (strong) source.openV = rail;
+  else {
+    const { dropV, unloadedDropV, currentA } = drive.high;
+    source.openV = rail - unloadedDropV - drive.groundShiftV;
+    setTested(source, dropV, unloadedDropV, currentA);
   }
-  if (strong) return stiffSource(rail);
-  const { dropV, unloadedDropV, currentA } = drive.high;
-  return tested(rail - unloadedDropV - drive.groundShiftV, dropV, unloadedDropV, currentA);
 }
 
 /** An output with one tested point: `dropV` at `currentA`, `unloadedV` at no load. */
-function tested(openV: number, dropV: number, unloadedV: number, currentA: number): DriveSource {
-  return {
-    openV,
-    sourceOhm: Math.max(0, dropV - unloadedV) / currentA,
-    testedA: currentA,
-    beyondOhm: (BEYOND_TESTED * dropV) / currentA,
-  };
+function setTested(
+  source: Writable<DriveSource>,
+  dropV: number,
+  unloadedV: number,
+  currentA: number,
+): void {
+  source.sourceOhm = Math.max(0, dropV - unloadedV) / currentA;
+  source.testedA = currentA;
+  source.beyondOhm = (BEYOND_TESTED * dropV) / currentA;
 }

@@ -7,13 +7,11 @@ import type { StageModel } from './stage-model.ts';
  * VO(on) is its VCE(sat). `vbeV` and `ibA` are the terminal figures V_I and I_I.
  */
 export class InputDrivenPoint extends OperatingPoint {
-  private readonly leastR1Ohm: number;
   /** Input conductance the sheet tests, A/V; 0 where it prints none. */
   private readonly testedAPerV: number;
 
   constructor(model: StageModel) {
     super(model);
-    this.leastR1Ohm = model.inside?.r1Ohm[0] ?? Infinity;
     const input = model.inside?.input;
     this.testedAPerV =
       input?.currentA == null || input.testV === null ? 0 : input.currentA / input.testV;
@@ -51,7 +49,8 @@ export class InputDrivenPoint extends OperatingPoint {
   }
 
   private inputBehind(openV: number, ohm: number): void {
-    const byR1V = (openV * this.leastR1Ohm + INSIDE_VBE_V * ohm) / (this.leastR1Ohm + ohm);
+    const leastR1Ohm = this.model.inside?.r1Ohm[0] ?? Infinity;
+    const byR1V = (openV * leastR1Ohm + INSIDE_VBE_V * ohm) / (leastR1Ohm + ohm);
     const byTestV = openV / (1 + ohm * this.testedAPerV);
     this.vbeV = Math.max(0, Math.min(openV, byR1V, byTestV));
     this.driveA = Math.max(0, (openV - this.vbeV) / ohm);

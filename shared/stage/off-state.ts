@@ -1,5 +1,3 @@
-import { SHEET_DEG_C } from '../physics/constants.ts';
-import { gainRatio, maximumGain } from '../physics/gain.ts';
 import { cutOffCurrentA, leakageA } from '../physics/leakage.ts';
 import { isHighSide } from './drive-source.ts';
 import type { OperatingPoint } from './operating-point.ts';
@@ -114,10 +112,8 @@ export class OffState {
 
   /** Leakage into an open base comes out amplified; what the collector leaks besides adds to it. */
   private openBaseA(point: OperatingPoint, baseA: number, besidesA: number): number {
-    const { gain } = this.model.part;
-    if (gain === null) return point.condition.fullA;
-    const warm = point.tjDegC > SHEET_DEG_C ? gainRatio(point.tjDegC, gain.exponent) : 1;
-    const gainMax = maximumGain(gain, baseA) * warm;
+    if (this.model.part.gain === null) return point.condition.fullA;
+    const gainMax = point.mostGainAt(baseA);
     return Math.min((1 + gainMax) * baseA + besidesA, point.condition.fullA);
   }
 

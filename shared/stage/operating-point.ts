@@ -1,6 +1,12 @@
 import { SHEET_DEG_C } from '../physics/constants.ts';
-import { gainRatio } from '../physics/gain.ts';
-import { forcedBetaStepV, interceptAtV, resistanceRatio } from '../physics/saturation.ts';
+import { gainBetween, gainRatio, maximumGain, minimumGain } from '../physics/gain.ts';
+import {
+  expectedInterceptAtV,
+  expectedResistanceRatio,
+  forcedBetaStepV,
+  interceptAtV,
+  resistanceRatio,
+} from '../physics/saturation.ts';
 import type { DriveSource } from './drive-source.ts';
 import type { InsideModel } from './internal-resistors.ts';
 import type { LoadCondition, StageModel } from './stage-model.ts';
@@ -60,6 +66,8 @@ export class OperatingPoint {
 
   private readonly vbeTempco: number;
   private readonly exponent: number;
+  /** Temperature moves expected figures both ways, limit figures only to the worse. */
+  private readonly bothWays: boolean;
 
   readonly model: StageModel;
 
@@ -69,6 +77,24 @@ export class OperatingPoint {
     this.drive = model.nominal.drive;
     this.vbeTempco = model.part.vbeTempcoVPerK;
     this.exponent = model.part.gain?.exponent ?? 0;
+    this.bothWays = model.specimen !== null;
+  }
+
+  /** Smallest hFE at another collector current, at the solved junction temperature. */
+  leastGainAt(icA: number): number {
+    const { gain } = this.model.part;
+    if (gain === null) return Infinity;
+    const { specimen } = this.model;
+    return specimen === null
+      ? minimumGain(gain, icA) * this.ratioWhere(this.tjDegC < SHEET_DEG_C)
+      : gainBetween(gain, icA, specimen.gain) * this.ratioWhere(true);
+  }
+
+  /** Largest hFE at another collector current, at the solved junction temperature. */
+  mostGainAt(icA: number): number {
+    const { gain } = this.model.part;
+    if (gain === null || this.model.specimen !== null) return this.leastGainAt(icA);
+    return maximumGain(gain, icA) * this.ratioWhere(this.tjDegC > SHEET_DEG_C);
   }
 
   /** Puts the point at a numbered corner; `solve` or `settle` then fills the figures. */
@@ -234,13 +260,17 @@ export class OperatingPoint {
     this.solve(high);
   }
 
-  /** Minima take the cold penalty, maxima the hot one; neither takes a credit. */
+  /** Minima take the cold penalty, maxima the hot one; neither takes a credit. Specimens take both. */
   private gainFactor(tjDegC: number): number {
     const penalty = this.highGain ? tjDegC > SHEET_DEG_C : tjDegC < SHEET_DEG_C;
-    if (!penalty) return 1;
-    if (tjDegC !== this.ratioDegC) {
-      this.ratioDegC = tjDegC;
-      this.ratio = gainRatio(tjDegC, this.exponent);
+    return this.ratioWhere(penalty || this.bothWays);
+  }
+
+  private ratioWhere(applies: boolean): number {
+    if (!applies) return 1;
+    if (this.tjDegC !== this.ratioDegC) {
+      this.ratioDegC = this.tjDegC;
+      this.ratio = gainRatio(this.tjDegC, this.exponent);
     }
     return this.ratio;
   }
@@ -258,7 +288,10 @@ export class OperatingPoint {
     const { saturation } = this.model.part;
     if (saturation === null) return 0;
     const tempco = this.model.input.policy.rceTempcoPerK;
-    return (saturation.slopeOhm[this.piece] ?? 0) * resistanceRatio(tjDegC, tempco);
+    const ratio = this.bothWays
+      ? expectedResistanceRatio(tjDegC, tempco)
+      : resistanceRatio(tjDegC, tempco);
+    return (saturation.slopeOhm[this.piece] ?? 0) * ratio;
   }
 
   /** Load line against the saturation line: piece by piece downwards from the full load current. */
@@ -268,8 +301,11 @@ export class OperatingPoint {
     if (saturation === null) return;
     let current = 0;
     for (;;) {
+      const plainV = this.bothWays
+        ? expectedInterceptAtV(saturation, this.piece, tjDegC)
+        : interceptAtV(saturation, this.piece, tjDegC);
       const interceptV =
-        interceptAtV(saturation, this.piece, tjDegC) +
+        plainV +
         forcedBetaStepV(
           forcedBeta,
           saturation.testBeta[this.piece] ?? 0,

@@ -1,5 +1,5 @@
 import { baseEmitterTable, type BaseEmitterTable } from '../physics/base-emitter.ts';
-import { gainTable, type GainTable } from '../physics/gain.ts';
+import { EXPECTED_GAIN_EXPONENT, gainTable, type GainTable } from '../physics/gain.ts';
 import {
   cutOffAnchor,
   DARLINGTON_LEAKAGE,
@@ -34,20 +34,33 @@ export interface PartModel {
 /** A Darlington has two junctions in series and two gains in a row. */
 const DARLINGTON_JUNCTIONS = 2;
 
+/**
+ * Where one specimen of a part stands between its limits, a stage's expected figures with it: −1 at the least gain and as
+ * far below the typical VBE and VCE(sat) as their maxima lie above, 1 at the maxima.
+ */
+export interface Specimen {
+  readonly gain: number;
+  readonly vbe: number;
+  readonly vceSat: number;
+}
+
 /** The part as the policy's temperature laws and substitutes read it. */
 export function partModel(
   part: TransistorData,
   policy: Policy,
   darlington = part.darlington,
   inside: InsideModel | null = null,
+  expected = false,
 ): PartModel {
   const junctions = darlington ? DARLINGTON_JUNCTIONS : 1;
   const vbeMinV = policy.vbeMinV * junctions;
   const baseEmitter = baseEmitterTable(part.baseEmitter, vbeMinV);
   const { limits } = part;
   const gainRows = inside === null ? part.gain : insideGain(part.gain, inside);
+  const gain = gainTable(gainRows, part.saturation, policy.gainExponent * junctions);
   return {
-    gain: gainTable(gainRows, part.saturation, policy.gainExponent * junctions),
+    gain:
+      gain !== null && expected ? { ...gain, exponent: EXPECTED_GAIN_EXPONENT * junctions } : gain,
     saturation: saturationLine(part.saturation, part.model?.betaR ?? null, darlington),
     baseEmitter,
     hasVbe: baseEmitter.maximum.icA.length > 0,

@@ -1,13 +1,14 @@
-import { maximumVbeV, minimumVbeV } from '../physics/base-emitter.ts';
-import { maximumGain, minimumGain } from '../physics/gain.ts';
+import { maximumVbeV, minimumVbeV, vbeBetweenV } from '../physics/base-emitter.ts';
+import { gainBetween, maximumGain, minimumGain } from '../physics/gain.ts';
 import { pieceAt } from '../physics/saturation.ts';
 import { type ClampVoltages, clampVoltages } from './clamp-voltages.ts';
 import { collectorPath, loadDegC, type LoadEnds } from './collector-path.ts';
 import { cornerSpace, type CornerSpace, type CornerVariable } from './corners.ts';
 import { type DriveSource, driveSource } from './drive-source.ts';
 import { insideModel, type InsideModel } from './internal-resistors.ts';
-import { partModel, type PartModel } from './part-model.ts';
+import { partModel, type PartModel, type Specimen } from './part-model.ts';
 import type { StageInput } from './stage-input.ts';
+import type { Writable } from './writable.ts';
 
 /** What does not depend on RB at one load condition: full load current and the part's figures there, 25 °C. */
 export interface LoadCondition {
@@ -30,6 +31,8 @@ export interface LoadCondition {
 export interface StageModel {
   readonly input: StageInput;
   readonly part: PartModel;
+  /** The specimen that expected figures belong to; null for limit figures. */
+  readonly specimen: Specimen | null;
   readonly corners: CornerSpace;
   /** By supply, ambient, load, instant and the load's own voltage: bit 4, 3, 2, 1, 0. */
   readonly conditions: readonly LoadCondition[];
@@ -58,8 +61,16 @@ export interface Surroundings {
   readonly nominalSeriesV?: number;
 }
 
-/** Everything of a stage that its base resistor does not change. */
-export function stageModel(input: StageInput, around: Surroundings = {}): StageModel {
+/**
+ * Everything of a stage that its base resistor does not change.
+ *
+ * @param specimen for expected figures: the specimen of the part they belong to
+ */
+export function stageModel(
+  input: StageInput,
+  around: Surroundings = {},
+  specimen: Specimen | null = null,
+): StageModel {
   const { shuntResistor, supplyV, ambientDegC, policy, drive } = input;
   const inside = insideModel(input);
   const part = partModel(
@@ -67,7 +78,10 @@ export function stageModel(input: StageInput, around: Surroundings = {}): StageM
     policy,
     input.transistor.darlington || input.topology === 'low-side-darlington',
     inside,
+    specimen !== null,
   );
+  const condition = (supply: number, ends: LoadEnds, seriesV: number) =>
+    loadCondition(input, part, specimen, supply, ends, seriesV);
   const supplies = [supplyV.min, supplyV.max] as const;
   const ambients = [ambientDegC.min, ambientDegC.max] as const;
   const conditions = ENDS.flatMap((s) =>
@@ -75,9 +89,7 @@ export function stageModel(input: StageInput, around: Surroundings = {}): StageM
       ENDS.flatMap((l) =>
         ENDS.flatMap((t) =>
           ENDS.map((v) =>
-            loadCondition(
-              input,
-              part,
+            condition(
               supplies[s],
               {
                 ambientDegC: ambients[a],
@@ -104,6 +116,7 @@ export function stageModel(input: StageInput, around: Surroundings = {}): StageM
   return {
     input,
     part,
+    specimen,
     corners: cornerSpace(lacking(input, inside, around)),
     conditions,
     drives: around.drives ?? drives,
@@ -113,9 +126,7 @@ export function stageModel(input: StageInput, around: Surroundings = {}): StageM
     conductionShare:
       input.frequencyHz > 0 && input.frequencyHz >= policy.averagingHz ? input.duty : 1,
     nominal: {
-      condition: loadCondition(
-        input,
-        part,
+      condition: condition(
         middleV,
         { ambientDegC: room, settled: true, sign: 0, forwardSign: 0 },
         around.nominalSeriesV ?? 0,
@@ -146,27 +157,58 @@ function lacking(
 function loadCondition(
   input: StageInput,
   part: PartModel,
+  specimen: Specimen | null,
   supplyV: number,
   ends: LoadEnds,
   seriesV: number,
 ): LoadCondition {
-  const coilDegC = loadDegC(input, ends);
+  const condition = {
+    supplyV,
+    ambientDegC: 0,
+    coilDegC: 0,
+    availableV: 0,
+    loadOhm: 0,
+    fullA: 0,
+    gainMin: 0,
+    gainMax: 0,
+    vbeMinV: 0,
+    vbeMaxV: 0,
+    piece: 0,
+  };
+  setLoadCondition(condition, input, part, specimen, supplyV, ends, seriesV);
+  return condition;
+}
+
+/** Writes what stands at one load condition. */
+export function setLoadCondition(
+  condition: Writable<LoadCondition>,
+  input: StageInput,
+  part: PartModel,
+  specimen: Specimen | null,
+  supplyV: number,
+  ends: LoadEnds,
+  seriesV: number,
+): void {
   const path = collectorPath(input, supplyV, ends);
   const availableV = path.availableV - seriesV;
-  const { loadOhm } = path;
-  const fullA = Math.max(0, availableV) / loadOhm;
+  const fullA = Math.max(0, availableV) / path.loadOhm;
+  condition.supplyV = supplyV;
+  condition.ambientDegC = ends.ambientDegC;
+  condition.coilDegC = loadDegC(input, ends);
+  condition.availableV = availableV;
+  condition.loadOhm = path.loadOhm;
+  condition.fullA = fullA;
   const { gain, baseEmitter, saturation } = part;
-  return {
-    supplyV,
-    ambientDegC: ends.ambientDegC,
-    coilDegC,
-    availableV,
-    loadOhm,
-    fullA,
-    gainMin: gain === null ? Infinity : minimumGain(gain, fullA),
-    gainMax: gain === null ? Infinity : maximumGain(gain, fullA),
-    vbeMinV: minimumVbeV(baseEmitter, fullA),
-    vbeMaxV: maximumVbeV(baseEmitter, fullA),
-    piece: saturation === null ? 0 : pieceAt(saturation, fullA),
-  };
+  condition.piece = saturation === null ? 0 : pieceAt(saturation, fullA);
+  if (specimen === null) {
+    condition.gainMin = gain === null ? Infinity : minimumGain(gain, fullA);
+    condition.gainMax = gain === null ? Infinity : maximumGain(gain, fullA);
+    condition.vbeMinV = minimumVbeV(baseEmitter, fullA);
+    condition.vbeMaxV = maximumVbeV(baseEmitter, fullA);
+  } else {
+    condition.gainMin = gain === null ? Infinity : gainBetween(gain, fullA, specimen.gain);
+    condition.gainMax = condition.gainMin;
+    condition.vbeMinV = vbeBetweenV(baseEmitter, fullA, specimen.vbe);
+    condition.vbeMaxV = condition.vbeMinV;
+  }
 }
