@@ -3,7 +3,7 @@ import type { InsideModel } from '../stage/internal-resistors.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
-import type { WorstCases } from './worst-cases.ts';
+import type { FigureSink } from './figure-sink.ts';
 
 const ON = criterionNumber('input-on');
 const MAXIMUM = criterionNumber('input-voltage');
@@ -17,10 +17,10 @@ const JUNCTION_V_PER_K = 0.002;
 export class InputChecks {
   private readonly model: StageModel;
   private readonly inside: InsideModel;
-  private readonly worst: WorstCases;
+  private readonly worst: FigureSink;
   private readonly exponent: number;
 
-  constructor(model: StageModel, inside: InsideModel, worst: WorstCases) {
+  constructor(model: StageModel, inside: InsideModel, worst: FigureSink) {
     this.model = model;
     this.inside = inside;
     this.worst = worst;

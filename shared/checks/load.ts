@@ -1,12 +1,10 @@
-import { gainRatio, maximumGain, minimumGain } from '../physics/gain.ts';
-import { SHEET_DEG_C } from '../physics/constants.ts';
 import { lampColdOhm } from '../physics/lamp.ts';
 import { resistorShare } from '../physics/thermal.ts';
 import type { LampLoad, LedStringLoad, LogicInputLoad } from '../stage/load.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
-import type { WorstCases } from './worst-cases.ts';
+import type { FigureSink } from './figure-sink.ts';
 
 const LOAD_CURRENT = criterionNumber('load-current');
 const LEAST_LOAD_CURRENT = criterionNumber('load-current-low');
@@ -18,28 +16,14 @@ const RC_POWER = criterionNumber('rc-dissipation');
 
 const NO_CORNER = -1;
 
-/** A cold filament at one ambient: its current at the highest supply and the gain limits there, 25 °C. */
-interface Inrush {
-  readonly peakA: number;
-  readonly gainMin: number;
-  readonly gainMax: number;
-}
-
 /** The criteria that belong to LED strings, lamps and logic inputs; `visit` takes in one corner. */
 export class LoadChecks {
   private readonly model: StageModel;
-  private readonly worst: WorstCases;
-  /** By end of the ambient; empty for loads that are no lamp. */
-  private readonly inrush: readonly Inrush[];
+  private readonly worst: FigureSink;
 
-  constructor(model: StageModel, worst: WorstCases) {
+  constructor(model: StageModel, worst: FigureSink) {
     this.model = model;
     this.worst = worst;
-    const { load, ambientDegC } = model.input;
-    this.inrush =
-      load.kind === 'lamp'
-        ? [ambientDegC.min, ambientDegC.max].map((degC) => inrushAt(model, load, degC))
-        : [];
   }
 
   /** The figures no corner moves. */
@@ -59,7 +43,7 @@ export class LoadChecks {
   visit(point: OperatingPoint, corner: number): void {
     const { load } = this.model.input;
     if (load.kind === 'led-string') this.visitLeds(load, point, corner);
-    else if (load.kind === 'lamp') this.visitLamp(point, corner);
+    else if (load.kind === 'lamp') this.visitLamp(load, point, corner);
     else if (load.kind === 'logic-input') this.visitInputs(load, point, corner);
   }
 
@@ -72,19 +56,15 @@ export class LoadChecks {
     }
   }
 
-  private visitLamp(point: OperatingPoint, corner: number): void {
-    const { part, corners, input } = this.model;
-    const inrush = this.inrush[(corner >> corners.shift.ambient) & 1];
-    if (inrush === undefined) return;
-    const exponent = part.gain?.exponent ?? 0;
-    const ratio = gainRatio(point.tjDegC, exponent);
-    const warm = point.tjDegC > SHEET_DEG_C;
-    const mostA = inrush.gainMax * (warm ? ratio : 1) * point.ibA;
-    const leastA = inrush.gainMin * (warm ? 1 : ratio) * point.ibA;
+  private visitLamp(load: LampLoad, point: OperatingPoint, corner: number): void {
+    const { input } = this.model;
+    const inrushA = inrushCurrentA(load, input.supplyV.max, point.condition.ambientDegC);
+    const mostA = point.mostGainAt(inrushA) * point.ibA;
+    const leastA = point.leastGainAt(inrushA) * point.ibA;
     const { icPeakA, icA } = input.transistor.limits;
     const limitA = (icPeakA ?? icA ?? NaN) * input.policy.currentDerating;
-    this.worst.note(PEAK, Math.min(inrush.peakA, mostA), limitA, corner);
-    this.worst.note(INRUSH, leastA / inrush.peakA, 1, corner);
+    this.worst.note(PEAK, Math.min(inrushA, mostA), limitA, corner);
+    this.worst.note(INRUSH, leastA / inrushA, 1, corner);
   }
 
   private visitInputs(load: LogicInputLoad, point: OperatingPoint, corner: number): void {
@@ -101,20 +81,14 @@ export class LoadChecks {
 /** 10 to 90 % of an exponential, in time constants. */
 const RISE_FACTOR = 2.2;
 
-function inrushAt(model: StageModel, load: LampLoad, ambientDegC: number): Inrush {
-  const { gain } = model.part;
+/** Current of a cold filament, A. */
+function inrushCurrentA(load: LampLoad, supplyV: number, ambientDegC: number): number {
   const coldOhm = Math.max(Number.MIN_VALUE, lampColdOhm(load, ambientDegC));
-  const peakA = Math.min(Number.MAX_VALUE, model.input.supplyV.max / coldOhm);
-  return {
-    peakA,
-    gainMin: gain === null ? Infinity : minimumGain(gain, peakA),
-    gainMax: gain === null ? Infinity : maximumGain(gain, peakA),
-  };
+  return Math.min(Number.MAX_VALUE, supplyV / coldOhm);
 }
 
 /** Largest current of a lamp's cold filament, A; 0 for other loads. */
 export function largestInrushA({ input }: StageModel): number {
   const { load, ambientDegC, supplyV } = input;
-  if (load.kind !== 'lamp') return 0;
-  return supplyV.max / Math.max(Number.MIN_VALUE, lampColdOhm(load, ambientDegC.min));
+  return load.kind === 'lamp' ? inrushCurrentA(load, supplyV.max, ambientDegC.min) : 0;
 }

@@ -4,7 +4,7 @@ import { OffState } from '../stage/off-state.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
-import type { WorstCases } from './worst-cases.ts';
+import type { FigureSink } from './figure-sink.ts';
 
 const BASE = criterionNumber('off-base-voltage');
 const CURRENT = criterionNumber('off-collector-current');
@@ -24,12 +24,12 @@ const LOAD_SHARE = 0.001;
 /** The criteria of the off state; `visit` takes in a settled corner at the highest supply. */
 export class OffStateChecks {
   private readonly model: StageModel;
-  private readonly worst: WorstCases;
+  private readonly worst: FigureSink;
   private readonly off: OffState;
   private readonly drivesOpenDrain: boolean;
   private readonly coilLimitA: number;
 
-  constructor(model: StageModel, worst: WorstCases) {
+  constructor(model: StageModel, worst: FigureSink) {
     this.model = model;
     this.worst = worst;
     this.off = new OffState(model);

@@ -4,7 +4,7 @@ import { isHighSide } from '../stage/drive-source.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
-import type { WorstCases } from './worst-cases.ts';
+import type { FigureSink } from './figure-sink.ts';
 
 const OVERDRIVE = criterionNumber('overdrive-factor');
 const FORCED_BETA = criterionNumber('forced-beta');
@@ -28,7 +28,7 @@ const derated = (limit: number | null, derating: number) =>
 /** The criteria of the on state; limits are worked out once, `visit` takes in one corner. */
 export class OnStateChecks {
   private readonly model: StageModel;
-  private readonly worst: WorstCases;
+  private readonly worst: FigureSink;
   private readonly collectorLimitA: number;
   private readonly peakLimitA: number;
   private readonly baseLimitA: number;
@@ -38,12 +38,11 @@ export class OnStateChecks {
   private readonly rbLimitW: number;
   private readonly rbeLimitW: number;
   private readonly pullUpLimitW: number;
-  private readonly pullUpOhm: number;
   private readonly pullUpFeedsBase: boolean;
   /** Whether a base current turns the part on, not a printed input voltage. */
   private readonly byBaseCurrent: boolean;
 
-  constructor(model: StageModel, worst: WorstCases) {
+  constructor(model: StageModel, worst: FigureSink) {
     this.model = model;
     this.worst = worst;
     const { policy, transistor, drive, baseResistor, shuntResistor } = model.input;
@@ -62,7 +61,6 @@ export class OnStateChecks {
     this.rbLimitW = derated(baseResistor.ratingW, policy.resistorDerating);
     this.rbeLimitW = derated(shuntResistor?.ratingW ?? null, policy.resistorDerating);
     this.pullUpLimitW = derated(drive.pullUp?.ratingW ?? null, policy.resistorDerating);
-    this.pullUpOhm = openCollector ? drive.pullUp.valueOhm * (1 - drive.pullUp.tolerance) : NaN;
   }
 
   visit(point: OperatingPoint, corner: number): void {
@@ -98,7 +96,8 @@ export class OnStateChecks {
     const { drive, shuntResistor } = this.model.input;
     const share = resistorShare(point.condition.ambientDegC);
     const railV = drive.railTracksSupply ? point.condition.supplyV : drive.railV.max;
-    const driveA = this.pullUpFeedsBase ? railV / this.pullUpOhm : point.driveA;
+    const pullUpOhm = (drive.pullUp?.valueOhm ?? NaN) * (1 - (drive.pullUp?.tolerance ?? 0));
+    const driveA = this.pullUpFeedsBase ? railV / pullUpOhm : point.driveA;
     worst.note(DRIVE, driveA, this.driveLimitA, corner);
     const rbW = point.driveA * point.driveA * point.outerRbOhm;
     worst.note(RB_POWER, rbW, this.rbLimitW * share, corner);
@@ -107,7 +106,7 @@ export class OnStateChecks {
       worst.note(RBE_POWER, powerW, this.rbeLimitW * share, corner);
     }
     if (drive.kind === 'open-collector') {
-      const powerW = (railV * railV) / this.pullUpOhm;
+      const powerW = (railV * railV) / pullUpOhm;
       worst.note(PULL_UP_POWER, powerW, this.pullUpLimitW * share, corner);
     }
   }

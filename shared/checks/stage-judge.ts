@@ -4,14 +4,9 @@ import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageInput } from '../stage/stage-input.ts';
 import { type StageModel, stageModel, type Surroundings } from '../stage/stage-model.ts';
 import type { Criterion } from './evaluation.ts';
-import { InputChecks } from './input.ts';
-import { LoadChecks } from './load.ts';
-import { OffStateChecks } from './off-state.ts';
-import { OnStateChecks } from './on-state.ts';
+import { StageChecks } from './stage-checks.ts';
 import { standOffState, standOnData } from './standings.ts';
-import { SwitchingChecks } from './switching.ts';
 import { TestedRange } from './tested-range.ts';
-import { TurnOffChecks } from './turn-off.ts';
 import { WorstCases } from './worst-cases.ts';
 
 /** Criteria that a few corners can already refute a base resistor by. */
@@ -64,12 +59,7 @@ export class StageJudge {
   readonly model: StageModel;
   readonly point: OperatingPoint;
   private readonly worst = new WorstCases();
-  private readonly on: OnStateChecks;
-  private readonly off: OffStateChecks;
-  private readonly load: LoadChecks;
-  private readonly input: InputChecks | null;
-  private readonly turnOff: TurnOffChecks;
-  private readonly switching: SwitchingChecks;
+  private readonly checks: StageChecks;
   private readonly tested: TestedRange;
   private readonly observer: CornerObserver | null;
   private probes: readonly number[] = [];
@@ -89,13 +79,7 @@ export class StageJudge {
     this.observer = observer;
     this.model = stageModel(input, around);
     this.point = operatingPoint(this.model);
-    this.on = new OnStateChecks(this.model, this.worst);
-    this.off = new OffStateChecks(this.model, this.worst);
-    this.load = new LoadChecks(this.model, this.worst);
-    const { inside } = this.model;
-    this.input = inside === null ? null : new InputChecks(this.model, inside, this.worst);
-    this.turnOff = new TurnOffChecks(this.model, this.worst);
-    this.switching = new SwitchingChecks(this.model, this.worst);
+    this.checks = new StageChecks(this.model, this.worst);
     this.tested = new TestedRange(this.model);
     this.startW = new Float64Array(this.model.corners.count);
   }
@@ -103,11 +87,11 @@ export class StageJudge {
   /** Every criterion of the stage with a base resistor of `rbOhm`, worst over all corners. */
   criteria(rbOhm: number): Criterion[] {
     this.run(rbOhm);
-    standOnData(this.model, this.worst, this.switching.known);
-    if (this.input?.beyondTest === true && this.worst.takesPart('input-on')) {
+    standOnData(this.model, this.worst, this.checks.switching.known);
+    if (this.checks.input?.beyondTest === true && this.worst.takesPart('input-on')) {
       this.worst.stand('input-on', 'at-best-open');
     }
-    standOffState(this.model, this.worst, this.off.baseOpen);
+    standOffState(this.model, this.worst, this.checks.off.baseOpen);
     const { corners, input } = this.model;
     return [...this.worst.criteria(corners, input.policy.marginalBand), this.tested.criterion()];
   }
@@ -119,7 +103,7 @@ export class StageJudge {
 
   /** Largest collector current of the last run's off states, A. */
   get largestOffA(): number {
-    return this.off.largestA;
+    return this.checks.off.largestA;
   }
 
   /** What the last run found. */
@@ -144,8 +128,7 @@ export class StageJudge {
     for (const corner of this.probes) {
       point.place(corner, rbOhm);
       point.solve(point.condition.ambientDegC);
-      this.on.visit(point, corner);
-      this.input?.visit(point, corner);
+      this.checks.probe(point, corner);
       beyondPin ||= point.beyondPin;
     }
     const margin = Math.min(...PROBED.map((id) => worst.key(id)));
@@ -158,14 +141,10 @@ export class StageJudge {
     const { count, shift } = model.corners;
     const rth = model.part.rthJaKPerW ?? 0;
     this.worst.reset();
-    this.turnOff.begin();
-    this.load.begin();
+    this.checks.begin();
     this.tested.begin();
-    this.off.begin();
     this.beyondTestBeta = false;
     this.runaway = false;
-    const switches = model.input.frequencyHz > 0;
-    const hasOwnChecks = model.input.load.kind !== 'coil';
     for (let corner = 0; corner < count; corner++) {
       const settled = ((corner >> shift.instant) & 1) === 1;
       const startW = this.startW[corner & ~(1 << shift.instant)] ?? 0;
@@ -176,16 +155,8 @@ export class StageJudge {
         point.solve(ambientDegC);
         this.startW[corner] = point.powerW;
       }
-      this.on.visit(point, corner);
-      this.turnOff.visit(point, corner);
-      this.input?.visit(point, corner);
-      if (hasOwnChecks) this.load.visit(point, corner);
+      this.checks.visit(point, corner, settled && ((corner >> shift.supply) & 1) === 1);
       this.tested.visit(point);
-      if (switches) this.switching.visit(point, corner);
-      if (settled && ((corner >> shift.supply) & 1) === 1) {
-        this.off.visit(point, corner);
-        this.input?.visitOff(corner);
-      }
       this.notice(point);
       this.observer?.visit(point, corner);
     }

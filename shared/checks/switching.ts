@@ -1,11 +1,11 @@
 import { SHEET_DEG_C } from '../physics/constants.ts';
-import { gainRatio, maximumGain, minimumGain } from '../physics/gain.ts';
+import { minimumGain } from '../physics/gain.ts';
 import { storageConstantSec, storageTimeSec } from '../physics/storage-time.ts';
 import { isHighSide } from '../stage/drive-source.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
-import type { WorstCases } from './worst-cases.ts';
+import type { FigureSink } from './figure-sink.ts';
 
 const STORAGE = criterionNumber('storage-time');
 
@@ -18,12 +18,12 @@ const PERIOD_SHARE = 0.1;
 /** Storage and fall time at a switching frequency; `visit` takes in one corner. */
 export class SwitchingChecks {
   private readonly model: StageModel;
-  private readonly worst: WorstCases;
+  private readonly worst: FigureSink;
   private readonly constantSec: number | null;
   private readonly fallSec: number;
   private readonly limitSec: number;
 
-  constructor(model: StageModel, worst: WorstCases) {
+  constructor(model: StageModel, worst: FigureSink) {
     this.model = model;
     this.worst = worst;
     const { frequencyHz, duty, storageTimeLimitSec, transistor } = model.input;
@@ -38,11 +38,9 @@ export class SwitchingChecks {
   }
 
   visit(point: OperatingPoint, corner: number): void {
-    const { gain } = this.model.part;
-    if (this.constantSec === null || gain === null) return;
+    if (this.constantSec === null) return;
     const warm = point.tjDegC > SHEET_DEG_C;
-    const gainMax =
-      maximumGain(gain, point.icA) * (warm ? gainRatio(point.tjDegC, gain.exponent) : 1);
+    const gainMax = point.mostGainAt(point.icA);
     const offA = this.offCurrentA(point);
     const slower = warm ? 1 + STORAGE_TEMPCO_PER_K * (point.tjDegC - SHEET_DEG_C) : 1;
     const storeSec = slower * storageTimeSec(this.constantSec, point.ibA, offA, point.icA, gainMax);

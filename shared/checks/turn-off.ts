@@ -2,7 +2,7 @@ import { clampChargeC, releaseTimeSec } from '../physics/coil.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
-import type { WorstCases } from './worst-cases.ts';
+import type { FigureSink } from './figure-sink.ts';
 
 const PEAK = criterionNumber('peak-collector-voltage');
 const SURGE = criterionNumber('surge-voltage');
@@ -16,12 +16,12 @@ const NO_CORNER = -1;
 /** The criteria of turning a coil off, and of the supply's surge and dip. */
 export class TurnOffChecks {
   private readonly model: StageModel;
-  private readonly worst: WorstCases;
+  private readonly worst: FigureSink;
   private readonly clampLimitA: number;
   private readonly clampLimitW: number;
   private readonly releaseA: number;
 
-  constructor(model: StageModel, worst: WorstCases) {
+  constructor(model: StageModel, worst: FigureSink) {
     this.model = model;
     this.worst = worst;
     const { clamp, policy, load } = model.input;
