@@ -68,6 +68,7 @@ const OWN = {
   'clamp-current': words('turn-off', 'Clamp current', '<=', 'A', ['I', 'clamp']),
   'clamp-power': words('turn-off', 'Clamp power', '<=', 'W', ['P', 'clamp']),
   'storage-time': words('switching', 'Storage and fall time', '<=', 's', ['t', 's']),
+  'low-to-high-delay': words('switching', 'Low-to-high delay', '<=', 's', ['t', 'LH']),
   'tested-range': words('data', 'Figures beyond tested rows', '<=', '1'),
 } as const satisfies Record<string, CriterionWords>;
 type OwnId = keyof typeof OWN;

@@ -1,5 +1,6 @@
 import { isHighSide } from '../stage/drive-source.ts';
 import type { StageModel } from '../stage/stage-model.ts';
+import { formatQuantity } from '../units/engineering-notation.ts';
 import type { Criterion, Finding } from './evaluation.ts';
 import { largestInrushA } from './load.ts';
 import type { CornerTraits } from './stage-judge.ts';
@@ -92,9 +93,59 @@ function onOffState(model: StageModel, criteria: readonly Criterion[]): Remark[]
       ),
     );
   }
+  if (model.inside !== null && input.shuntResistor !== null) {
+    remarks.push(
+      note(
+        'outer-resistor-not-counted',
+        'The resistor from the input of the pre-biased part to ground is not counted: R2 inside it is what holds the base off. Leave it out, or take a plain transistor with RB and RBE.',
+      ),
+    );
+  }
   const base = criteria.find(({ id }) => id === 'off-base-voltage');
   if (base?.status === 'fail' && railTooLow(model)) remarks.push(cannotTurnOff(model));
-  return remarks;
+  return [...remarks, ...onPullUp(model), ...onReset(model)];
+}
+
+/** A pull-up to a rail below a PNP's supply draws base current through RB while the output is off. */
+function onPullUp({ input, nominal }: StageModel): Remark[] {
+  const { drive, supplyV, baseResistor, shuntResistor, policy } = input;
+  if (!isHighSide(input) || drive.kind !== 'open-collector' || drive.railTracksSupply) return [];
+  const leftV = supplyV.max - drive.railV.min;
+  const seriesOhm = (baseResistor.valueOhm ?? Infinity) + drive.pullUp.valueOhm;
+  const shuntOhm = shuntResistor?.valueOhm ?? Infinity;
+  const share = shuntOhm === Infinity ? 1 : shuntOhm / (shuntOhm + seriesOhm);
+  if (leftV * share <= policy.offBaseV) return [];
+  const onV = Math.min(nominal.condition.vbeMaxV, leftV * share);
+  return [
+    note(
+      'pull-up-below-supply',
+      `The pull-up of the open output goes to a rail below the supply: while the output is off, up to ${formatQuantity((leftV - onV) / seriesOhm, 'A')} still flow out of the base and the PNP stays on. Take the pull-up to the load's own supply, or leave it out and let the base–emitter resistor hold the base.`,
+    ),
+  ];
+}
+
+/** What turns the load on while the controller is in reset, which no criterion of the base voltage shows. */
+function onReset({ input }: StageModel): Remark[] {
+  const { drive } = input;
+  if (drive.reset === null) return [];
+  const highSide = isHighSide(input);
+  if (highSide && drive.reset.kind === 'driven-low') {
+    return [
+      note(
+        'on-in-reset',
+        'In reset the output is low, which turns this PNP on: the load runs until the controller has started. Put an NPN in front, or take an output that starts up high.',
+      ),
+    ];
+  }
+  if (!highSide && drive.kind === 'open-collector' && drive.reset.kind !== 'driven-low') {
+    return [
+      note(
+        'on-in-reset',
+        'In reset the open output lets its own pull-up turn the transistor on: the load runs until the controller has started. Take an output that starts up low, or one that drives both ways.',
+      ),
+    ];
+  }
+  return [];
 }
 
 /** Whether a push-pull output below the supply is what keeps a PNP on. */
@@ -111,7 +162,7 @@ function cannotTurnOff({ input, nominal }: StageModel): Remark {
   const clampA = Math.max(0, throughV) / (baseResistor.valueOhm ?? Infinity);
   return note(
     'rail-below-supply',
-    `The output's high level stays below the supply, so the PNP does not turn off. Up to ${(clampA * 1e3).toPrecision(3)} mA flow through the output's clamp diode, and the load switches on while the rail is down. Put an NPN in front, or an open-drain output rated for the supply.`,
+    `The output's high level stays below the supply, so the PNP does not turn off. Up to ${formatQuantity(clampA, 'A')} flow through the output's clamp diode, and the load switches on while the rail is down. Put an NPN in front, or an open-drain output rated for the supply.`,
   );
 }
 

@@ -2,6 +2,7 @@ import { lampColdOhm } from '../physics/lamp.ts';
 import { resistorShare } from '../physics/thermal.ts';
 import type { LampLoad, LedStringLoad, LogicInputLoad } from '../stage/load.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
+import type { StageInput } from '../stage/stage-input.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
 import type { FigureSink } from './figure-sink.ts';
@@ -28,16 +29,10 @@ export class LoadChecks {
 
   /** The figures no corner moves. */
   begin(): void {
-    const { load, transistor } = this.model.input;
-    if (load.kind !== 'logic-input' || load.capacitanceF === null) return;
-    const loadF = load.capacitanceF + (load.wiringF ?? 0) + (transistor.capacitanceF ?? 0);
-    const largestOhm = load.pullUpOhm * (1 + load.tolerance);
-    this.worst.note(
-      RISE,
-      RISE_FACTOR * largestOhm * loadF,
-      load.riseTimeLimitSec ?? NaN,
-      NO_CORNER,
-    );
+    const { load } = this.model.input;
+    const constantSec = riseConstantSec(this.model.input);
+    if (load.kind !== 'logic-input' || constantSec === null) return;
+    this.worst.note(RISE, RISE_FACTOR * constantSec, load.riseTimeLimitSec ?? NaN, NO_CORNER);
   }
 
   visit(point: OperatingPoint, corner: number): void {
@@ -80,6 +75,13 @@ export class LoadChecks {
 
 /** 10 to 90 % of an exponential, in time constants. */
 const RISE_FACTOR = 2.2;
+
+/** Largest time constant at a logic input, s; null for other loads, or without a stated capacitance. */
+export function riseConstantSec({ load, transistor }: StageInput): number | null {
+  if (load.kind !== 'logic-input' || load.capacitanceF === null) return null;
+  const loadF = load.capacitanceF + (load.wiringF ?? 0) + (transistor.capacitanceF ?? 0);
+  return load.pullUpOhm * (1 + load.tolerance) * loadF;
+}
 
 /** Current of a cold filament, A. */
 function inrushCurrentA(load: LampLoad, supplyV: number, ambientDegC: number): number {

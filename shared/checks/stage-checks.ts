@@ -28,7 +28,7 @@ export class StageChecks {
     this.turnOff = new TurnOffChecks(model, sink);
     this.switching = new SwitchingChecks(model, sink);
     this.hasOwnLoadChecks = input.load.kind !== 'coil';
-    this.switches = input.frequencyHz > 0;
+    this.switches = input.frequencyHz > 0 || input.load.kind === 'logic-input';
   }
 
   /** Takes in the figures no operating point moves. */

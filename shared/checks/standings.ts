@@ -94,6 +94,7 @@ function standOnOtherLoads({ input, part }: StageModel, worst: WorstCases): void
     if (part.saturation === null) worst.stand('output-low', 'unknown');
     if (part.leakage === null) worst.stand('output-high', 'unknown');
     if (load.ratingW === null) worst.stand('rc-dissipation', 'at-best-open');
+    worst.stand('low-to-high-delay', 'stated');
     if (load.capacitanceF === null) {
       worst.stand('rise-time', load.riseTimeLimitSec === null ? 'stated' : 'unknown');
     }

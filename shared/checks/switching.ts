@@ -6,8 +6,10 @@ import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
 import type { FigureSink } from './figure-sink.ts';
+import { riseConstantSec } from './load.ts';
 
 const STORAGE = criterionNumber('storage-time');
+const DELAY = criterionNumber('low-to-high-delay');
 
 /** Judgement, not measurement: how storage time grows with the junction temperature, per K above 25 °C. */
 const STORAGE_TEMPCO_PER_K = 0.005;
@@ -15,13 +17,15 @@ const STORAGE_TEMPCO_PER_K = 0.005;
 /** Share of the shorter part of a period that storage and fall may take where no limit is set. */
 const PERIOD_SHARE = 0.1;
 
-/** Storage and fall time at a switching frequency; `visit` takes in one corner. */
+/** Storage and fall time at a switching frequency, and how late a logic input sees the end; `visit` takes in one corner. */
 export class SwitchingChecks {
   private readonly model: StageModel;
   private readonly worst: FigureSink;
   private readonly constantSec: number | null;
   private readonly fallSec: number;
   private readonly limitSec: number;
+  /** Largest time constant at a logic input, s; null for other loads, or without its capacitance. */
+  private readonly riseConstantSec: number | null;
 
   constructor(model: StageModel, worst: FigureSink) {
     this.model = model;
@@ -30,6 +34,7 @@ export class SwitchingChecks {
     this.limitSec = storageTimeLimitSec ?? (PERIOD_SHARE * Math.min(duty, 1 - duty)) / frequencyHz;
     this.fallSec = transistor.switching?.tfSec ?? NaN;
     this.constantSec = constantSec(model);
+    this.riseConstantSec = riseConstantSec(model.input);
   }
 
   /** Whether the part prints what storage time is computed from. */
@@ -38,13 +43,34 @@ export class SwitchingChecks {
   }
 
   visit(point: OperatingPoint, corner: number): void {
-    if (this.constantSec === null) return;
+    const storeSec = this.storeSec(point);
+    if (storeSec === null) return;
+    if (this.model.input.frequencyHz > 0) {
+      this.worst.note(STORAGE, storeSec + this.fallSec, this.limitSec, corner);
+    }
+    this.visitDelay(point, corner, storeSec);
+  }
+
+  /** ts + RC·C·ln[(V2 − VOL)/(V2 − VIH)] */
+  private visitDelay(point: OperatingPoint, corner: number, storeSec: number): void {
+    const { load, drive } = this.model.input;
+    if (load.kind !== 'logic-input' || this.riseConstantSec === null) return;
+    const { supplyV } = point.condition;
+    const lowV = point.vceV + drive.groundShiftV;
+    const reaches = supplyV > load.vihV;
+    const span = (supplyV - lowV) / (supplyV - load.vihV);
+    const riseSec = this.riseConstantSec * Math.log(Math.max(1, span));
+    this.worst.note(DELAY, reaches ? storeSec + riseSec : Infinity, NaN, corner);
+  }
+
+  /** Storage time of a corner, s; null where the part does not print what it is computed from. */
+  private storeSec(point: OperatingPoint): number | null {
+    if (this.constantSec === null) return null;
     const warm = point.tjDegC > SHEET_DEG_C;
     const gainMax = point.mostGainAt(point.icA);
     const offA = this.offCurrentA(point);
     const slower = warm ? 1 + STORAGE_TEMPCO_PER_K * (point.tjDegC - SHEET_DEG_C) : 1;
-    const storeSec = slower * storageTimeSec(this.constantSec, point.ibA, offA, point.icA, gainMax);
-    this.worst.note(STORAGE, storeSec + this.fallSec, this.limitSec, corner);
+    return slower * storageTimeSec(this.constantSec, point.ibA, offA, point.icA, gainMax);
   }
 
   /** Current that leaves the base at turn-off: through RB into the output, and through RBE. */

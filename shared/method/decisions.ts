@@ -164,7 +164,27 @@ export const DECISIONS: readonly MethodDecision[] = [
   {
     id: 'logic-input-capacitance',
     title: 'Capacitance of logic inputs',
-    text: 'The stated input capacitance is that of all inputs together; wiring and output capacitance add to it, and count as nothing where they are not stated. The low-to-high delay is not a criterion of its own.',
+    text: 'The stated input capacitance is that of all inputs together; wiring and output capacitance add to it, and count as nothing where they are not stated.',
+  },
+  {
+    id: 'low-to-high-delay',
+    title: 'Low-to-high delay of a translator',
+    text: 'It is computed at every corner from that corner’s storage time, low level and supply, with the largest RC and all capacitance, and reported as low-to-high-delay. A stage file has no limit for it, so it is stated and touches no verdict; without a printed storage time or a stated capacitance the figure is missing.',
+  },
+  {
+    id: 'input-levels-in-volts',
+    title: 'Input levels that are a fraction of the supply',
+    text: 'A stage file states VIL and VIH in volts. Where the input’s sheet prints a fraction, enter that fraction of the lowest supply: the high level is judged at the lowest supply, so the result is that of the fraction at the same corner, and the low level is judged on the safe side.',
+  },
+  {
+    id: 'pull-up-to-a-lower-rail',
+    title: 'Pull-up of an open output to a rail below a PNP’s supply',
+    text: 'The off-state base voltage counts leakage across RBE alone, as for a pull-up at the load’s own supply. A pull-up to a lower rail draws base current through RB for as long as the output is off. That is a finding, pull-up-below-supply, with the current; it changes no figure.',
+  },
+  {
+    id: 'reset-turns-on',
+    title: 'A reset that turns the load on',
+    text: 'The criteria of reset judge an NPN whose pin leaks or is pulled up. A PNP whose pin starts up low, and an NPN on an open output with a pull-up, are on until the controller has started: the finding on-in-reset says so.',
   },
   {
     id: 'darlington-leakage',

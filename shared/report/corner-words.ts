@@ -56,6 +56,7 @@ const NAMED: Partial<Record<CriterionId, readonly string[]>> = {
   'clamp-current': ['supply', 'ambient', 'load'],
   'clamp-power': ['supply', 'ambient', 'load'],
   'storage-time': ['drive', 'ambient', 'rb', 'instant'],
+  'low-to-high-delay': ['supply', 'ambient', 'drive', 'rb'],
 };
 
 /** Off-state criteria are judged on a junction that is still hot from being on. */

@@ -117,7 +117,7 @@ describe('off state of a high-side PNP', () => {
     expect(base?.status).toBe('fail');
     const finding = evaluation.findings.find(({ id }) => id === 'rail-below-supply');
     // (26.4 − 0.87 − 3 − 0.5)/6800
-    expect(finding?.text).toMatch(/3\.2\d mA/);
+    expect(finding?.text).toMatch(/3\.2\d\smA/);
     expect(finding?.text).toContain('while the rail is down');
   });
 

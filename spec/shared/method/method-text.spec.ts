@@ -9,10 +9,11 @@ describe('text of the method page', () => {
     expect(Object.keys(CRITERIA_TEXT).sort()).toEqual([...ownCriterionIds()].sort());
   });
 
-  it('asks a question of each criterion and answers where its limit comes from', () => {
-    for (const [id, { asks, limit }] of Object.entries(CRITERIA_TEXT)) {
+  it('asks a question of each criterion and answers where its limit comes from and what helps', () => {
+    for (const [id, { asks, limit, cure }] of Object.entries(CRITERIA_TEXT)) {
       expect(asks, id).toMatch(/^[A-Z].*\?$/);
       expect(limit, id).toMatch(/^[A-Z].*\.$/);
+      expect(cure, id).toMatch(/^[A-Z].*\.$/);
     }
   });
 
