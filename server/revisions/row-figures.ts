@@ -47,7 +47,8 @@ export function rowFigures(definition: StageInput, evaluation: Evaluation): RowF
     leastCriterion: least?.id ?? null,
     leastMargin: least?.margin ?? null,
     port: drive.port,
-    portCurrentA: value('drive-current'),
+    // The pin of a two-transistor high side drives the transistor in front.
+    portCurrentA: value('drive-current') ?? value('pre-drive-current'),
     portLimitA: drive.portTotalA === null ? null : drive.portTotalA * policy.driveDerating,
   };
 }
