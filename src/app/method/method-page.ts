@@ -13,9 +13,11 @@ import { CAUTIONS } from '../../../shared/method/cautions.ts';
 import { CRITERIA_TEXT } from '../../../shared/method/criteria-text.ts';
 import { DECISIONS } from '../../../shared/method/decisions.ts';
 import { GLOSSARY } from '../../../shared/method/glossary.ts';
+import { inSentence } from '../ui/criterion-in-sentence.ts';
 import { Icon } from '../ui/icon.ts';
 import { PageHeading } from '../ui/page-focus.ts';
 import { SymbolText } from '../ui/symbol-text.ts';
+import { FieldProblems } from './field-problems.ts';
 
 const GROUP_WORDS: Record<CriterionGroup, string> = {
   'on-state': 'On state',
@@ -28,7 +30,7 @@ const GROUP_WORDS: Record<CriterionGroup, string> = {
 /** What is judged and how, the words used, and the cautions. Each criterion has an anchor of its id. */
 @Component({
   selector: 'app-method-page',
-  imports: [Icon, PageHeading, SymbolText],
+  imports: [FieldProblems, Icon, PageHeading, SymbolText],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './method-page.html',
   styleUrl: './method-page.scss',
@@ -51,11 +53,13 @@ export class MethodPage {
         name: CRITERIA[id].name,
         relation: CRITERIA[id].relation === '>=' ? '≥ limit' : '≤ limit',
         ...CRITERIA_TEXT[id],
+        cure: `If missed: ${inSentence(CRITERIA_TEXT[id]?.cure ?? '')}`,
       })),
   }));
   protected readonly contents = [
     { id: 'cautions', text: 'Cautions' },
     { id: 'criteria', text: 'Criteria' },
+    { id: 'field-problems', text: 'Field problems' },
     { id: 'glossary', text: 'Glossary' },
     { id: 'decisions', text: 'Decisions' },
   ];

@@ -2,6 +2,7 @@ import type { CriterionStatus } from '../../../shared/checks/evaluation.ts';
 import { CRITERIA, type CriterionId } from '../../../shared/checks/criteria.ts';
 import type { Candidate, Sizing } from '../../../shared/sizing/sizing.ts';
 import { formatQuantity } from '../../../shared/units/engineering-notation.ts';
+import { criterionInSentence } from '../ui/criterion-in-sentence.ts';
 
 /** One rung: a preferred value with its smallest margin. */
 export interface Rung {
@@ -94,8 +95,4 @@ function groupsOf(rungs: readonly Rung[]): readonly RungGroup[] {
 }
 
 const endText = (end: string, criterion: string | null) =>
-  criterion === null ? '' : `${end}: ${lowered(criterionName(criterion))}`;
-
-/** Names of criteria begin with a capital, symbols keep theirs. */
-const lowered = (name: string) =>
-  /^[A-Z][a-z]/.test(name) ? name.charAt(0).toLowerCase() + name.slice(1) : name;
+  criterion === null ? '' : `${end}: ${criterionInSentence(criterion)}`;

@@ -7,6 +7,7 @@ import { VerdictMark } from '../ui/verdict-mark.ts';
 import { criterionName } from './ladder-model.ts';
 import {
   cornerText,
+  cureText,
   shortCornerText,
   figureText,
   limitText,
@@ -50,5 +51,6 @@ export class VerdictPanel {
   protected readonly limit = limitText;
   protected readonly margin = ({ margin }: Criterion) => marginText(margin);
   protected readonly corner = shortCornerText;
+  protected readonly cure = cureText;
   protected readonly wholeCorner = cornerText;
 }

@@ -3,8 +3,10 @@ import {
   CRITERIA,
   type CriterionGroup,
   type CriterionId,
+  PRE,
 } from '../../../shared/checks/criteria.ts';
 import type { Criterion, Evaluation } from '../../../shared/checks/evaluation.ts';
+import { CRITERIA_TEXT } from '../../../shared/method/criteria-text.ts';
 import { cornerWords } from '../../../shared/report/corner-words.ts';
 import {
   formatNumber,
@@ -133,6 +135,12 @@ export function verdictSentence(evaluation: Evaluation): string {
     case 'pass':
       return `Every criterion is met; least margin ${margin ?? '–'}, ${name}.`;
   }
+}
+
+/** What helps a criterion that fails; nothing to say of the others. */
+export function cureText({ id, status }: Criterion): string | null {
+  if (status !== 'fail') return null;
+  return CRITERIA_TEXT[id.startsWith(PRE) ? id.slice(PRE.length) : id]?.cure ?? null;
 }
 
 /** `11 more: 10 pass, 1 stated` */
