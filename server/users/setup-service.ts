@@ -53,7 +53,7 @@ export class SetupService {
     this.#requireCode(input.code);
     requireGoodPassword(input.password, [input.name, input.email, input.workspace], '/password');
     const passwordHash = await this.hashes.hash(input.password);
-    return this.database.transaction(async (manager) => {
+    const first = await this.database.transaction(async (manager) => {
       if (!(await isEmpty(manager))) throw done();
       await manager.save(manager.create(WorkspaceEntity, { id: 1, name: input.workspace }));
       const person = await manager.save(
@@ -74,9 +74,10 @@ export class SetupService {
           detail: { workspace: input.workspace, email: person.email },
         },
       );
-      this.#codeHash = null;
       return actor;
     });
+    this.#codeHash = null; // only now: a code whose set-up was not stored must work again
+    return first;
   }
 
   #requireCode(code: string): void {

@@ -78,9 +78,13 @@ const QUERIES: Record<string, string> = { 'GET /api/search': '?text=Q12' };
 /** @throws {Error} for a route with a body and no example of it */
 export function bodyFor(endpoint: Endpoint): unknown {
   if (endpoint.route.body === undefined) return undefined;
-  const make = BODIES[keyOf(endpoint)];
-  if (!make)
-    throw new Error(`no example body for ${keyOf(endpoint)}: add one to route-examples.ts`);
+  return bodyOf(keyOf(endpoint));
+}
+
+/** @throws {Error} where there is none */
+export function bodyOf(key: string): unknown {
+  const make = BODIES[key];
+  if (!make) throw new Error(`no example body for ${key}: add one to route-examples.ts`);
   return make();
 }
 
