@@ -3,7 +3,7 @@ import { setTimeout as pause } from 'node:timers/promises';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { repeats, seed } from '../long-run.ts';
 import { GENERAL, projectFields } from '../server/project-floor.ts';
-import { relayDriver } from '../server/relay-driver.ts';
+import { relayDriver } from '../shared/relay-stage.ts';
 import type { TestClient } from '../server/test-client.ts';
 import { openWriter } from '../../server/persistence/connection.ts';
 import { bundleServer, ServerProcess } from './server-process.ts';

@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { SHIPPED_LIMITS } from '../../server/http/limits.ts';
 import { done, type Hand, ProjectFloor } from '../server/project-floor.ts';
-import { relayDriver } from '../server/relay-driver.ts';
+import { relayDriver } from '../shared/relay-stage.ts';
 import type { Reply } from '../server/test-client.ts';
 import { PASSWORD, TestServer } from '../server/test-server.ts';
 

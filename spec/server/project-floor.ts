@@ -1,7 +1,7 @@
 import type { StageFile } from '../../shared/stage/stage-input.ts';
 import type { Reply, TestClient } from './test-client.ts';
 import { PASSWORD, type TestPerson, type TestServer } from './test-server.ts';
-import { relayDriver } from './relay-driver.ts';
+import { relayDriver } from '../shared/relay-stage.ts';
 
 export const GENERAL = '5d1f0c52-7a0e-4c43-9d0b-3f1f4b6c9a01';
 export const HIGH = '5d1f0c52-7a0e-4c43-9d0b-3f1f4b6c9a02';

@@ -118,3 +118,18 @@ export function relayStage(changes: Part = {}): StageInput {
 export function highSideStage(changes: Part = {}): StageInput {
   return StageInput.parse({ ...HIGH_SIDE_FILE, ...changes });
 }
+
+/**
+ * The relay stage with the 620 Ω that leave its coil voltage marginal and everything else passing: what is drawn, saved,
+ * reviewed and bought in the suites.
+ */
+export function relayDriver(changes: Partial<StageFile> = {}): StageFile {
+  return {
+    ...RELAY_FILE,
+    title: 'Brine agitator contactor pilot relay',
+    load: { ...RELAY_FILE.load, maximumV: 31 },
+    baseResistor: { ...RELAY_FILE.baseResistor, valueOhm: 620 },
+    clamp: { kind: 'diode', forwardV: 1, currentRatingA: 0.2 },
+    ...changes,
+  };
+}

@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { bodyOf } from '../http/route-examples.ts';
 import { done, type Hand, projectFields, type ProjectFloor } from '../project-floor.ts';
-import { relayDriver } from '../relay-driver.ts';
+import { relayDriver } from '../../shared/relay-stage.ts';
 import type { Reply, TestClient } from '../test-client.ts';
 import { PASSWORD } from '../test-server.ts';
 

@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import type { Endpoint } from '../../../server/http/endpoint.ts';
 import { done, projectFields, type ProjectFloor } from '../project-floor.ts';
-import { relayDriver } from '../relay-driver.ts';
+import { relayDriver } from '../../shared/relay-stage.ts';
 import type { Reply } from '../test-client.ts';
 import { PASSWORD } from '../test-server.ts';
 

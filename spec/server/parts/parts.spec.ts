@@ -7,7 +7,7 @@ import { Revision } from '../../../shared/contract/revision.ts';
 import { deriveTransistor } from '../../../shared/parts/derive-transistor.ts';
 import type { TransistorData } from '../../../shared/stage/transistor-data.ts';
 import { done, ProjectFloor } from '../project-floor.ts';
-import { relayDriver } from '../relay-driver.ts';
+import { relayDriver } from '../../shared/relay-stage.ts';
 import type { Reply } from '../test-client.ts';
 import { TestServer } from '../test-server.ts';
 

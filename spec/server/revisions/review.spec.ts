@@ -2,7 +2,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { SHIPPED_LIMITS } from '../../../server/http/limits.ts';
 import { Revision } from '../../../shared/contract/revision.ts';
 import { done, type Hand, ProjectFloor } from '../project-floor.ts';
-import { relayDriver } from '../relay-driver.ts';
+import { relayDriver } from '../../shared/relay-stage.ts';
 import type { Reply } from '../test-client.ts';
 import { TestServer } from '../test-server.ts';
 

@@ -6,7 +6,7 @@ import { loadLibrary } from '../../../server/seed/load-library.ts';
 import { listParts, Part } from '../../../shared/contract/part.ts';
 import { Revision } from '../../../shared/contract/revision.ts';
 import { ProjectFloor, projectFields } from '../project-floor.ts';
-import { relayDriver } from '../relay-driver.ts';
+import { relayDriver } from '../../shared/relay-stage.ts';
 import type { Reply } from '../test-client.ts';
 import { TestServer } from '../test-server.ts';
 

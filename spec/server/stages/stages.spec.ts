@@ -4,7 +4,7 @@ import { Problem } from '../../../shared/contract/problem.ts';
 import { Revision } from '../../../shared/contract/revision.ts';
 import { createStage, listStages, readStage } from '../../../shared/contract/stage.ts';
 import { done, ProjectFloor } from '../project-floor.ts';
-import { relayDriver } from '../relay-driver.ts';
+import { relayDriver } from '../../shared/relay-stage.ts';
 import { TestServer } from '../test-server.ts';
 
 let server: TestServer;

@@ -3,50 +3,22 @@ import type { Criterion, Evaluation } from '../../../shared/checks/evaluation.ts
 import { definitionLeaves } from '../../../shared/report/definition-leaves.ts';
 import { revisionDiff, type ComparedRevision } from '../../../shared/report/revision-diff.ts';
 import { StageInput, type StageFile } from '../../../shared/stage/stage-input.ts';
+import { relayDriver, TYPE_2N3904 } from '../relay-stage.ts';
 
-// An invented stage; its figures are made up and no test vectors.
-const FILE: StageFile = {
-  format: 'sinkwell-stage/1',
+const FILE = relayDriver({
   reference: 'Q7',
   title: 'Louvre motor pilot relay',
-  topology: 'low-side-npn',
-  supplyV: { min: 21.6, max: 26.4 },
   ambientDegC: { min: -20, max: 50 },
-  drive: {
-    kind: 'push-pull',
-    railV: { min: 3, max: 3.6 },
-    high: { dropV: 0.6, currentA: 0.008 },
-    low: { levelV: 0.4, currentA: 0.008 },
-    sourceLimitA: 0.02,
-    sinkLimitA: 0.02,
-  },
-  load: {
-    kind: 'coil',
-    resistanceOhm: 1440,
-    tolerance: 0.1,
-    referenceDegC: 20,
-    inductanceH: 4,
-    operateV: 16.8,
-    releaseV: 2.4,
-    maximumV: 31,
-  },
   baseResistor: { valueOhm: 680, tolerance: 0.05, ratingW: 0.1 },
   shuntResistor: { valueOhm: 22000, tolerance: 0.05 },
   clamp: { kind: 'diode', forwardV: 1 },
   transistor: {
-    partNumber: '2N3904',
-    polarity: 'npn',
-    limits: { vceoV: 40, icA: 0.2, powerW: 0.625, tjMaxDegC: 150 },
-    thermal: { rthJaKPerW: 200 },
-    gain: [
-      { icA: 0.001, vceV: 1, min: 70 },
-      { icA: 0.01, vceV: 1, min: 100, max: 300 },
-    ],
-    saturation: [{ icA: 0.01, ibA: 0.001, maxV: 0.2 }],
-    baseEmitter: [{ icA: 0.01, ibA: 0.001, minV: 0.65, maxV: 0.85 }],
+    ...TYPE_2N3904,
+    gain: TYPE_2N3904.gain.slice(1, 3),
+    saturation: TYPE_2N3904.saturation.slice(0, 1),
+    baseEmitter: TYPE_2N3904.baseEmitter.slice(0, 1),
   },
-  policy: { name: 'General practice' },
-};
+});
 
 const criterion = (id: string, changes: Partial<Criterion>): Criterion => ({
   id,
