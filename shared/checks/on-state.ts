@@ -99,8 +99,10 @@ export class OnStateChecks {
     const pullUpOhm = (drive.pullUp?.valueOhm ?? NaN) * (1 - (drive.pullUp?.tolerance ?? 0));
     const driveA = this.pullUpFeedsBase ? railV / pullUpOhm : point.driveA;
     worst.note(DRIVE, driveA, this.driveLimitA, corner);
-    const rbW = point.driveA * point.driveA * point.outerRbOhm;
-    worst.note(RB_POWER, rbW, this.rbLimitW * share, corner);
+    if (point.outerRbOhm > 0) {
+      const rbW = point.driveA * point.driveA * point.outerRbOhm;
+      worst.note(RB_POWER, rbW, this.rbLimitW * share, corner);
+    }
     if (shuntResistor !== null && this.model.inside === null) {
       const powerW = (point.vbeV * point.vbeV) / point.rbeOhm;
       worst.note(RBE_POWER, powerW, this.rbeLimitW * share, corner);

@@ -46,7 +46,9 @@ function standOnRatings(input: StageInput, worst: WorstCases): void {
     if (input.supplyV.surge !== null) worst.stand('surge-voltage', 'at-best-open');
   }
   if (limits.powerW === null) worst.stand('dissipation', 'at-best-open');
-  if (baseResistor.ratingW === null) worst.stand('rb-dissipation', 'at-best-open');
+  if (baseResistor.ratingW === null && worst.takesPart('rb-dissipation')) {
+    worst.stand('rb-dissipation', 'at-best-open');
+  }
   if (shuntResistor?.ratingW === null && worst.takesPart('rbe-dissipation')) {
     worst.stand('rbe-dissipation', 'at-best-open');
   }

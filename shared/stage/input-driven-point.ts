@@ -53,7 +53,12 @@ export class InputDrivenPoint extends OperatingPoint {
     const byR1V = (openV * leastR1Ohm + INSIDE_VBE_V * ohm) / (leastR1Ohm + ohm);
     const byTestV = openV / (1 + ohm * this.testedAPerV);
     this.vbeV = Math.max(0, Math.min(openV, byR1V, byTestV));
-    this.driveA = Math.max(0, (openV - this.vbeV) / ohm);
+    // Through the part, not through what stands before it: that may be nothing.
+    this.driveA = Math.max(
+      0,
+      (this.vbeV - INSIDE_VBE_V) / leastR1Ohm,
+      this.vbeV * this.testedAPerV,
+    );
   }
 }
 

@@ -24,6 +24,7 @@ export const signedVoltage = between(-100, 100, 'a voltage', ' V');
 export const current = above(0, 1000, 'a current', ' A');
 export const currentOrZero = between(0, 1000, 'a current', ' A');
 export const resistance = above(0, 1e12, 'a resistance', ' Ω');
+export const resistanceOrZero = between(0, 1e12, 'a resistance', ' Ω');
 export const power = above(0, 1e5, 'a power', ' W');
 export const celsius = between(-200, 500, 'a temperature', ' °C');
 export const kelvin = between(0, 500, 'a temperature rise', ' K');

@@ -12,7 +12,7 @@ import {
   line,
   optional,
   power,
-  resistance,
+  resistanceOrZero,
   span,
   time,
   tolerance,
@@ -32,9 +32,9 @@ export const TOPOLOGIES = [
 ] as const;
 export type Topology = (typeof TOPOLOGIES)[number];
 
-/** The base resistor; `valueOhm: null` asks for the recommended value. */
+/** The base resistor; `valueOhm: null` asks for the recommended value, 0 is a wire to a pre-biased part. */
 const BaseResistor = z.strictObject({
-  valueOhm: resistance.nullable(),
+  valueOhm: resistanceOrZero.nullable(),
   tolerance,
   ratingW: optional(power),
 });
@@ -89,6 +89,12 @@ export const StageInput = z
     };
     if (stage.topology === 'two-transistor-high-side' && stage.preDriver === null) {
       expect(['preDriver'], 'expected the NPN in front: a two-transistor high side needs it');
+    }
+    if (stage.baseResistor.valueOhm === 0 && stage.topology !== 'low-side-pre-biased') {
+      expect(
+        ['baseResistor', 'valueOhm'],
+        'expected a resistance above 0 and up to 1000000000000 Ω: only a pre-biased part does without',
+      );
     }
     if (stage.topology === 'level-translator' && stage.load.kind !== 'logic-input') {
       expect(['load', 'kind'], 'expected "logic-input": a level translator drives logic inputs');

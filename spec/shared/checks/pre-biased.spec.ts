@@ -53,6 +53,20 @@ describe('pre-biased part with a printed VI(on)', () => {
     expect(criterion('input-on')?.relation).toBe('>=');
   });
 
+  it('does without a resistor before it, and then judges none', () => {
+    const bare = judged({ baseResistor: { valueOhm: 0, tolerance: 0 } });
+    const small = judged();
+    expect(bare.criterion('rb-dissipation')).toBeUndefined();
+    for (const id of ['input-on', 'input-voltage', 'drive-current', 'dissipation']) {
+      const [without, withTen] = [bare.criterion(id)?.value ?? NaN, small.criterion(id)?.value];
+      expect(Math.abs(without / (withTen ?? NaN) - 1), id).toBeLessThan(0.01);
+    }
+    expect(bare.criterion('input-voltage')?.value).toBe(3.6);
+    expect(() => relayStage({ baseResistor: { valueOhm: 0, tolerance: 0 } })).toThrow(
+      /only a pre-biased part/,
+    );
+  });
+
   it('adds R1 and R2/R1 to the corners', () => {
     expect(judged().evaluation.corners).toBe(512 * 4);
     expect(judged().criterion('input-on')?.corner).toMatchObject({ r1: '-', ratio: '-' });
