@@ -22,6 +22,7 @@ const NONE: Designators = {
   clamp: null,
   clampZener: null,
   drive: null,
+  loadResistor: null,
   preDriver: null,
   preBaseResistor: null,
   preShuntResistor: null,
@@ -56,10 +57,11 @@ export function allocateDesignators(
 function lettersOf(stage: StageInput): Partial<Record<keyof Designators, string>> {
   const { clamp, drive, load, preDriver } = stage;
   const has: [keyof Designators, string, boolean][] = [
-    ['baseResistor', 'R', true],
+    ['baseResistor', 'R', stage.baseResistor.valueOhm !== 0],
     ['shuntResistor', 'R', stage.shuntResistor !== null],
     ['pullUp', 'R', drive.pullUp !== null],
     ['speedUpCapacitor', 'C', stage.speedUpCapacitorF !== null],
+    ['loadResistor', 'R', load.kind === 'led-string'],
     ['load', LOAD_LETTERS[load.kind], true],
     ['clamp', 'D', clamp.kind !== 'none'],
     ['clampZener', 'D', clamp.kind === 'diode-zener'],

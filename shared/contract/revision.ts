@@ -30,6 +30,7 @@ export const Designators = z.strictObject({
   clamp: Designator,
   clampZener: Designator,
   drive: Designator,
+  loadResistor: Designator,
   preDriver: Designator,
   preBaseResistor: Designator,
   preShuntResistor: Designator,

@@ -7,6 +7,7 @@ export type PartPlace =
   | 'pullUp'
   | 'speedUpCapacitor'
   | 'load'
+  | 'loadResistor'
   | 'clamp'
   | 'clampZener'
   | 'preDriver'

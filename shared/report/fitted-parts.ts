@@ -70,13 +70,19 @@ function resistors(source: NoteSource): FittedPart[] {
   const valueOhm = baseResistor.valueOhm ?? source.evaluation.baseResistorOhm;
   const collector: Resistor | null =
     load.kind === 'logic-input' ? { ...load, valueOhm: load.pullUpOhm } : null;
+  const series: Resistor | null =
+    load.kind === 'led-string'
+      ? { valueOhm: load.resistanceOhm, tolerance: load.tolerance, ratingW: null }
+      : null;
   const places: readonly [PartPlace, string, Resistor | null | undefined][] = [
-    ['baseResistor', 'RB', { ...baseResistor, valueOhm }],
+    // 0 is a wire: a pre-biased part does without.
+    ['baseResistor', 'RB', valueOhm === 0 ? null : { ...baseResistor, valueOhm }],
     ['shuntResistor', 'RBE', shuntResistor],
     ['pullUp', 'pull-up', drive.pullUp],
     ['preBaseResistor', 'RB of the pre-driver', preDriver?.baseResistor],
     ['preShuntResistor', 'RBE of the pre-driver', preDriver?.shuntResistor],
     ['load', 'collector resistor', collector],
+    ['loadResistor', 'series resistor of the LEDs', series],
   ];
   return places.flatMap(([key, place, resistor]) =>
     resistor
@@ -144,9 +150,8 @@ function loadPurchase(load: Load): Purchase | null {
       });
     case 'led-string':
       return purchase({
-        description: `LED string of ${load.count}, with resistor`,
-        value: single(load.resistanceOhm, 'Ohm'),
-        tolerance: load.tolerance,
+        description: load.count === 1 ? 'LED' : `LED, string of ${load.count}`,
+        value: { ...load.forwardV, unit: 'V' },
         ratings: ratings([load.maximumA, 'A']),
       });
     case 'lamp':

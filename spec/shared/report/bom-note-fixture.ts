@@ -1,6 +1,7 @@
 import type { NoteSource, PartPlace } from '../../../shared/report/bom-note-source.ts';
 import type { NoteOccasion, NoteProject } from '../../../shared/report/bom-note-build.ts';
 import { type StageFile, StageInput } from '../../../shared/stage/stage-input.ts';
+import { RELAY_FILE, relayDriver, TYPE_2N3904 } from '../relay-stage.ts';
 
 /** An invented project; the stages' figures are made up and no test vectors. */
 export const PROJECT: NoteProject = {
@@ -20,50 +21,12 @@ export const ISSUE: NoteOccasion = {
 };
 export const PREVIEW: NoteOccasion = { ...ISSUE, issue: null };
 
-const TRANSISTOR: StageFile['transistor'] = {
-  partNumber: '2N3904',
-  polarity: 'npn',
-  package: 'TO-92',
-  limits: { vceoV: 40, icA: 0.2, powerW: 0.625, tjMaxDegC: 150 },
-  thermal: { rthJaKPerW: 200 },
-  gain: [],
-  saturation: [],
-  baseEmitter: [],
-};
-
-const BASE: StageFile = {
-  format: 'sinkwell-stage/1',
-  reference: 'Q1',
+const BASE = relayDriver({
   title: 'Vent motor contactor pilot relay',
-  topology: 'low-side-npn',
-  supplyV: { min: 21.6, max: 26.4 },
-  ambientDegC: { min: -20, max: 60 },
-  drive: {
-    kind: 'push-pull',
-    railV: { min: 3, max: 3.6 },
-    high: { dropV: 0.6, currentA: 0.008 },
-    low: { levelV: 0.4, currentA: 0.008 },
-    sourceLimitA: 0.02,
-    sinkLimitA: 0.02,
-  },
-  load: {
-    kind: 'coil',
-    resistanceOhm: 1440,
-    tolerance: 0.1,
-    referenceDegC: 20,
-    inductanceH: 4,
-    operateV: 16.8,
-    releaseV: 2.4,
-    maximumV: 31,
-  },
-  baseResistor: { valueOhm: 620, tolerance: 0.05, ratingW: 0.1 },
-  shuntResistor: { valueOhm: 22000, tolerance: 0.05, ratingW: 0.1 },
-  clamp: { kind: 'diode', forwardV: 1, reverseV: 75, currentRatingA: 0.2 },
-  transistor: TRANSISTOR,
-  policy: { name: 'General practice' },
-};
+  clamp: RELAY_FILE.clamp,
+});
 
-export const PNP = { ...TRANSISTOR, partNumber: '2N3906', polarity: 'pnp' } as const;
+export const PNP = { ...TYPE_2N3904, partNumber: '2N3906', polarity: 'pnp' } as const;
 
 const UNNAMED: Record<PartPlace, string | null> = {
   baseResistor: null,
@@ -71,6 +34,7 @@ const UNNAMED: Record<PartPlace, string | null> = {
   pullUp: null,
   speedUpCapacitor: null,
   load: null,
+  loadResistor: null,
   clamp: null,
   clampZener: null,
   preDriver: null,

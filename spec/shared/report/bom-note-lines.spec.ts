@@ -141,6 +141,34 @@ describe('merged lines', () => {
     ]);
   });
 
+  it('lists the series resistor of LEDs, and no base resistor where a wire stands for it', () => {
+    const stage = source(
+      {
+        reference: 'Q9',
+        topology: 'low-side-pre-biased',
+        load: {
+          kind: 'led-string',
+          count: 2,
+          forwardV: { min: 1.8, max: 2.2 },
+          resistanceOhm: 680,
+          tolerance: 0.05,
+          maximumA: 0.03,
+          minimumA: null,
+        },
+        transistor: { ...PNP, polarity: 'npn', internal: { r1Ohm: 10_000, r2Ohm: 10_000 } },
+        baseResistor: { valueOhm: 0, tolerance: 0 },
+        shuntResistor: null,
+        clamp: null,
+      },
+      { load: 'D4', loadResistor: 'R12' },
+    );
+    expect(rows(stage).map((row) => row.split(' | ').slice(0, 4).join(' | '))).toEqual([
+      '1 | Q9 | Transistor, NPN pre-biased | 40 V',
+      '1 | R12 | Resistor | 680 Ω',
+      '1 | D4 | LED, string of 2 | 1.8…2.2 V',
+    ]);
+  });
+
   it.each<[StageFile['load'], string]>([
     [
       {
@@ -152,7 +180,7 @@ describe('merged lines', () => {
         maximumA: 0.03,
         minimumA: null,
       },
-      '1 | H1 | LED string of 5, with resistor | 680 Ω | ±5 %, 0.03 A | RL-24-1440',
+      '1 | H1 | LED, string of 5 | 1.8…2.2 V | 0.03 A | RL-24-1440',
     ],
     [
       { kind: 'lamp', nominalV: 24, currentA: 0.08, coldRatio: 10 },

@@ -111,6 +111,7 @@ export const IN_CHECK: Revision = {
     clamp: null,
     clampZener: null,
     drive: null,
+    loadResistor: null,
     preDriver: null,
     preBaseResistor: null,
     preShuntResistor: null,

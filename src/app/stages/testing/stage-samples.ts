@@ -12,6 +12,7 @@ export const NO_DESIGNATORS: Designators = {
   clamp: null,
   clampZener: null,
   drive: null,
+  loadResistor: null,
   preDriver: null,
   preBaseResistor: null,
   preShuntResistor: null,
