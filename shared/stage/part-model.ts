@@ -11,6 +11,7 @@ import { saturationLine, type SaturationLine } from '../physics/saturation.ts';
 import { thermalResistanceInUse } from '../physics/thermal.ts';
 import { insideGain, type InsideModel } from './internal-resistors.ts';
 import type { Policy } from './policy.ts';
+import type { StageInput } from './stage-input.ts';
 import type { TransistorData } from './transistor-data.ts';
 
 /** A transistor's rows made into the tables and lines the calculation reads; null where rows are missing. */
@@ -43,6 +44,10 @@ export interface Specimen {
   readonly vbe: number;
   readonly vceSat: number;
 }
+
+/** Whether a stage's transistor is two in one: by its data, or because the topology asks for it. */
+export const isDarlington = ({ topology, transistor }: StageInput): boolean =>
+  transistor.darlington || topology === 'low-side-darlington';
 
 /** The part as the policy's temperature laws and substitutes read it. */
 export function partModel(

@@ -6,7 +6,7 @@ import { collectorPath, loadDegC, type LoadEnds } from './collector-path.ts';
 import { cornerSpace, type CornerSpace, type CornerVariable } from './corners.ts';
 import { type DriveSource, driveSource } from './drive-source.ts';
 import { insideModel, type InsideModel } from './internal-resistors.ts';
-import { partModel, type PartModel, type Specimen } from './part-model.ts';
+import { isDarlington, partModel, type PartModel, type Specimen } from './part-model.ts';
 import type { StageInput } from './stage-input.ts';
 import type { Writable } from './writable.ts';
 
@@ -73,13 +73,7 @@ export function stageModel(
 ): StageModel {
   const { shuntResistor, supplyV, ambientDegC, policy, drive } = input;
   const inside = insideModel(input);
-  const part = partModel(
-    input.transistor,
-    policy,
-    input.transistor.darlington || input.topology === 'low-side-darlington',
-    inside,
-    specimen !== null,
-  );
+  const part = partModel(input.transistor, policy, isDarlington(input), inside, specimen !== null);
   const condition = (supply: number, ends: LoadEnds, seriesV: number) =>
     loadCondition(input, part, specimen, supply, ends, seriesV);
   const supplies = [supplyV.min, supplyV.max] as const;

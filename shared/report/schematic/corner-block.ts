@@ -3,7 +3,12 @@ import type { StageInput } from '../../stage/stage-input.ts';
 import { plainText } from './drawing.ts';
 import type { DrawingBuilder } from './drawing-builder.ts';
 import { designatorRuns } from './part-words.ts';
-import type { SchematicSubject } from './schematic-subject.ts';
+import {
+  FRONT_PARTS,
+  isOfFront,
+  type SchematicSubject,
+  type SwitchParts,
+} from './schematic-subject.ts';
 
 const MINUS = '\u2212';
 const END = { '+': '+', '-': MINUS } as const;
@@ -21,7 +26,7 @@ export function drawCornerBlock(drawing: DrawingBuilder, subject: SchematicSubje
 }
 
 function cornerRows(subject: SchematicSubject): readonly (readonly [string, string])[] {
-  const { figures, stage } = subject;
+  const { figures } = subject;
   if (figures === null) return [];
   const { corner } = figures;
   const rows: [string, string | null][] = [
@@ -29,18 +34,31 @@ function cornerRows(subject: SchematicSubject): readonly (readonly [string, stri
     ['ambient', formatQuantity(figures.ambientDegC, '°C')],
     ['pin', corner['drive'] ?? null],
     ['resistors', resistorEnds(subject)],
-    [stage.load.kind === 'coil' ? 'coil' : 'load', end(corner['load'], toleranceOf(stage))],
+    loadRow(subject, corner['load']),
     ['gain', corner['gain'] ?? null],
   ];
   return rows.flatMap(([label, value]) => (value === null ? [] : [[label, value] as const]));
 }
 
+/** The load's end; that of the base resistor where the transistor in front has it as its load. */
+function loadRow(subject: SchematicSubject, sign: string | undefined): [string, string | null] {
+  const { figures, stage } = subject;
+  if (figures !== null && isOfFront(figures)) {
+    return ['load', end1(plainText(designatorRuns(subject, 'baseResistor')), sign)];
+  }
+  return [stage.load.kind === 'coil' ? 'coil' : 'load', end(sign, toleranceOf(stage))];
+}
+
 function resistorEnds(subject: SchematicSubject): string | null {
-  const corner = subject.figures?.corner ?? {};
-  const name = (part: 'baseResistor' | 'shuntResistor') => plainText(designatorRuns(subject, part));
+  const { figures } = subject;
+  const corner = figures?.corner ?? {};
+  const { baseResistor, shuntResistor } =
+    figures !== null && isOfFront(figures) ? FRONT_PARTS : subject.parts;
+  const name = (part: SwitchParts['baseResistor' | 'shuntResistor']) =>
+    plainText(designatorRuns(subject, part));
   const ends = [
-    end1(name('baseResistor'), corner['rb']),
-    end1(name('shuntResistor'), corner['rbe']),
+    end1(name(baseResistor), corner['rb']),
+    end1(name(shuntResistor), corner['rbe']),
   ].filter((text) => text !== null);
   return ends.length === 0 ? null : ends.join(', ');
 }

@@ -28,7 +28,12 @@ export const PART_KEYS = [
   'shuntResistor',
   'transistor',
   'load',
+  'loadResistor',
+  'logicInput',
   'clamp',
+  'preDriver',
+  'preBaseResistor',
+  'preShuntResistor',
 ] as const;
 export type PartKey = (typeof PART_KEYS)[number];
 

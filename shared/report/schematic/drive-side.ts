@@ -2,13 +2,13 @@ import { formatQuantity } from '../../units/engineering-notation.ts';
 import { plainText } from './drawing.ts';
 import type { DrawingBuilder } from './drawing-builder.ts';
 import { designatorRuns, resistorText, symbolRuns, voltText } from './part-words.ts';
-import type { SchematicSubject } from './schematic-subject.ts';
+import { ownFigures, type SchematicSubject } from './schematic-subject.ts';
 
 /** How far the circuit moves down to make room for what stands above the drive. */
 export function driveHeadroom({ stage, frame }: SchematicSubject): number {
   if (!pullUpDrawn(stage)) return 0;
   const capacitor = stage.speedUpCapacitorF === null ? 0 : 32;
-  return capacitor + (frame.compact ? 32 : 72);
+  return capacitor + (frame.compact ? 48 : 88);
 }
 
 const pullUpDrawn = (stage: SchematicSubject['stage']) =>
@@ -24,7 +24,7 @@ export function drawDrive(
   baseY: number,
   railY: number,
 ): void {
-  const { stage, frame, figures } = subject;
+  const { stage, frame } = subject;
   const { driveX } = frame;
   drawing.symbol(stage.drive.kind, { x: driveX, y: baseY }, 'drive');
   drawing.wire(driveX, baseY + 32, driveX, railY, frame.columnX, railY);
@@ -40,7 +40,7 @@ export function drawDrive(
     kind.forEach((text, row) => {
       drawing.text(driveX + 16, baseY + 66 + 16 * row, 'value', [{ text }], { part: 'drive' });
     });
-    if (figures !== null) drawOutputFigures(drawing, subject, baseY);
+    drawOutputFigures(drawing, subject, baseY);
   }
   drawing.name('drive', `${plainText(designator)}, ${kind.join(' ')} output`);
 }
@@ -48,7 +48,11 @@ export function drawDrive(
 function drawRail(drawing: DrawingBuilder, subject: SchematicSubject, x: number, y: number): void {
   drawing.symbol('supply', { x, y }, null);
   const text = railText(subject);
-  drawing.text(x + 20, y - 7, 'voltage', [{ text }], {
+  const runs =
+    subject.stage.topology === 'level-translator'
+      ? [...symbolRuns('V', '1'), { text: ` ${text}` }]
+      : [{ text }];
+  drawing.text(x + 20, y - 7, 'voltage', runs, {
     figure: { ref: 'rail', name: 'Logic rail' },
   });
 }
@@ -68,7 +72,7 @@ function drawPullUp(drawing: DrawingBuilder, subject: SchematicSubject, baseY: n
   const { stage, frame } = subject;
   const { pullUpX, driveX } = frame;
   const lift = stage.speedUpCapacitorF === null ? 0 : 32;
-  const top = baseY - 80 - lift;
+  const top = baseY - 96 - lift;
   drawRail(drawing, subject, pullUpX, top - 16);
   drawing.dot(pullUpX, top - 8);
   drawing.wire(pullUpX, top - 16, pullUpX, top);
@@ -92,20 +96,19 @@ function drawOutputFigures(
   subject: SchematicSubject,
   baseY: number,
 ): void {
-  const { frame, figures, stage } = subject;
+  const { frame, parts, stage } = subject;
+  const figures = ownFigures(subject);
   if (figures === null) return;
-  const middle = frame.driveX + 60;
+  const middle = frame.outputX;
   const fromPullUp = pullUpDrawn(stage);
-  drawing.text(
-    fromPullUp ? frame.pullUpX + 8 : middle,
-    baseY - 9,
-    'voltage',
-    [{ text: voltText(figures.outputV) }],
-    {
+  // In front of another transistor the pull-up leaves no room for the voltage beside it.
+  if (!fromPullUp || parts.transistor === 'transistor') {
+    const x = fromPullUp ? frame.pullUpX + 8 : middle;
+    drawing.text(x, baseY - 9, 'voltage', [{ text: voltText(figures.outputV) }], {
       anchor: fromPullUp ? 'start' : 'middle',
       figure: { ref: 'vo', name: 'Output voltage' },
-    },
-  );
+    });
+  }
   const into = stage.topology === 'high-side-pnp' ? 'left' : 'right';
   drawing.arrow(fromPullUp ? middle + 8 : middle, baseY, into);
   drawing.text(

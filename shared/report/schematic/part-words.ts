@@ -17,7 +17,20 @@ const FALLBACK: Readonly<Record<keyof SchematicDesignators, readonly Run[]>> = {
   clamp: [{ text: 'D' }],
   clampZener: [{ text: 'DZ' }],
   drive: [{ text: 'U' }],
+  loadResistor: symbolRuns('R', 'L'),
+  preDriver: symbolRuns('Q', '1'),
+  preBaseResistor: symbolRuns('R', 'B1'),
+  preShuntResistor: symbolRuns('R', 'BE1'),
 };
+
+/** Symbols of loads whose letter is not that of a resistor. */
+const LOAD_SYMBOLS = {
+  coil: [{ text: 'K' }],
+  resistor: FALLBACK.load,
+  'led-string': [{ text: 'D' }],
+  lamp: [{ text: 'DS' }],
+  'logic-input': symbolRuns('R', 'C'),
+} as const;
 
 /** The designator of the board's drawing, else the symbol of the trade. */
 export function designatorRuns(
@@ -26,8 +39,12 @@ export function designatorRuns(
 ): readonly Run[] {
   const given = subject.designators[part];
   if (given !== null && given !== '') return [{ text: given }];
-  return part === 'load' && subject.stage.load.kind === 'coil' ? [{ text: 'K' }] : FALLBACK[part];
+  return part === 'load' ? LOAD_SYMBOLS[subject.stage.load.kind] : FALLBACK[part];
 }
+
+/** `2 inputs` */
+export const inputsText = (count: number): string =>
+  count === 1 ? 'logic input' : `${count} inputs`;
 
 /** `620 Ω ±5 %` */
 export function resistorText(valueOhm: number | null, tolerance: number): string {
@@ -48,7 +65,7 @@ export function loadLines({ stage }: SchematicSubject): readonly string[] {
     case 'resistor':
       return [resistorText(load.resistanceOhm, load.tolerance)];
     case 'led-string':
-      return [`${load.count} LEDs`, resistorText(load.resistanceOhm, load.tolerance)];
+      return [load.count === 1 ? '1 LED' : `${load.count} LEDs`];
     case 'lamp':
       return [formatQuantity(load.nominalV, 'V'), formatQuantity(load.currentA, 'A')];
     case 'logic-input':

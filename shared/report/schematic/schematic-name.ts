@@ -1,8 +1,13 @@
-import type { Topology } from '../../stage/stage-input.ts';
+import type { StageInput, Topology } from '../../stage/stage-input.ts';
 import { formatQuantity } from '../../units/engineering-notation.ts';
 import { plainText } from './drawing.ts';
-import { designatorRuns, loadLines, resistorText } from './part-words.ts';
-import type { SchematicSubject } from './schematic-subject.ts';
+import { designatorRuns, inputsText, loadLines, resistorText } from './part-words.ts';
+import {
+  FRONT_PARTS,
+  OUTPUT_PARTS,
+  type SchematicSubject,
+  type SwitchParts,
+} from './schematic-subject.ts';
 
 const TOPOLOGY_NAMES: Readonly<Record<Topology, string>> = {
   'low-side-npn': 'Low-side NPN',
@@ -19,15 +24,12 @@ export const topologyName = (topology: Topology): string => TOPOLOGY_NAMES[topol
 /** The circuit in one sentence with its live values. */
 export function schematicName(subject: SchematicSubject): string {
   const { stage, figures } = subject;
-  const designator = (part: Parameters<typeof designatorRuns>[1]) =>
-    plainText(designatorRuns(subject, part));
   const parts = [
     `${topologyName(stage.topology)} switch ${stage.reference}, ${stage.transistor.partNumber}`,
-    `base resistor ${designator('baseResistor')} ${resistorText(stage.baseResistor.valueOhm, stage.baseResistor.tolerance)}`,
-    stage.shuntResistor === null
-      ? 'no base–emitter resistor'
-      : `base–emitter resistor ${designator('shuntResistor')} ${resistorText(stage.shuntResistor.valueOhm, stage.shuntResistor.tolerance)}`,
-    `load ${designator('load')} ${loadLines(subject).join(', ')}`,
+    ...insideWords(subject),
+    ...networkWords(subject, OUTPUT_PARTS, stage),
+    ...frontWords(subject),
+    ...loadWords(subject),
   ];
   const live =
     figures === null
@@ -38,4 +40,54 @@ export function schematicName(subject: SchematicSubject): string {
           `VCE ${formatQuantity(figures.vceV, 'V')}`,
         ];
   return `${[...parts, ...live].join('; ')}.`;
+}
+
+type Network = Pick<StageInput, 'shuntResistor'> & Pick<StageInput, 'baseResistor'>;
+
+function networkWords(
+  subject: SchematicSubject,
+  { baseResistor: rb, shuntResistor: rbe, ofWhat }: SwitchParts,
+  { baseResistor, shuntResistor }: Network,
+): string[] {
+  const named = (part: Parameters<typeof designatorRuns>[1]) =>
+    plainText(designatorRuns(subject, part));
+  const base = resistorText(baseResistor.valueOhm, baseResistor.tolerance);
+  const preBiased = subject.stage.topology === 'low-side-pre-biased';
+  return [
+    baseResistor.valueOhm === 0 ? [] : `base resistor${ofWhat} ${named(rb)} ${base}`,
+    shuntResistor === null
+      ? preBiased
+        ? []
+        : `no base–emitter resistor${ofWhat}`
+      : `base–emitter resistor${ofWhat} ${named(rbe)} ${resistorText(shuntResistor.valueOhm, shuntResistor.tolerance)}`,
+  ].flat();
+}
+
+function frontWords(subject: SchematicSubject): string[] {
+  const { preDriver } = subject.stage;
+  if (preDriver === null) return [];
+  const designator = plainText(designatorRuns(subject, 'preDriver'));
+  return [
+    `pre-driver ${designator}, ${preDriver.transistor.partNumber}`,
+    ...networkWords(subject, FRONT_PARTS, preDriver),
+  ];
+}
+
+function insideWords({ stage }: SchematicSubject): string[] {
+  const { internal } = stage.transistor;
+  if (stage.topology !== 'low-side-pre-biased' || internal === null) return [];
+  const r2 = internal.r2Ohm === null ? 'no R2' : `R2 ${formatQuantity(internal.r2Ohm, 'Ohm')}`;
+  return [`inside R1 ${formatQuantity(internal.r1Ohm, 'Ohm')}, ${r2}`];
+}
+
+function loadWords(subject: SchematicSubject): string[] {
+  const { load } = subject.stage;
+  const name = plainText(designatorRuns(subject, 'load'));
+  const words = [`load ${name} ${loadLines(subject).join(', ')}`];
+  if (load.kind === 'led-string') {
+    const series = plainText(designatorRuns(subject, 'loadResistor'));
+    words.push(`series resistor ${series} ${resistorText(load.resistanceOhm, load.tolerance)}`);
+  }
+  if (load.kind === 'logic-input') words.push(`drives ${inputsText(load.count)}`);
+  return words;
 }

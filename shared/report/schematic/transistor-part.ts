@@ -1,27 +1,68 @@
 import { formatQuantity } from '../../units/engineering-notation.ts';
+import { plainText, type Run } from './drawing.ts';
 import type { DrawingBuilder } from './drawing-builder.ts';
-import { symbolRuns, wrapped } from './part-words.ts';
+import { clampsTransistor } from './load-column.ts';
+import { designatorRuns, symbolRuns, wrapped } from './part-words.ts';
 import type { SchematicSubject } from './schematic-subject.ts';
+import { SYMBOLS, type SymbolName } from './symbols.ts';
+import { transistorSymbol } from './transistor-choice.ts';
+
+/** How the transistor's symbol lies to its column and to its base line. */
+export interface TransistorPlace {
+  readonly symbol: SymbolName;
+  readonly baseX: number;
+  /** Terminals above and below the base line. */
+  readonly up: number;
+  readonly down: number;
+}
+
+/** Where the terminals of the subject's transistor come to lie. */
+export function transistorPlace({ stage, frame, parts }: SchematicSubject): TransistorPlace {
+  const inFront = parts.transistor === 'preDriver';
+  const symbol = inFront ? stage.transistor.polarity : transistorSymbol(stage);
+  const { collector, emitter } = SYMBOLS[symbol].terminals as Record<
+    'collector' | 'emitter',
+    { readonly x: number; readonly y: number }
+  >;
+  return {
+    symbol,
+    baseX: frame.columnX - collector.x,
+    up: Math.max(-collector.y, -emitter.y),
+    down: Math.max(collector.y, emitter.y),
+  };
+}
 
 /** The transistor with its base at the end of the base wire, named at its right. */
 export function drawTransistor(
   drawing: DrawingBuilder,
-  { stage, frame }: SchematicSubject,
+  subject: SchematicSubject,
   baseY: number,
 ): void {
-  const across = stage.clamp.kind.endsWith('across-transistor');
-  const { polarity, partNumber } = stage.transistor;
-  drawing.symbol(polarity, { x: frame.columnX - 40, y: baseY }, 'transistor');
-  const room = (across ? frame.outerClampX - 16 : frame.width - 4) - (frame.columnX + 24);
+  const { frame, parts, stage } = subject;
+  const { partNumber } = stage.transistor;
+  const { symbol, baseX } = transistorPlace(subject);
+  const part = parts.transistor;
+  const designator: readonly Run[] =
+    part === 'preDriver' ? designatorRuns(subject, 'preDriver') : [{ text: stage.reference }];
+  const name = `${plainText(designator)}, transistor${parts.ofWhat}`;
+  drawing.symbol(symbol, { x: baseX, y: baseY }, part);
   const x = frame.columnX + 24;
-  drawing.text(x, baseY - 4, 'designator', [{ text: stage.reference }], { part: 'transistor' });
-  wrapped(partNumber, Math.floor(room / (12 * 0.62))).forEach((text, row) => {
+  drawing.text(x, baseY - 4, 'designator', designator, { part });
+  const perLine = Math.floor((rightOf(subject) - x) / (12 * 0.62));
+  wrapped(partNumber, perLine).forEach((text, row) => {
     drawing.text(x, baseY + 12 + 14 * row, 'value', [{ text }], {
-      part: 'transistor',
-      figure: { ref: `transistor-${row}`, name: `${stage.reference}, transistor` },
+      part,
+      figure: { ref: `${part}-${row}`, name },
     });
   });
-  drawing.name('transistor', `${stage.reference}, transistor, ${partNumber}`);
+  drawing.name(part, `${name}, ${partNumber}`);
+}
+
+/** How far the transistor's name may reach to the right. */
+function rightOf(subject: SchematicSubject): number {
+  const { frame, parts } = subject;
+  if (parts.transistor === 'preDriver') return frame.nextColumnX - 8;
+  return clampsTransistor(subject) ? frame.outerClampX - 16 : frame.width - 4;
 }
 
 /** The supply at the head of the column. */
@@ -34,28 +75,27 @@ export function drawSupply(drawing: DrawingBuilder, subject: SchematicSubject): 
       ? formatQuantity(min, 'V')
       : `${formatQuantity(min, 'V')} … ${formatQuantity(max, 'V')}`;
   const text = figures === null ? span : formatQuantity(figures.supplyV, 'V');
-  drawing.text(
-    frame.columnX + 20,
-    frame.top - 7,
-    'voltage',
-    [...symbolRuns('V', 'S'), { text: ` ${text}` }],
-    {
-      part: 'supply',
-      figure: { ref: 'vs', name: 'Supply' },
-    },
-  );
+  const symbol = symbolRuns('V', stage.topology === 'level-translator' ? '2' : 'S');
+  drawing.text(frame.columnX + 20, frame.top - 7, 'voltage', [...symbol, { text: ` ${text}` }], {
+    part: 'supply',
+    figure: { ref: 'vs', name: 'Supply' },
+  });
   drawing.name('supply', `Supply, ${text}`);
 }
 
-/** The return at the foot of the column. */
+/** The return at the foot of a column; `joined` where a rail from the drive ends there too. */
 export function drawReturn(
   drawing: DrawingBuilder,
-  { frame }: SchematicSubject,
+  { frame, parts }: SchematicSubject,
   railY: number,
+  joined = true,
 ): void {
-  drawing.dot(frame.columnX, railY);
+  if (joined) drawing.dot(frame.columnX, railY);
   drawing.symbol('ground', { x: frame.columnX, y: railY }, null);
+  const front = parts.transistor === 'preDriver';
   drawing.text(frame.columnX + 20, railY + 14, 'voltage', [{ text: '0\u00a0V' }], {
-    figure: { ref: 'return', name: 'Return' },
+    figure: front
+      ? { ref: 'logic-return', name: 'Return of the logic' }
+      : { ref: 'return', name: 'Return' },
   });
 }

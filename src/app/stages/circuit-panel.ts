@@ -73,10 +73,7 @@ export class CircuitPanel {
       resistor: this.style(),
     }),
   );
-  protected readonly lines = computed(() => {
-    const drawing = this.drawing();
-    return drawing === null ? [] : describeSchematic(drawing);
-  });
+  protected readonly lines = computed(() => describeSchematic(this.drawing()));
 
   protected setStyle(style: ResistorStyle): void {
     this.style.set(style);

@@ -163,6 +163,11 @@ export function mainField(part: PartKey): FieldPath | null {
     shuntResistor: 'shuntResistor/valueOhm',
     transistor: null,
     load: 'load/resistanceOhm',
+    loadResistor: null,
+    logicInput: null,
+    preDriver: null,
+    preBaseResistor: null,
+    preShuntResistor: null,
     clamp: 'clamp/kind',
   };
   return fields[part];

@@ -12,7 +12,8 @@ import { schematicSvg } from '../../../../shared/report/schematic/schematic-svg.
 import { drawSchematic } from '../../../../shared/report/schematic/schematic.ts';
 import { placed, SYMBOLS } from '../../../../shared/report/schematic/symbols.ts';
 import { textBox } from '../../../../shared/report/schematic/text-box.ts';
-import type { StageFile } from '../../../../shared/stage/stage-input.ts';
+import type { CornerFigures } from '../../../../shared/checks/evaluation.ts';
+import type { StageFile, Topology } from '../../../../shared/stage/stage-input.ts';
 import {
   DESIGNATORS,
   FIGURES,
@@ -49,32 +50,96 @@ interface Case {
   readonly drawing: Drawing;
 }
 
-const cases: Case[] = (['low-side-npn', 'high-side-pnp'] as const).flatMap((topology) =>
+const LOGIC_INPUT: StageFile['load'] = {
+  kind: 'logic-input',
+  pullUpOhm: 12_100,
+  tolerance: 0.01,
+  ratingW: 0.1,
+  count: 2,
+  vilV: 0.8,
+  vihV: 3.5,
+  leakageA: 1e-6,
+  lowCurrentA: 0,
+  capacitanceF: 1e-11,
+  wiringF: 2e-11,
+  riseTimeLimitSec: null,
+};
+const PRE_DRIVER: NonNullable<StageFile['preDriver']> = {
+  transistor: RELAY_DRIVER.transistor,
+  baseResistor: { valueOhm: 4700, tolerance: 0.05, ratingW: 0.1 },
+  shuntResistor: { valueOhm: 22_000, tolerance: 0.05, ratingW: 0.1 },
+};
+const INSIDE = { r1Ohm: 4700, r2Ohm: 10_000, input: { onV: 2.5, onOutputA: 0.02, offV: 0.3 } };
+
+interface Circuit {
+  readonly topology: Topology;
+  readonly loads: readonly StageFile['load'][];
+  readonly change: (shunt: StageFile['shuntResistor']) => Partial<StageFile>;
+  readonly figures?: CornerFigures;
+}
+
+const plain = () => ({});
+const pnp = { polarity: 'pnp' } as const;
+const front = (shuntResistor: StageFile['shuntResistor']) => ({
+  preDriver: { ...PRE_DRIVER, shuntResistor },
+});
+const inside = (input: object | null) => () => ({
+  transistor: { ...RELAY_DRIVER.transistor, internal: { ...INSIDE, input } },
+});
+
+const CIRCUITS: readonly Circuit[] = [
+  { topology: 'low-side-npn', loads: [...LOADS, LOGIC_INPUT], change: plain },
+  {
+    topology: 'high-side-pnp',
+    loads: LOADS,
+    change: () => ({ transistor: { ...RELAY_DRIVER.transistor, ...pnp } }),
+  },
+  {
+    topology: 'two-transistor-high-side',
+    loads: LOADS,
+    change: (shunt) => ({ ...front(shunt), transistor: { ...RELAY_DRIVER.transistor, ...pnp } }),
+  },
+  {
+    topology: 'two-transistor-high-side',
+    loads: LOADS,
+    change: (shunt) => ({ ...front(shunt), transistor: { ...RELAY_DRIVER.transistor, ...pnp } }),
+    figures: { ...FIGURES, corner: { ...FIGURES.corner, veb: 'min' } },
+  },
+  { topology: 'low-side-darlington', loads: [...LOADS, LOGIC_INPUT], change: plain },
+  {
+    topology: 'low-side-pre-biased',
+    loads: [...LOADS, LOGIC_INPUT],
+    change: () => ({
+      ...inside(INSIDE.input)(),
+      baseResistor: { valueOhm: 0, tolerance: 0 },
+    }),
+  },
+  { topology: 'low-side-pre-biased', loads: LOADS, change: inside(null) },
+  { topology: 'level-translator', loads: [LOGIC_INPUT], change: plain },
+];
+
+const cases: Case[] = CIRCUITS.flatMap(({ topology, loads, change, figures = FIGURES }) =>
   (['wide', 'compact'] as const).flatMap((layout) =>
-    LOADS.flatMap((load) =>
+    loads.flatMap((load) =>
       CLAMPS.flatMap((clamp) =>
         [RELAY_DRIVER.drive, PULL_UP_DRIVE].flatMap((drive) =>
           ([RELAY_DRIVER.shuntResistor, null] as const).flatMap((shuntResistor) =>
             [null, 1e-10].flatMap((speedUpCapacitorF) =>
               [DESIGNATORS, NO_DESIGNATORS].map((designators) => {
+                const changed = change(shuntResistor);
                 const transistor = {
-                  ...RELAY_DRIVER.transistor,
+                  ...(changed.transistor ?? RELAY_DRIVER.transistor),
                   partNumber: clamp === null ? '2N3904' : 'MMBT2222ALT1G',
-                  polarity: topology === 'low-side-npn' ? ('npn' as const) : ('pnp' as const),
                 };
+                const base = { valueOhm: 12_100, tolerance: 0.01, ratingW: 0.1 };
                 const stage = stageWith({
-                  topology,
-                  load,
-                  clamp,
-                  drive,
-                  shuntResistor,
-                  speedUpCapacitorF,
-                  transistor,
+                  ...{ topology, load, clamp, drive, shuntResistor, speedUpCapacitorF },
+                  ...{ baseResistor: base, ...changed, transistor },
                 });
-                const drawing = drawSchematic(stage, FIGURES, designators, {
+                const drawing = drawSchematic(stage, figures, designators, {
                   layout,
                   resistor: 'box',
-                })!;
+                });
                 const title = [
                   topology,
                   layout,
@@ -153,7 +218,8 @@ function faults(rule: (drawing: Drawing) => string[]): string[] {
 
 describe('schematic', () => {
   it('draws every mix of topology, layout, load, clamp, drive and base network', () => {
-    expect(cases).toHaveLength(2 * 2 * 4 * 5 * 2 * 2 * 2 * 2);
+    const loads = 5 + 4 + 4 + 4 + 5 + 5 + 4 + 1;
+    expect(cases).toHaveLength(loads * 2 * 5 * 2 * 2 * 2 * 2);
     expect(cases.every(({ drawing }) => drawing.elements.length > 10)).toBe(true);
   });
 
@@ -230,11 +296,15 @@ describe('schematic', () => {
       const bodies = symbolsOf(drawing).flatMap(({ symbol, at, turn }) =>
         symbol === 'npn' || symbol === 'pnp'
           ? [{ x: at.x + 14, y: at.y - 16, width: 38, height: 32 }]
-          : symbol === 'coil'
-            ? [{ x: at.x - 24, y: at.y - 12, width: 48, height: 24 }]
-            : symbol === 'push-pull' || symbol === 'open-collector'
-              ? [{ x: at.x - 24, y: at.y - 24, width: 48, height: 48 }]
-              : [bodyBox(symbol, at, turn)],
+          : symbol === 'darlington-npn'
+            ? [{ x: at.x + 12, y: at.y - 24, width: 72, height: 64 }]
+            : symbol === 'pre-biased-npn'
+              ? [{ x: at.x + 10, y: at.y - 32, width: 78, height: 64 }]
+              : symbol === 'coil'
+                ? [{ x: at.x - 24, y: at.y - 12, width: 48, height: 24 }]
+                : symbol === 'push-pull' || symbol === 'open-collector'
+                  ? [{ x: at.x - 24, y: at.y - 24, width: 48, height: 48 }]
+                  : [bodyBox(symbol, at, turn)],
       );
       return texts.flatMap(({ words, box }, index) => {
         const others = texts.filter((other, at) => at > index && overlap(box, other.box));
@@ -255,7 +325,7 @@ describe('schematic', () => {
     const drawing = drawSchematic(stageWith(), FIGURES, DESIGNATORS, {
       layout: 'wide',
       resistor: 'box',
-    })!;
+    });
     const lines = Object.fromEntries(
       describeSchematic(drawing).map(({ ref, value }) => [ref, value.replaceAll('\u00a0', ' ')]),
     );
@@ -275,9 +345,76 @@ describe('schematic', () => {
     });
   });
 
+  const wide = { layout: 'wide', resistor: 'box' } as const;
+  const circuit = (topology: Topology) => {
+    const { loads, change } = CIRCUITS.find((each) => each.topology === topology)!;
+    return stageWith({ topology, load: loads.at(-1)!, clamp: null, ...change(null) });
+  };
+  const textOf = (drawing: Drawing) =>
+    Object.fromEntries(
+      describeSchematic(drawing).map(({ ref, value }) => [ref, value.replaceAll('\u00a0', ' ')]),
+    );
+
+  it('draws the transistor in front with its own network, and the base resistor between the two', () => {
+    const stage = { ...circuit('two-transistor-high-side'), load: stageWith().load };
+    const drawing = drawSchematic(stage, FIGURES, DESIGNATORS, wide);
+    expect(textOf(drawing)).toMatchObject({
+      'preDriver-0': '2N3904',
+      preBaseResistor: '4.7 kΩ ±5 %',
+      baseResistor: '620 Ω ±5 %',
+      'ir-output': '2.76 mA',
+      'vce-front': '2.79 V',
+      vbe: 'VEB 0.995 V',
+    });
+    expect(drawing.name).toMatch(/pre-driver Q13, 2N3904; base resistor of the pre-driver R34/);
+    expect(drawing.parts.map(({ key }) => key)).toEqual(
+      expect.arrayContaining(['preDriver', 'preBaseResistor', 'baseResistor', 'transistor']),
+    );
+  });
+
+  it('shows the figures of a corner at the transistor it belongs to', () => {
+    const stage = circuit('two-transistor-high-side');
+    const corner = { ...FIGURES.corner, veb: 'min' };
+    const drawing = drawSchematic(stage, { ...FIGURES, corner }, DESIGNATORS, wide);
+    const text = textOf(drawing);
+    expect(text).toMatchObject({ vo: '2.79 V', vbe: 'VBE 0.995 V', 'ir-output': '24.0 mA' });
+    expect(text).toMatchObject({ 'corner-resistors': 'R34 +, R35 −', 'corner-load': 'R30 −' });
+    expect(text).not.toHaveProperty('vc');
+  });
+
+  it('leads a bare wire into a pre-biased part without a resistor before it', () => {
+    const drawing = drawSchematic(circuit('low-side-pre-biased'), FIGURES, DESIGNATORS, wide);
+    expect(textOf(drawing)).toMatchObject({ vbe: 'VI 0.995 V', ib: 'II 2.71 mA' });
+    expect(drawing.parts.map(({ key }) => key)).not.toContain('baseResistor');
+    expect(drawing.name).toContain('inside R1 4.7\u00a0kΩ, R2 10\u00a0kΩ');
+    expect(drawing.name).not.toContain('base resistor');
+  });
+
+  it('draws the inputs behind a level translator between its two rails', () => {
+    const drawing = drawSchematic(circuit('level-translator'), FIGURES, NO_DESIGNATORS, wide);
+    expect(textOf(drawing)).toMatchObject({
+      vs: 'V2 26.4 V',
+      rail: 'V1 3 V',
+      logicInput: '2 inputs',
+      'load-0': '12.1 kΩ ±1 %',
+    });
+    expect(drawing.name).toContain('load RC 12.1');
+  });
+
+  it('gives the LEDs and their resistor a name each', () => {
+    const drawing = drawSchematic(
+      stageWith({ load: LOADS[3]!, clamp: null }),
+      null,
+      DESIGNATORS,
+      wide,
+    );
+    expect(textOf(drawing)).toMatchObject({ 'load-0': '6 LEDs', 'loadResistor-0': '470 Ω ±5 %' });
+    expect(drawing.name).toContain('series resistor R33 470\u00a0Ω');
+  });
+
   it('names the circuit with its live values', () => {
     const stage = stageWith({ baseResistor: { valueOhm: 4700, tolerance: 0.05 } });
-    const { name } = drawSchematic(stage, null, DESIGNATORS, { layout: 'wide', resistor: 'box' })!;
+    const { name } = drawSchematic(stage, null, DESIGNATORS, { layout: 'wide', resistor: 'box' });
     expect(name).toMatch(/NPN.*R30.*4\.7\u00a0kΩ/);
   });
 
@@ -285,7 +422,7 @@ describe('schematic', () => {
     const drawing = drawSchematic(stageWith(), null, NO_DESIGNATORS, {
       layout: 'wide',
       resistor: 'zigzag',
-    })!;
+    });
     const designators = drawing.elements.flatMap((element) =>
       element.kind === 'text' && element.role === 'designator'
         ? [element.runs.map((run) => run.text).join('')]
@@ -297,19 +434,11 @@ describe('schematic', () => {
     );
   });
 
-  it('draws nothing for a topology without a drawing', () => {
-    const stage = stageWith({
-      topology: 'low-side-darlington',
-      transistor: { ...RELAY_DRIVER.transistor, darlington: true },
-    });
-    expect(drawSchematic(stage, null, DESIGNATORS, { layout: 'wide', resistor: 'box' })).toBeNull();
-  });
-
   it('gives each part an area that holds its symbol', () => {
     const { parts, elements } = drawSchematic(stageWith(), FIGURES, DESIGNATORS, {
       layout: 'compact',
       resistor: 'box',
-    })!;
+    });
     expect(parts.map(({ key }) => key)).toEqual(
       expect.arrayContaining(['supply', 'drive', 'baseResistor', 'shuntResistor', 'load', 'clamp']),
     );
@@ -329,7 +458,7 @@ describe('schematic', () => {
       FIGURES,
       DESIGNATORS,
       { layout: 'wide', resistor: 'box' },
-    )!;
+    );
     const svg = schematicSvg(
       drawing,
       {

@@ -1,46 +1,8 @@
 import type { CornerFigures } from '../../../../shared/checks/evaluation.ts';
 import { StageInput, type StageFile } from '../../../../shared/stage/stage-input.ts';
+import { relayDriver } from '../../relay-stage.ts';
 
-export const RELAY_DRIVER: StageFile = {
-  format: 'sinkwell-stage/1',
-  reference: 'Q12',
-  title: 'Agitator contactor pilot relay',
-  topology: 'low-side-npn',
-  supplyV: { min: 21.6, max: 26.4 },
-  ambientDegC: { min: -20, max: 60 },
-  drive: {
-    kind: 'push-pull',
-    railV: { min: 3, max: 3.6 },
-    high: { dropV: 0.6, currentA: 0.008 },
-    low: { levelV: 0.4, currentA: 0.008, unloadedV: 0.1 },
-    sourceLimitA: 0.02,
-    sinkLimitA: 0.02,
-  },
-  load: {
-    kind: 'coil',
-    resistanceOhm: 1440,
-    tolerance: 0.1,
-    referenceDegC: 20,
-    temperatureRiseK: 20,
-    inductanceH: 4,
-    operateV: 16.8,
-    releaseV: 2.4,
-    maximumV: null,
-  },
-  baseResistor: { valueOhm: 620, tolerance: 0.05, ratingW: 0.1 },
-  shuntResistor: { valueOhm: 22000, tolerance: 0.05, ratingW: 0.1 },
-  clamp: { kind: 'diode', forwardV: 1, currentRatingA: 0.2 },
-  transistor: {
-    partNumber: '2N3904',
-    polarity: 'npn',
-    limits: { vceoV: 40, icA: 0.2, powerW: 0.625, tjMaxDegC: 150 },
-    thermal: { rthJaKPerW: 200 },
-    gain: [],
-    saturation: [],
-    baseEmitter: [],
-  },
-  policy: { name: 'General practice' },
-};
+export const RELAY_DRIVER = relayDriver();
 
 /** A parsed stage made from the relay driver. */
 export const stageWith = (change: Partial<StageFile> = {}): StageInput =>
@@ -90,6 +52,10 @@ export const DESIGNATORS = {
   clamp: 'D7',
   clampZener: 'D8',
   drive: 'U4',
+  loadResistor: 'R33',
+  preDriver: 'Q13',
+  preBaseResistor: 'R34',
+  preShuntResistor: 'R35',
 };
 export const NO_DESIGNATORS = {
   baseResistor: null,
@@ -100,4 +66,8 @@ export const NO_DESIGNATORS = {
   clamp: null,
   clampZener: null,
   drive: null,
+  loadResistor: null,
+  preDriver: null,
+  preBaseResistor: null,
+  preShuntResistor: null,
 };
