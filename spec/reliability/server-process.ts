@@ -4,9 +4,11 @@ import { mkdtempSync, rmSync } from 'node:fs';
 import { createServer } from 'node:net';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
+import { pathToFileURL } from 'node:url';
 import { buildSync } from 'esbuild';
-import { TestClient } from '../server/test-client.ts';
+import { type Reply, TestClient } from '../server/test-client.ts';
 
+const GAUGE = path.join(import.meta.dirname, 'gauge.mjs');
 const ROOT = path.resolve(import.meta.dirname, '../..');
 
 /** The server's sources as one plain JavaScript file: a process of its own starts from it in a second. */
@@ -27,6 +29,13 @@ export function bundleServer(): string {
     },
   });
   return outfile;
+}
+
+/** What gauge.mjs measured inside of the process. */
+export interface Figures {
+  readonly loopDelayP99Ms: number;
+  readonly loopDelayMaxMs: number;
+  readonly rssGrowthMiB: number;
 }
 
 /** A real server process over a data folder that outlives it. */
@@ -50,28 +59,33 @@ export class ServerProcess {
     return `http://127.0.0.1:${this.port}`;
   }
 
-  /** Starts and waits until it says it is ready, or ends. */
-  async start(env: Record<string, string> = {}): Promise<void> {
+  /**
+   * Starts and waits until it says it is ready, or ends.
+   *
+   * @param options.gauge whether {@link gauge} will be asked
+   */
+  async start(env: Record<string, string> = {}, options: { gauge?: true } = {}): Promise<void> {
     this.stdout = '';
     this.stderr = '';
-    const child = spawn(process.execPath, [this.bundle], {
+    const preload = options.gauge ? ['--import', pathToFileURL(GAUGE).href] : [];
+    const child = spawn(process.execPath, [...preload, this.bundle], {
       cwd: this.folder,
       env: {
         ...{ PATH: process.env['PATH'], SINKWELL_DATA: this.dataFolder, SINKWELL_DEMO: '0' },
         ...{ SINKWELL_PORT: String(this.port), SINKWELL_SCRYPT_COST: '4' },
         ...{ SINKWELL_REQUESTS_PER_MINUTE: '999999', SINKWELL_LOG_LEVEL: 'warn', ...env },
       },
-      stdio: ['ignore', 'pipe', 'pipe'],
+      stdio: ['ignore', 'pipe', 'pipe', ...(options.gauge ? (['ipc'] as const) : [])],
     });
     this.#child = child;
     const ended = once(child, 'exit');
     const ready = new Promise<void>((resolve) => {
-      child.stdout.on('data', (chunk: Buffer) => {
+      child.stdout!.on('data', (chunk: Buffer) => {
         this.stdout += chunk.toString();
         if (this.stdout.includes('is ready at')) resolve();
       });
     });
-    child.stderr.on('data', (chunk: Buffer) => (this.stderr += chunk.toString()));
+    child.stderr!.on('data', (chunk: Buffer) => (this.stderr += chunk.toString()));
     await Promise.race([ready, ended]);
   }
 
@@ -100,10 +114,24 @@ export class ServerProcess {
     return client;
   }
 
+  /** Asks the running process, which was started with its gauge. */
+  async gauge(message: 'reset' | 'read'): Promise<Figures> {
+    const child = this.#child!;
+    const answered = once(child, 'message');
+    child.send(message);
+    const [figures] = (await answered) as [Figures];
+    return figures;
+  }
+
+  /** The administrator's sign-in from a browser that has visited; whatever the answer. */
+  signInBy(client: TestClient, headers: Record<string, string> = {}): Promise<Reply> {
+    const { email, password } = ADMINISTRATOR;
+    return client.post('/api/session', { email, password }, headers);
+  }
+
   async signIn(): Promise<TestClient> {
     const client = await this.visit();
-    const { email, password } = ADMINISTRATOR;
-    const reply = await client.post('/api/session', { email, password });
+    const reply = await this.signInBy(client);
     if (reply.status !== 200) throw new Error(`sign-in answered ${reply.status}: ${reply.text}`);
     return client;
   }
