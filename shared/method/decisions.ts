@@ -216,4 +216,29 @@ export const DECISIONS: readonly MethodDecision[] = [
     title: 'Nominal figures of a two-transistor high side',
     text: 'Those of the PNP, with the nominal drop of the NPN as its low level; the drive current is that of RB.',
   },
+  {
+    id: 'expected-device',
+    title: 'The expected device and how it is fitted',
+    text: 'Curves marked expected come from the Ebers–Moll equations in transport form with Early effect and a collector resistance, for the specimen halfway between the gain limits; they decide no verdict. Model figures of the part record come first. Else RC is the slope of the typical VCE(sat) rows over IC by least squares (0.7 of the maximum stands in for a typical figure that is not printed), and βR, between 0.05 and 5, is what their offset then leaves; with one row βR is 0.5 and RC what that row leaves. IS is set by the VBE row of the lowest current, 0.1 V below its maximum where no typical figure is printed; what lies above 0.8 V is taken for resistance. VA is 75 V where the record gives none, the middle of what textbooks state for small-signal transistors. A part without gain rows is drawn with 100.',
+  },
+  {
+    id: 'expected-device-gain',
+    title: 'One gain to each curve',
+    text: 'A curve at constant IB has the gain of the collector current which that base current makes in the active region, so that all curves of a device meet at −VA. At constant VBE it is the gain of the corner’s own base current.',
+  },
+  {
+    id: 'expected-darlington',
+    title: 'Curves of a Darlington',
+    text: 'It is drawn as one transistor with the gain of its rows behind a drop of 0.6 V, with two junctions between base and emitter and twice the gain exponent.',
+  },
+  {
+    id: 'curve-operating-point',
+    title: 'Two figures at one load line',
+    text: 'The hollow square is the operating point of the selected corner in limit figures, the one the verdict uses. Where the expected curve of the same base current meets the same load line, at the same junction temperature, stands beside it in words.',
+  },
+  {
+    id: 'margin-over-temperature',
+    title: 'Margin over ambient temperature',
+    text: 'At each temperature the whole stage is judged as if its ambient range were that temperature alone. The ends of the curve are therefore the margins of the verdict wherever a corner of the ambient range is the worst.',
+  },
 ];

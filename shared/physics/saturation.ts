@@ -12,7 +12,7 @@ export interface SaturationPoint {
 export const USUAL_REVERSE_GAIN = 0.5;
 
 /** What a Darlington adds to the intrinsic drop: the base–emitter voltage of its output transistor, V. */
-const DARLINGTON_DROP_V = 0.6;
+export const DARLINGTON_DROP_V = 0.6;
 
 /**
  * VCE(sat) over IC at 25 °C as straight pieces VCE = V0 + RCE·IC. Piece k reaches up to `upToA[k]`; the
