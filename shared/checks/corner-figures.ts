@@ -85,22 +85,25 @@ const OPEN_OHM = 1e12;
  * @param corner ends by name, as a criterion reports them; what it leaves out stands at its first end
  */
 export function figuresAtCorner(input: StageInput, corner: Corner): CornerFigures {
-  const { point, rbOhm } = pointFor(input, 'veb' in corner);
+  const point = pointAt(input, corner);
   const { corners } = point.model;
-  const index = cornerNumber(corners, corner);
-  point.place(index, rbOhm);
-  const { ambientDegC } = point.condition;
-  if (corner['instant'] === 'settled') point.settle(ambientDegC);
-  else point.solve(ambientDegC);
-  return figuresOf(point, cornerNamed(corners, index));
+  return figuresOf(point, cornerNamed(corners, cornerNumber(corners, corner)));
 }
 
 /** The on state at the middle of every tolerance, settled. */
 export function nominalFigures(input: StageInput): CornerFigures {
-  const { point, rbOhm } = pointFor(input, false);
-  point.placeNominal(rbOhm);
-  point.settle(point.condition.ambientDegC);
-  return figuresOf(point, NOMINAL_CORNER);
+  return figuresOf(pointAt(input, null), NOMINAL_CORNER);
+}
+
+/** The operating point solved at a corner, or with null at the middle of every tolerance, settled. */
+export function pointAt(input: StageInput, corner: Corner | null): OperatingPoint {
+  const { point, rbOhm } = pointFor(input, corner !== null && 'veb' in corner);
+  if (corner === null) point.placeNominal(rbOhm);
+  else point.place(cornerNumber(point.model.corners, corner), rbOhm);
+  const { ambientDegC } = point.condition;
+  if (corner === null || corner['instant'] === 'settled') point.settle(ambientDegC);
+  else point.solve(ambientDegC);
+  return point;
 }
 
 /** The operating point of the stage's output transistor, or of the one in front of it. */

@@ -1,5 +1,6 @@
 import { formatQuantity } from '../../../shared/units/engineering-notation.ts';
 import { PREFIXES, QUANTITY_UNITS } from '../../../shared/units/quantity-unit.ts';
+import { roundStep } from '../../../shared/units/round-step.ts';
 import { fixedFigure } from '../ui/fixed-figure.ts';
 import type { ChartAxis } from './chart-model.ts';
 
@@ -83,7 +84,7 @@ function linearScale(axis: ChartAxis, startPx: number, endPx: number, room: numb
   const { factor } = axisUnit(axis);
   const low = axis.from * factor;
   const high = axis.to > axis.from ? axis.to * factor : low + 1;
-  const step = niceStep((high - low) / room);
+  const step = roundStep((high - low) / room);
   // A free end goes on to the next half step, so that little of the paper stays empty.
   const half = step / 2;
   const bottom = axis.exact ? low : Math.floor(low / half + 1e-9) * half;
@@ -102,13 +103,6 @@ function linearScale(axis: ChartAxis, startPx: number, endPx: number, room: numb
 }
 
 const isWhole = (value: number) => Math.abs(value - Math.round(value)) < 1e-6;
-
-/** 1, 2, 2.5 or 5 times a power of ten, not below the step asked for. */
-function niceStep(least: number): number {
-  const decade = 10 ** Math.floor(Math.log10(least));
-  const step = [1, 2, 2.5, 5, 10].find((each) => each * decade >= least * (1 - 1e-9)) ?? 10;
-  return step * decade;
-}
 
 function logScale(axis: ChartAxis, startPx: number, endPx: number, room: number): Scale {
   const { factor } = axisUnit(axis);
