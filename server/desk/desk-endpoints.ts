@@ -10,7 +10,7 @@ import { deskGroups, waitingForOthers } from './desk-groups.ts';
 import type { UnnamedItem } from './desk-item.ts';
 import { deskMaterial } from './desk-material.ts';
 
-const MOST_ACTIVITY = 30;
+const MOST_ACTIVITY = 14;
 
 export function deskEndpoints({ database }: { readonly database: Database }): Endpoint[] {
   return [

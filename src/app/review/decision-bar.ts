@@ -10,7 +10,7 @@ import { NotAllowed } from '../ui/not-allowed.ts';
 import { StatusAnnouncer } from '../ui/status-announcer.ts';
 import { CheckEditor } from './check-editor.ts';
 import { passReason, type PassItem } from './pass-items.ts';
-import { ReasonDialog, type ReasonAsked } from './reason-dialog.ts';
+import { ReasonDialog, type ReasonAsked } from '../ui/reason-dialog.ts';
 import { ReviewStore } from './review-store.ts';
 import { SaveStatus } from './save-status.ts';
 

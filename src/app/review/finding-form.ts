@@ -24,7 +24,7 @@ import { ReviewStore } from './review-store.ts';
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './finding-form.html',
   styles: `
-    @use './entry';
+    @use '../../theme/entry';
 
     form {
       display: grid;

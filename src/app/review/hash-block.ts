@@ -54,7 +54,7 @@ import { StatusAnnouncer } from '../ui/status-announcer.ts';
 
     .groups {
       display: grid;
-      grid-template-columns: repeat(auto-fill, minmax(76px, 1fr));
+      grid-template-columns: repeat(auto-fill, minmax(68px, 1fr));
       gap: 4px 8px;
       margin-block: 4px;
     }

@@ -38,7 +38,7 @@ import { PanelHead } from './panel-head.ts';
     </section>
   }`,
   styles: `
-    @use './entry';
+    @use '../../theme/entry';
 
     section + section {
       border-top: 1px solid var(--mat-sys-outline-variant);

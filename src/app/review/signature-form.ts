@@ -26,7 +26,7 @@ import { schemaValidator } from '../ui/schema-validator.ts';
 import { StatusAnnouncer } from '../ui/status-announcer.ts';
 import { HashBlock } from './hash-block.ts';
 import { PeopleList } from './people-list.ts';
-import { ReasonDialog, type ReasonAsked } from './reason-dialog.ts';
+import { ReasonDialog, type ReasonAsked } from '../ui/reason-dialog.ts';
 import { ReviewStore } from './review-store.ts';
 
 /** The signature about to be given: its meaning, what it covers, who, and the password as the act. */

@@ -16,7 +16,7 @@ interface Standing {
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `<span class="line" role="status">
       <app-icon [name]="standing().icon" [size]="16" />
-      <span>{{ standing().text }}</span>
+      <span>{{ standing().text }}</span>&ngsp;
       @if (standing().time) {
         <span class="mono">{{ standing().time }}</span>
       }

@@ -5,12 +5,12 @@ import { Router } from '@angular/router';
 import { firstValueFrom } from 'rxjs';
 import type { Revision } from '../../../shared/contract/revision.ts';
 import { toApiProblem } from '../api/api-problem.ts';
+import { ReasonDialog, type ReasonAsked } from '../ui/reason-dialog.ts';
 import { linked, type PartRole } from './apply-part.ts';
 import { CompareDialog, comparedRevision, type ComparedPair } from './compare-dialog.ts';
 import { ConflictDialog, type ConflictData } from './conflict-dialog.ts';
 import { draftOf, type Draft } from './draft.ts';
 import { PartPicker, type PartPickerData, type PickedPart } from './part-picker.ts';
-import { ReasonDialog, type ReasonQuestion } from './reason-dialog.ts';
 import { downloadStageFile, readStageText } from './stage-file.ts';
 import { StageStore } from './stage-store.ts';
 
@@ -52,12 +52,12 @@ export class SheetActs {
   }
 
   async withdraw(): Promise<void> {
-    const reason = await this.ask<string>(ReasonDialog, {
+    await this.ask<undefined>(ReasonDialog, {
       title: 'Withdraw this revision',
       text: 'A withdrawn revision stays in the history and takes no further part in the project.',
       act: 'Withdraw',
-    } satisfies ReasonQuestion);
-    if (reason !== undefined) await this.act(() => this.store.withdraw(reason));
+      run: (reason) => this.store.withdraw(reason),
+    } satisfies ReasonAsked);
   }
 
   revise(): Promise<void> {

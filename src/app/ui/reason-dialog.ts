@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/cor
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogModule, MatDialogRef } from '@angular/material/dialog';
 import { toApiProblem } from '../api/api-problem.ts';
-import { Icon } from '../ui/icon.ts';
+import { Icon } from './icon.ts';
 
 export interface ReasonAsked {
   readonly title: string;
@@ -51,7 +51,7 @@ export interface ReasonAsked {
       </button>
     </mat-dialog-actions>`,
   styles: `
-    @use './entry';
+    @use '../../theme/entry';
 
     .field {
       margin-top: 12px;
