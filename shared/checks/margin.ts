@@ -27,6 +27,16 @@ export function marginOf(sign: number, value: number, limit: number, least: numb
   return (sign * (limit - value)) / Math.max(Math.abs(limit), least);
 }
 
+/**
+ * A margin on one scale for both relations: 1 − value/limit or 1 − limit/value. The margin of a figure that must reach
+ * its limit ends at −1, however far it falls short, so two that are missed compare by this.
+ *
+ * @param sign as for `marginOf`
+ */
+export function evenMargin(sign: number, margin: number): number {
+  return sign < 0 && margin < 0 ? 1 - 1 / Math.max(0, 1 + margin) : margin;
+}
+
 /** Status of a margin: at least the policy's band is a pass, met at all is marginal. */
 export function statusOf(
   margin: number,

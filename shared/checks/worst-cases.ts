@@ -1,7 +1,7 @@
 import { type CornerSpace, cornerNamed } from '../stage/corners.ts';
 import { CRITERIA, criterionIds, criterionNumber, type CriterionId } from './criteria.ts';
 import type { Criterion, Unit } from './evaluation.ts';
-import { leastLimit, marginOf, statusOf } from './margin.ts';
+import { evenMargin, leastLimit, marginOf, statusOf } from './margin.ts';
 
 /** Corners whose margins differ by less than this count as equally bad; the first is reported. */
 const SAME = 1e-9;
@@ -89,10 +89,11 @@ export class WorstCases {
     return this.value[criterionNumber(id)] ?? NaN;
   }
 
-  /** Smallest margin kept so far; without a limit the extreme figure itself never counts. */
+  /** Smallest margin kept so far, on the scale of `evenMargin`; without a limit the extreme figure itself never counts. */
   key(id: CriterionId): number {
     const k = criterionNumber(id);
-    return Number.isNaN(this.limit[k]) ? Infinity : (this.keys[k] ?? Infinity);
+    if (Number.isNaN(this.limit[k])) return Infinity;
+    return evenMargin(this.sign[k] ?? 1, this.keys[k] ?? Infinity);
   }
 
   /** All criteria that took part, in the order of the table. */

@@ -142,6 +142,21 @@ export const DECISIONS: readonly MethodDecision[] = [
     text: 'Margin, worst criterion and verdict of a preferred value count its RB-dependent criteria only; what RB cannot change is shown in the list of criteria.',
   },
   {
+    id: 'empty-window',
+    title: 'What would open an empty window',
+    text: 'Named are the criterion that asks most for a smaller base resistor and the one that asks most for a larger, at the value that comes nearest. What each needs is read at the last value that still meets the other. Shortfalls are compared as value over limit or limit over value, whichever is above 1.',
+  },
+  {
+    id: 'shunt-sizing',
+    title: 'Sizing of the base–emitter resistor',
+    text: 'Judged at the stage’s own RB, by those off-state criteria that RBE decides; VCE and the rating of an open output it does not. The tenth of the drive is counted at the corner where RBE takes most. Where the stage says nothing of reset, the pin is taken to float with 1 µA: holding the base then is what the resistor is for. A smaller value would cost more drive, so where the largest that keeps the stage off costs more than a tenth there is no recommendation.',
+  },
+  {
+    id: 'part-ranking',
+    title: 'Which parts can do a stage',
+    text: 'Each transistor of the library stands in the stage with a base resistor sized for it, with the safest figures of all makers and no gain group. A low-side stage changes to the topology of a Darlington or a pre-biased part; the latter gives up its outer base–emitter resistor. Ranked by verdict, then by the smallest margin of all criteria. Where no value can be recommended the part is judged at the value that comes nearest.',
+  },
+  {
     id: 'capacitor-across-coil',
     title: 'Capacitor across a coil',
     text: 'A stage file cannot describe one, so the calculation cannot find it. It draws a current peak at turn-on and rings with the coil at turn-off: use a diode.',

@@ -1,5 +1,5 @@
 import type { Criterion } from '../checks/evaluation.ts';
-import { verdictOf } from '../checks/margin.ts';
+import { evenMargin, verdictOf } from '../checks/margin.ts';
 import type { Candidate } from './sizing.ts';
 
 /** A preferred value with all its criteria. */
@@ -36,4 +36,22 @@ export function obstacleAt(judged: JudgedValue, dependent: ReadonlySet<string>):
   const own = judged.criteria.filter(({ id }) => dependent.has(id));
   const failing = tightest(own.filter(({ status }) => status === 'fail'));
   return (failing ?? own.find(({ status }) => status === 'open'))?.id ?? null;
+}
+
+/** An open criterion is missed, but by nothing that could be measured. */
+const BARELY = -1e-12;
+
+/** How near a criterion comes to being met, on one scale for both relations: below 0 it is missed. */
+export function nearnessOf({ margin, relation, status }: Criterion): number {
+  if (status === 'open') return BARELY;
+  if (status === 'stated') return Infinity;
+  return evenMargin(
+    relation === '<=' ? 1 : -1,
+    margin ?? (status === 'fail' ? -Infinity : Infinity),
+  );
+}
+
+/** How near a value comes: its nearest-to-missed RB-dependent criterion. */
+export function nearness(judged: JudgedValue, dependent: ReadonlySet<string>): number {
+  return Math.min(...judged.criteria.filter(({ id }) => dependent.has(id)).map(nearnessOf));
 }

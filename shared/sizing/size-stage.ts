@@ -3,7 +3,7 @@ import { type Judge, judgeFor } from '../checks/judge.ts';
 import type { StageInput } from '../stage/stage-input.ts';
 import { preferredValues } from '../units/preferred-values.ts';
 import { conflictAt } from './conflict.ts';
-import { candidateOf, type JudgedValue, obstacleAt } from './judged-value.ts';
+import { candidateOf, type JudgedValue, nearness, obstacleAt } from './judged-value.ts';
 import { DECIDED_BY_RB, movingCriteria } from './rb-dependence.ts';
 import type { Candidate, Sizing } from './sizing.ts';
 
@@ -22,6 +22,43 @@ const NOTHING: Sizing = {
   conflict: null,
 };
 
+/** The values of a stage's base resistor that were judged, and what they come to. */
+export interface SizedValues {
+  readonly judged: readonly JudgedValue[];
+  /** Ids of the criteria that move with RB. */
+  readonly dependent: ReadonlySet<string>;
+  readonly candidates: readonly Candidate[];
+  readonly recommendedOhm: number | null;
+  /** The value that comes nearest to meeting all that RB decides. */
+  readonly nearest: JudgedValue | null;
+  readonly judge: Judge;
+  /** All preferred values of the policy, rising. */
+  readonly values: readonly number[];
+}
+
+/**
+ * Judges every preferred value of the base resistor that can pass at all corners.
+ *
+ * @param input a stage that can be judged
+ */
+export function sizedValues(input: StageInput): SizedValues {
+  const { series, smallestOhm, largestOhm } = input.policy;
+  const values = preferredValues(series, smallestOhm, largestOhm);
+  const judge = judgeFor(input);
+  const judged = judgedValues(values, judge);
+  const dependent = settledDependence(judged);
+  const candidates = judged.map((value) => candidateOf(value, dependent));
+  return {
+    judged,
+    dependent,
+    candidates,
+    recommendedOhm: recommended(candidates),
+    nearest: nearestOf(judged, dependent),
+    judge,
+    values,
+  };
+}
+
 /**
  * Sizes the base resistor: every preferred value that can pass is judged at all corners, and the window is
  * the values whose RB-dependent criteria are all pass or marginal.
@@ -31,13 +68,12 @@ const NOTHING: Sizing = {
  */
 export function sizeStage(input: StageInput): Sizing {
   if (obstacleTo(input) !== null) return NOTHING;
-  const judge = judgeFor(input);
-  const judged = judgedValues(input, judge);
-  const dependent = settledDependence(judged);
-  const candidates = judged.map((value) => candidateOf(value, dependent));
+  const { judged, dependent, candidates, recommendedOhm, nearest, judge, values } =
+    sizedValues(input);
   const window = windowOf(judged, dependent);
   if (window === null) {
-    return { ...NOTHING, candidates, conflict: conflictAt(judged, nearest(candidates), dependent) };
+    const conflict = nearest && conflictAt(judge, values, nearest, dependent);
+    return { ...NOTHING, candidates: [...candidates], conflict };
   }
   const below = judged[window.first - 1];
   const above = judged[window.last + 1];
@@ -48,15 +84,13 @@ export function sizeStage(input: StageInput): Sizing {
       min: below === undefined ? null : obstacleAt(below, dependent),
       max: above === undefined ? null : obstacleAt(above, dependent),
     },
-    recommendedOhm: recommended(candidates),
-    candidates,
+    recommendedOhm,
+    candidates: [...candidates],
     conflict: null,
   };
 }
 
-function judgedValues(input: StageInput, judge: Judge): JudgedValue[] {
-  const { series, smallestOhm, largestOhm } = input.policy;
-  const values = preferredValues(series, smallestOhm, largestOhm);
+function judgedValues(values: readonly number[], judge: Judge): JudgedValue[] {
   const probed = values.map((valueOhm) => judge.probeMargin(valueOhm));
   const first = probed.findIndex((margin) => margin >= 0);
   const last = probed.findLastIndex((margin) => margin >= 0);
@@ -99,8 +133,14 @@ function settledDependence(judged: readonly JudgedValue[]): Set<string> {
 
 const marginOf = ({ margin }: Candidate) => margin ?? -Infinity;
 
+/** The value that comes nearest to meeting everything that RB decides. */
+function nearestOf(judged: readonly JudgedValue[], dependent: ReadonlySet<string>) {
+  const near = judged.map((value) => nearness(value, dependent));
+  return judged[near.indexOf(Math.max(...near))] ?? null;
+}
+
 /** Index of the value with the largest smallest margin, ties to the larger value. */
-function nearest(candidates: readonly Candidate[]): number {
+function widest(candidates: readonly Candidate[]): number {
   return candidates.reduce(
     (best, each, k) => (marginOf(each) >= marginOf(candidates[best] ?? each) ? k : best),
     0,
@@ -112,5 +152,5 @@ function recommended(candidates: readonly Candidate[]): number | null {
   const passing = candidates.findLast(({ verdict }) => verdict === 'pass');
   if (passing !== undefined) return passing.valueOhm;
   const inside = candidates.filter(({ verdict }) => verdict === 'marginal');
-  return inside[nearest(inside)]?.valueOhm ?? null;
+  return inside[widest(inside)]?.valueOhm ?? null;
 }

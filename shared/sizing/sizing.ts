@@ -17,7 +17,7 @@ export const Sizing = z.object({
   setBy: z.object({ min: z.string().nullable(), max: z.string().nullable() }),
   recommendedOhm: z.number().nullable(),
   candidates: z.array(Candidate),
-  /** Set when the window is empty: the two criteria in conflict and what would open it. */
-  conflict: z.object({ between: z.array(z.string()), cure: z.string() }).nullable(),
+  /** Set when the window is empty: the criteria in conflict, usually two, and in sentences what would open it. */
+  conflict: z.object({ between: z.array(z.string()), ways: z.array(z.string()) }).nullable(),
 });
 export type Sizing = z.infer<typeof Sizing>;

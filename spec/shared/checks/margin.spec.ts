@@ -1,5 +1,11 @@
 import { describe, expect, it } from 'vitest';
-import { marginOf, statusOf, verdictOf, worseOf } from '../../../shared/checks/margin.ts';
+import {
+  evenMargin,
+  marginOf,
+  statusOf,
+  verdictOf,
+  worseOf,
+} from '../../../shared/checks/margin.ts';
 
 describe('marginOf', () => {
   it('is the distance to the limit as a fraction of it', () => {
@@ -38,5 +44,19 @@ describe('verdictOf', () => {
     expect(verdictOf(['open', 'fail', 'pass'])).toBe('fail');
     expect(verdictOf([])).toBe('pass');
     expect(worseOf('fail', 'open')).toBe('fail');
+  });
+});
+
+describe('evenMargin', () => {
+  it('tells how far a figure falls short on one scale for both relations', () => {
+    // Half of what it must reach and twice what it may be are equally far off.
+    expect(evenMargin(-1, marginOf(-1, 1, 2, 0))).toBeCloseTo(-1, 12);
+    expect(evenMargin(1, marginOf(1, 4, 2, 0))).toBeCloseTo(-1, 12);
+    expect(evenMargin(-1, -1)).toBe(-Infinity);
+  });
+
+  it('leaves a met margin as it is', () => {
+    expect(evenMargin(-1, 0.2)).toBe(0.2);
+    expect(evenMargin(1, 0.2)).toBe(0.2);
   });
 });

@@ -54,7 +54,7 @@ describe('sizeStage', () => {
     const sizing = sizeStage(relayStage({ ...open, drive: weak }));
     expect(sizing).toMatchObject({ rbMinOhm: null, rbMaxOhm: null, recommendedOhm: null });
     expect([...(sizing.conflict?.between ?? [])].sort()).toEqual(['drive-current', 'forced-beta']);
-    expect(sizing.conflict?.cure).toContain('pre-driver');
+    expect(sizing.conflict?.ways.join(' ')).toContain('a transistor in front');
     expect(sizing.candidates.length).toBeGreaterThan(3);
   });
 

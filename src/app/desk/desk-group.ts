@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, input } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
-import { criterionInSentence } from '../ui/criterion-in-sentence.ts';
+import { criterionInSentence } from '../../../shared/checks/criterion-in-sentence.ts';
 import { marginText } from '../ui/fixed-figure.ts';
 import { Icon } from '../ui/icon.ts';
 import { StateChip } from '../ui/state-chip.ts';

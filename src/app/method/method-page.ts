@@ -13,7 +13,7 @@ import { CAUTIONS } from '../../../shared/method/cautions.ts';
 import { CRITERIA_TEXT } from '../../../shared/method/criteria-text.ts';
 import { DECISIONS } from '../../../shared/method/decisions.ts';
 import { GLOSSARY } from '../../../shared/method/glossary.ts';
-import { inSentence } from '../ui/criterion-in-sentence.ts';
+import { inSentence } from '../../../shared/checks/criterion-in-sentence.ts';
 import { Icon } from '../ui/icon.ts';
 import { PageHeading } from '../ui/page-focus.ts';
 import { SymbolText } from '../ui/symbol-text.ts';

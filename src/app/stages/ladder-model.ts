@@ -2,7 +2,7 @@ import type { CriterionStatus } from '../../../shared/checks/evaluation.ts';
 import { CRITERIA, type CriterionId } from '../../../shared/checks/criteria.ts';
 import type { Candidate, Sizing } from '../../../shared/sizing/sizing.ts';
 import { formatQuantity } from '../../../shared/units/engineering-notation.ts';
-import { criterionInSentence } from '../ui/criterion-in-sentence.ts';
+import { criterionInSentence } from '../../../shared/checks/criterion-in-sentence.ts';
 
 /** One rung: a preferred value with its smallest margin. */
 export interface Rung {

@@ -115,10 +115,12 @@ describe('WindowLadder', () => {
       ...SIZING,
       rbMinOhm: null,
       rbMaxOhm: null,
-      conflict: { between: ['drive-current', 'forced-beta'], cure: 'More gain opens it.' },
+      conflict: { between: ['forced-beta', 'drive-current'], ways: ['More gain opens it.'] },
     });
     await fixture.whenStable();
-    expect(page().textContent).toContain('Drive current and Forced β');
+    expect(page().textContent).toContain(
+      'forced β asks for a smaller one, drive current for a larger',
+    );
     expect(page().textContent).toContain('More gain opens it.');
   });
 });

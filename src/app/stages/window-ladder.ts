@@ -10,13 +10,14 @@ import {
   output,
   viewChild,
 } from '@angular/core';
+import { criterionInSentence } from '../../../shared/checks/criterion-in-sentence.ts';
 import type { Sizing } from '../../../shared/sizing/sizing.ts';
 import { formatPercent } from '../../../shared/units/engineering-notation.ts';
 import { Icon } from '../ui/icon.ts';
 import type { IconName } from '../ui/icon-outlines.ts';
 import { SymbolText } from '../ui/symbol-text.ts';
 import { STATUS_WORDS } from '../ui/verdict-mark.ts';
-import { BAND_HEIGHT, criterionName, ladder, type Rung } from './ladder-model.ts';
+import { BAND_HEIGHT, ladder, type Rung } from './ladder-model.ts';
 
 const ICONS: Readonly<Record<Rung['verdict'], IconName>> = {
   pass: 'circle-check',
@@ -25,6 +26,13 @@ const ICONS: Readonly<Record<Rung['verdict'], IconName>> = {
   open: 'circle-dashed',
   stated: 'info',
 };
+
+function conflictSentence(between: readonly string[]): string {
+  const [first = '', second] = between.map(criterionInSentence);
+  return second === undefined
+    ? `No preferred value meets ${first}.`
+    : `No preferred value meets both: ${first} asks for a smaller one, ${second} for a larger.`;
+}
 
 /**
  * The window for RB: every preferred value that was judged, as a rung with its smallest margin. A toolbar of
@@ -57,7 +65,7 @@ export class WindowLadder {
     const conflict = this.sizing()?.conflict ?? null;
     return conflict === null
       ? null
-      : { between: conflict.between.map(criterionName).join(' and '), cure: conflict.cure };
+      : { sentence: conflictSentence(conflict.between), ways: conflict.ways };
   });
   /** The one rung in the tab order. */
   protected readonly current = linkedSignal(() => {

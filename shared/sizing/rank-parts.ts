@@ -1,0 +1,140 @@
+import { obstacleTo } from '../checks/applicability.ts';
+import { CRITERIA, type CriterionId } from '../checks/criteria.ts';
+import { criterionInSentence } from '../checks/criterion-in-sentence.ts';
+import { evaluateStage } from '../checks/evaluate-stage.ts';
+import { type Criterion, type Evaluation, VERDICTS, type Verdict } from '../checks/evaluation.ts';
+import type { StageInput, Topology } from '../stage/stage-input.ts';
+import type { TransistorData } from '../stage/transistor-data.ts';
+import { formatPercent } from '../units/engineering-notation.ts';
+import { obstacleAt } from './judged-value.ts';
+import { sizedValues } from './size-stage.ts';
+
+/** A transistor in a stage in place of the stage's own. */
+export interface JudgedPart {
+  /** The stage with the part, its own topology and the base resistor sized for it; null where it cannot stand there. */
+  readonly stage: StageInput | null;
+  /** null where it cannot stand there. */
+  readonly verdict: Verdict | null;
+  /** Smallest margin over all criteria; null where a figure is infinite, or there is none. */
+  readonly margin: number | null;
+  /** Criterion that decides the verdict. */
+  readonly worst: string | null;
+  /** The recommended value, else the one that comes nearest; null where the part cannot stand there. */
+  readonly baseResistorOhm: number | null;
+  /** Whether the base resistor is a recommended one. */
+  readonly sized: boolean;
+  /** One sentence: why it stands where it does. */
+  readonly reason: string;
+}
+
+/** Topologies that a low-side NPN stage changes to with the part. */
+const LOW_SIDE: readonly Topology[] = [
+  'low-side-npn',
+  'low-side-darlington',
+  'low-side-pre-biased',
+];
+
+/**
+ * Judges a transistor in a stage, with a base resistor sized for it. A low-side stage takes plain transistors,
+ * Darlingtons and pre-biased parts, each in its own topology.
+ *
+ * @param input the stage; its transistor and the value of its RB are not looked at
+ */
+export function judgePart(input: StageInput, transistor: TransistorData): JudgedPart {
+  const stage = stageWith(input, transistor);
+  if (typeof stage === 'string') return unfit(stage);
+  const obstacle = obstacleTo(stage);
+  if (obstacle !== null) return unfit(obstacle.finding.text);
+  const { recommendedOhm, nearest, dependent } = sizedValues(stage);
+  const valueOhm = recommendedOhm ?? nearest?.valueOhm ?? null;
+  const fitted = { ...stage, baseResistor: { ...stage.baseResistor, valueOhm } };
+  const evaluation = evaluateStage(fitted);
+  const deciding = decidingCriterion(evaluation);
+  const lacks = recommendedOhm === null && nearest !== null ? obstacleAt(nearest, dependent) : null;
+  return {
+    stage: fitted,
+    verdict: evaluation.verdict,
+    margin: leastMargin(evaluation.criteria),
+    worst: lacks ?? deciding?.id ?? null,
+    baseResistorOhm: valueOhm,
+    sized: recommendedOhm !== null,
+    reason:
+      lacks !== null && lacks !== 'tested-range' && evaluation.verdict === 'fail'
+        ? `No base resistor meets ${criterionInSentence(lacks)}.`
+        : reasonOf(evaluation, deciding),
+  };
+}
+
+/** The best first: by verdict, then by the smallest margin; what cannot stand there comes last. */
+export function rankParts<T extends Pick<JudgedPart, 'verdict' | 'margin'>>(
+  parts: readonly T[],
+): T[] {
+  const place = ({ verdict }: T) =>
+    verdict === null ? VERDICTS.length : VERDICTS.indexOf(verdict);
+  return [...parts].sort(
+    (a, b) => place(a) - place(b) || (b.margin ?? -Infinity) - (a.margin ?? -Infinity),
+  );
+}
+
+/** The stage with the part in it, or why that is none. */
+function stageWith(input: StageInput, transistor: TransistorData): StageInput | string {
+  const lowSide = LOW_SIDE.includes(input.topology);
+  if (transistor.internal !== null && !lowSide) {
+    return `${transistor.partNumber} brings its resistors inside: it stands in low-side stages only.`;
+  }
+  const topology = lowSide ? lowSideWith(transistor) : input.topology;
+  const shuntResistor = topology === 'low-side-pre-biased' ? null : input.shuntResistor;
+  return { ...input, topology, transistor, shuntResistor };
+}
+
+function lowSideWith({ internal, darlington }: TransistorData): Topology {
+  if (internal !== null) return 'low-side-pre-biased';
+  return darlington ? 'low-side-darlington' : 'low-side-npn';
+}
+
+function unfit(reason: string): JudgedPart {
+  return {
+    stage: null,
+    verdict: null,
+    margin: null,
+    worst: null,
+    baseResistorOhm: null,
+    sized: false,
+    reason,
+  };
+}
+
+const judged = ({ status }: Criterion) => status !== 'stated' && status !== 'open';
+
+function leastMargin(criteria: readonly Criterion[]): number | null {
+  const margins = criteria
+    .filter(judged)
+    .filter(({ margin, status }) => margin !== null || status === 'fail')
+    .map(({ margin }) => margin ?? -Infinity);
+  const least = Math.min(...margins);
+  return Number.isFinite(least) ? least : null;
+}
+
+function decidingCriterion({ criteria, verdict }: Evaluation): Criterion | undefined {
+  return criteria
+    .filter(({ status }) => status === verdict)
+    .sort((a, b) => (a.margin ?? -Infinity) - (b.margin ?? -Infinity))[0];
+}
+
+function reasonOf({ verdict, findings }: Evaluation, deciding: Criterion | undefined): string {
+  if (deciding === undefined) return findings[0]?.text ?? '';
+  const { id, margin } = deciding;
+  const beyond = findings.find((finding) => finding.id === 'outside-tested-range');
+  if (id === 'tested-range' && beyond !== undefined) return beyond.text;
+  const name = CRITERIA[id as CriterionId].name;
+  const by = margin === null ? null : formatPercent(Math.abs(margin), { digits: 2 });
+  switch (verdict) {
+    case 'fail':
+      return by === null ? `${name} is not met.` : `${name} is missed by ${by}.`;
+    case 'open':
+      return `${name} cannot be judged by the data sheet.`;
+    case 'marginal':
+    case 'pass':
+      return `Least margin ${by ?? ''}: ${criterionInSentence(id)}.`;
+  }
+}
