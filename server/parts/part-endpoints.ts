@@ -1,6 +1,7 @@
 import {
   createPart,
   listParts,
+  listRecords,
   readPart,
   readPartRevision,
   revisePart,
@@ -15,6 +16,7 @@ export function partEndpoints({ database }: { readonly database: Database }): En
   const parts = new PartService(database);
   return [
     endpoint(listParts, 'signed-in', async ({ query }) => ({ body: await parts.list(query) })),
+    endpoint(listRecords, 'signed-in', async ({ query }) => ({ body: await parts.records(query) })),
     endpoint(readPart, 'signed-in', ({ actor, params }) => parts.read(actor, params.partId)),
     endpoint(readPartRevision, 'signed-in', ({ params }) =>
       parts.readRevision(params.partRevisionId),

@@ -1,6 +1,7 @@
-import type { EntityManager } from 'typeorm';
+import { type EntityManager, In, type SelectQueryBuilder } from 'typeorm';
 import type * as z from 'zod';
-import type { listParts, PartRow } from '../../shared/contract/part.ts';
+import type { listParts, listRecords, PartRow } from '../../shared/contract/part.ts';
+import type { PartKind } from '../../shared/parts/part-record.ts';
 import { naturalOrder } from '../../shared/report/natural-order.ts';
 import { jsonText } from '../persistence/dialect.ts';
 import { PartRevisionEntity } from './part-revision-entity.ts';
@@ -60,15 +61,38 @@ async function latestRows(manager: EntityManager): Promise<Row[]> {
     .addSelect('revision.createdAtMs', 'changedAtMs')
     .addSelect('revision.search', 'search')
     .addSelect('check.partRevisionId', 'verification')
-    .where((outer) => {
-      const latest = outer
-        .subQuery()
-        .select('MAX(other.number)')
-        .from(PartRevisionEntity, 'other')
-        .where('other.partId = part.id')
-        .getQuery();
-      return `revision.number = ${latest}`;
-    })
+    .where(isLatest)
     .getRawMany<Omit<Row, 'verified'> & { verification: string | null }>();
   return rows.map(({ verification, ...row }) => ({ ...row, verified: verification !== null }));
+}
+
+/** The latest data of every part of a kind, by part number. */
+export async function latestRecords(
+  manager: EntityManager,
+  kind: PartKind,
+): Promise<z.input<typeof listRecords.reply>> {
+  const revisions = await manager
+    .createQueryBuilder(PartRevisionEntity, 'revision')
+    .innerJoin('revision.part', 'part')
+    .where(isLatest)
+    .andWhere('part.kind = :kind', { kind })
+    .getMany();
+  const ids = revisions.map(({ id }) => id);
+  const checks = await manager.findBy(PartVerificationEntity, { partRevisionId: In(ids) });
+  const verified = new Set(checks.map(({ partRevisionId }) => partRevisionId));
+  const parts = revisions.map(({ id, partId, record }) => {
+    return { partId, partRevisionId: id, verified: verified.has(id), record };
+  });
+  parts.sort((a, b) => naturalOrder(a.record.partNumber, b.record.partNumber));
+  return { parts };
+}
+
+function isLatest(outer: SelectQueryBuilder<PartRevisionEntity>): string {
+  const latest = outer
+    .subQuery()
+    .select('MAX(other.number)')
+    .from(PartRevisionEntity, 'other')
+    .where('other.partId = part.id')
+    .getQuery();
+  return `revision.number = ${latest}`;
 }

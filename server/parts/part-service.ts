@@ -1,6 +1,6 @@
 import type { EntityManager } from 'typeorm';
 import type * as z from 'zod';
-import type { createPart, listParts, verifyPart } from '../../shared/contract/part.ts';
+import type { createPart, listParts, listRecords, verifyPart } from '../../shared/contract/part.ts';
 import type { Act, Actor } from '../audit/act.ts';
 import { recordAudit } from '../audit/record-audit.ts';
 import { ApiError, notFound } from '../http/api-error.ts';
@@ -8,7 +8,7 @@ import { invalidField } from '../http/invalid-field.ts';
 import { expectVersion, type Versioned } from '../http/versioned.ts';
 import type { Database } from '../persistence/database.ts';
 import { PartEntity } from './part-entity.ts';
-import { partList } from './part-list.ts';
+import { latestRecords, partList } from './part-list.ts';
 import { answerPart, answerPartRevision, openPart, type PartAnswer } from './part-reply.ts';
 import { PartRevisionEntity } from './part-revision-entity.ts';
 import { mayKeepLibrary, mayVerify, requirePermission } from './part-rights.ts';
@@ -23,6 +23,10 @@ export class PartService {
 
   list(query: z.output<typeof listParts.query>) {
     return this.database.read((manager) => partList(manager, query));
+  }
+
+  records({ kind }: z.output<typeof listRecords.query>) {
+    return this.database.read((manager) => latestRecords(manager, kind));
   }
 
   read(actor: Actor, partId: string): Promise<PartAnswer> {

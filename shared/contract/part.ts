@@ -49,6 +49,23 @@ export const listParts = {
   reply: z.object({ parts: z.array(PartRow), matching: z.int(), total: z.int() }),
 } as const satisfies Route;
 
+/** A part of the library with its latest data whole: what a ranking over the library reads in one request. */
+export const LatestRecord = z.object({
+  partId: Id,
+  partRevisionId: Id,
+  verified: z.boolean(),
+  record: PartRecord,
+});
+export type LatestRecord = z.infer<typeof LatestRecord>;
+
+export const listRecords = {
+  method: 'GET',
+  path: '/api/part-records',
+  summary: 'The latest data of every part of a kind',
+  query: z.strictObject({ kind: PartKind }),
+  reply: z.object({ parts: z.array(LatestRecord) }),
+} as const satisfies Route;
+
 /** A part's data as they stood at one edit; never changed, only followed by a newer revision. */
 export const PartRevision = z
   .object({

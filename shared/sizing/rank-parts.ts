@@ -19,7 +19,7 @@ export interface JudgedPart {
   readonly margin: number | null;
   /** Criterion that decides the verdict. */
   readonly worst: string | null;
-  /** The recommended value, else the one that comes nearest; null where the part cannot stand there. */
+  /** The recommended value, else the one that comes nearest; 0 for none at a pre-biased part, null where it cannot stand there. */
   readonly baseResistorOhm: number | null;
   /** Whether the base resistor is a recommended one. */
   readonly sized: boolean;
@@ -45,23 +45,45 @@ export function judgePart(input: StageInput, transistor: TransistorData): Judged
   if (typeof stage === 'string') return unfit(stage);
   const obstacle = obstacleTo(stage);
   if (obstacle !== null) return unfit(obstacle.finding.text);
+  return (
+    (stage.topology === 'low-side-pre-biased' ? judgedWired(stage) : null) ?? judgedSized(stage)
+  );
+}
+
+/** A pre-biased part without an outer resistor; null where that fails. */
+function judgedWired(stage: StageInput): JudgedPart | null {
+  const evaluation = evaluateStage(withRb(stage, 0));
+  return evaluation.verdict === 'fail' ? null : judgedAs(withRb(stage, 0), evaluation, true);
+}
+
+/** With the recommended base resistor, else with the value that comes nearest. */
+function judgedSized(stage: StageInput): JudgedPart {
   const { recommendedOhm, nearest, dependent } = sizedValues(stage);
-  const valueOhm = recommendedOhm ?? nearest?.valueOhm ?? null;
-  const fitted = { ...stage, baseResistor: { ...stage.baseResistor, valueOhm } };
+  const fitted = withRb(stage, recommendedOhm ?? nearest?.valueOhm ?? null);
   const evaluation = evaluateStage(fitted);
-  const deciding = decidingCriterion(evaluation);
+  const part = judgedAs(fitted, evaluation, recommendedOhm !== null);
   const lacks = recommendedOhm === null && nearest !== null ? obstacleAt(nearest, dependent) : null;
+  if (lacks === null) return part;
+  const told = lacks !== 'tested-range' && evaluation.verdict === 'fail';
+  const reason = `No base resistor meets ${criterionInSentence(lacks)}.`;
+  return { ...part, worst: lacks, reason: told ? reason : part.reason };
+}
+
+const withRb = (stage: StageInput, valueOhm: number | null): StageInput => ({
+  ...stage,
+  baseResistor: { ...stage.baseResistor, valueOhm },
+});
+
+function judgedAs(stage: StageInput, evaluation: Evaluation, sized: boolean): JudgedPart {
+  const deciding = decidingCriterion(evaluation);
   return {
-    stage: fitted,
+    stage,
     verdict: evaluation.verdict,
     margin: leastMargin(evaluation.criteria),
-    worst: lacks ?? deciding?.id ?? null,
-    baseResistorOhm: valueOhm,
-    sized: recommendedOhm !== null,
-    reason:
-      lacks !== null && lacks !== 'tested-range' && evaluation.verdict === 'fail'
-        ? `No base resistor meets ${criterionInSentence(lacks)}.`
-        : reasonOf(evaluation, deciding),
+    worst: deciding?.id ?? null,
+    baseResistorOhm: stage.baseResistor.valueOhm,
+    sized,
+    reason: reasonOf(evaluation, deciding),
   };
 }
 

@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { SHIPPED_LIMITS } from '../../../server/http/limits.ts';
 import { loadLibrary } from '../../../server/seed/load-library.ts';
-import { listParts, Part, type PartRow } from '../../../shared/contract/part.ts';
+import { listParts, listRecords, Part, type PartRow } from '../../../shared/contract/part.ts';
 import { Problem } from '../../../shared/contract/problem.ts';
 import { Revision } from '../../../shared/contract/revision.ts';
 import { deriveTransistor } from '../../../shared/parts/derive-transistor.ts';
@@ -89,6 +89,25 @@ describe('the shipped library', () => {
     const { latest } = part;
     const one = await floor.exporter.client.get(`/api/part-revisions/${latest.id}`);
     expect(one.body.record).toEqual(latest.record);
+  });
+
+  it('gives the latest data of all parts of a kind at once', async () => {
+    const records = async () => {
+      const { body } = await floor.exporter.client.get('/api/part-records?kind=transistor');
+      return listRecords.reply.parse(body).parts;
+    };
+    const before = await records();
+    expect(before.length).toBe((await list('?kind=transistor')).matching);
+    expect(before.every(({ record }) => record.kind === 'transistor')).toBe(true);
+    const part = await read('2N5551');
+    done(await revise(part));
+    const [old, now] = [before, await records()].map((parts) =>
+      parts.find(({ record }) => record.partNumber === '2N5551'),
+    );
+    expect(old?.partRevisionId).toBe(Part.parse(part.body).latest.id);
+    expect(now?.partRevisionId).not.toBe(old?.partRevisionId);
+    expect(now).toMatchObject({ partId: old?.partId, verified: false });
+    expect((await floor.exporter.client.get('/api/part-records')).status).toBe(422);
   });
 
   it('answers 404 for what it does not have', async () => {

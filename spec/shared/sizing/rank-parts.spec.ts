@@ -49,7 +49,8 @@ describe.each([
     expect(sized.length).toBeGreaterThan(5);
     for (const { stage: own, verdict, margin, baseResistorOhm, partNumber } of sized) {
       if (own === null) throw new Error(`no stage for ${partNumber}`);
-      expect(sizeStage(own).recommendedOhm, partNumber).toBe(baseResistorOhm);
+      const wired = own.transistor.internal !== null && baseResistorOhm === 0;
+      if (!wired) expect(sizeStage(own).recommendedOhm, partNumber).toBe(baseResistorOhm);
       const evaluation = evaluateStage(own);
       expect(evaluation.verdict, partNumber).toBe(verdict);
       const margins = evaluation.criteria.map((each) => each.margin).filter((m) => m !== null);
@@ -77,6 +78,14 @@ describe('a part that is not of the stage’s kind', () => {
       shuntResistor: null,
     });
     expect(part('2N2222A').stage?.topology).toBe('low-side-npn');
+  });
+
+  it('with resistors inside does without an outer one where its input allows', () => {
+    const strong = { ...RELAY_FILE.drive, railV: { min: 4.75, max: 5.25 } };
+    const load = { kind: 'resistor', resistanceOhm: 2400, tolerance: 0.05 };
+    const found = part('DTC123J', relayStage({ drive: strong, load, clamp: null }));
+    expect(found).toMatchObject({ baseResistorOhm: 0, sized: true });
+    expect(found.verdict).not.toBe('fail');
   });
 
   it('with resistors inside stands on the low side only', () => {
