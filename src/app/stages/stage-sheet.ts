@@ -35,7 +35,7 @@ import { StageStore } from './stage-store.ts';
 import { submitNote } from './submit-note.ts';
 import type { KeepsWork } from './unsaved-guard.ts';
 import { VerdictPanel } from './verdict-panel.ts';
-import { verdictSentence } from './verdict-words.ts';
+import { countWords, verdictSentence } from './verdict-words.ts';
 import { WindowLadder } from './window-ladder.ts';
 
 type Tab = 'circuit' | 'values' | 'verdicts';
@@ -123,6 +123,7 @@ export class StageSheet implements KeepsWork {
     const evaluation = this.store.evaluation();
     return evaluation === null ? '' : verdictSentence(evaluation);
   });
+  protected readonly counts = computed(() => countWords(this.store.evaluation()?.criteria ?? []));
   protected readonly note = computed(() => {
     const view = this.view();
     return view === null ? '' : submitNote(view.revision, view.evaluation);

@@ -7,12 +7,12 @@ import { VerdictMark } from '../ui/verdict-mark.ts';
 import { criterionName } from './ladder-model.ts';
 import {
   cornerText,
+  countWords,
   cureText,
   shortCornerText,
   figureText,
   limitText,
   marginText,
-  restWords,
   standsFirst,
   verdictGroups,
   verdictSentence,
@@ -44,7 +44,9 @@ export class VerdictPanel {
     return verdictGroups(this.all() ? criteria : criteria.filter(standsFirst));
   });
   protected readonly sentence = computed(() => verdictSentence(this.evaluation()));
-  protected readonly restWords = computed(() => restWords(this.rest()));
+  protected readonly restWords = computed(
+    () => `${this.rest().length} more: ${countWords(this.rest())}`,
+  );
 
   protected readonly nameOf = ({ id }: Criterion) => criterionName(id);
   protected readonly figure = (criterion: Criterion) => figureText(criterion, criterion.value);

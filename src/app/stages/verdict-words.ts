@@ -143,10 +143,9 @@ export function cureText({ id, status }: Criterion): string | null {
   return CRITERIA_TEXT[id.startsWith(PRE) ? id.slice(PRE.length) : id]?.cure ?? null;
 }
 
-/** `11 more: 10 pass, 1 stated` */
-export function restWords(rest: readonly Criterion[]): string {
+/** How many have which status: `10 pass, 1 stated`. */
+export function countWords(criteria: readonly Criterion[]): string {
   const counts = new Map<string, number>();
-  for (const { status } of rest) counts.set(status, (counts.get(status) ?? 0) + 1);
-  const words = [...counts].map(([status, count]) => `${count} ${status}`).join(', ');
-  return `${rest.length} more: ${words}`;
+  for (const { status } of criteria) counts.set(status, (counts.get(status) ?? 0) + 1);
+  return [...counts].map(([status, count]) => `${count} ${status}`).join(', ');
 }
