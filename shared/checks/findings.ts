@@ -1,8 +1,10 @@
 import { isHighSide } from '../stage/drive-source.ts';
+import type { StageInput } from '../stage/stage-input.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { formatQuantity } from '../units/engineering-notation.ts';
 import type { Criterion, Finding } from './evaluation.ts';
 import { largestInrushA } from './load.ts';
+import { clampFault, type ClampFault, REVERSE_FACTOR, takesSupply } from './own-faults.ts';
 import type { CornerTraits } from './stage-judge.ts';
 
 /** A finding, and whether the stage fails by it alone. */
@@ -169,7 +171,7 @@ function cannotTurnOff({ input, nominal }: StageModel): Remark {
 function onLoad(model: StageModel, criteria: readonly Criterion[]): Remark[] {
   const { input, conditions } = model;
   const { load, supplyV } = input;
-  if (load.kind === 'led-string' && conditions.some(({ availableV }) => availableV <= 0)) {
+  if (conditions.some(({ availableV }) => takesSupply(input, availableV))) {
     return [
       defect(
         'leds-take-the-supply',
@@ -188,48 +190,25 @@ function onLoad(model: StageModel, criteria: readonly Criterion[]): Remark[] {
   ];
 }
 
+const CLAMP_DEFECTS: Record<ClampFault, (input: StageInput) => string> = {
+  'no-clamp': () =>
+    'The coil has no clamp: its stored energy breaks the transistor down at turn-off. Fit a diode across the coil.',
+  'clamp-conducts-at-supply': () =>
+    'The clamp across the transistor conducts at the highest supply: the load never switches off. Choose a higher voltage.',
+  'diode-reverse-voltage': ({ clamp, supplyV }) =>
+    `The clamp diode's reverse rating of ${clamp.reverseV ?? 0} V is below twice the highest supply, ${(REVERSE_FACTOR * supplyV.max).toPrecision(3)} V.`,
+};
+
 function onClamp(model: StageModel): Remark[] {
   const { input, clamp } = model;
-  if (input.load.kind !== 'coil') return [];
-  if (clamp === null) {
-    return [
-      defect(
-        'no-clamp',
-        'The coil has no clamp: its stored energy breaks the transistor down at turn-off. Fit a diode across the coil.',
-      ),
-    ];
-  }
-  if (clamp.standOffV !== null) {
-    return clamp.standOffV > input.supplyV.max
-      ? []
-      : [
-          defect(
-            'clamp-conducts-at-supply',
-            'The clamp across the transistor conducts at the highest supply: the load never switches off. Choose a higher voltage.',
-          ),
-        ];
-  }
-  return onDiode(input.clamp.reverseV, input.supplyV.max);
-}
-
-const REVERSE_FACTOR = 2;
-
-function onDiode(reverseV: number | null, supplyV: number): Remark[] {
-  const neededV = REVERSE_FACTOR * supplyV;
-  if (reverseV === null) {
-    return [
-      note(
-        'diode-reverse-voltage-unknown',
-        `The clamp diode's reverse rating is not stated: it should be at least twice the highest supply, ${neededV.toPrecision(3)} V.`,
-      ),
-    ];
-  }
-  return reverseV >= neededV
-    ? []
-    : [
-        defect(
-          'diode-reverse-voltage',
-          `The clamp diode's reverse rating of ${reverseV} V is below twice the highest supply, ${neededV.toPrecision(3)} V.`,
-        ),
-      ];
+  const fault = clampFault(model);
+  if (fault !== null) return [defect(fault, CLAMP_DEFECTS[fault](input))];
+  if (clamp?.standOffV !== null || input.clamp.reverseV !== null) return [];
+  const neededV = REVERSE_FACTOR * input.supplyV.max;
+  return [
+    note(
+      'diode-reverse-voltage-unknown',
+      `The clamp diode's reverse rating is not stated: it should be at least twice the highest supply, ${neededV.toPrecision(3)} V.`,
+    ),
+  ];
 }

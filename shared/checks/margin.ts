@@ -37,6 +37,16 @@ export function evenMargin(sign: number, margin: number): number {
   return sign < 0 && margin < 0 ? 1 - 1 / Math.max(0, 1 + margin) : margin;
 }
 
+/**
+ * Whether a figure meets its limit: where its margin is not below 0. Nothing is asked of it without a limit (NaN).
+ *
+ * @param sign 1 for a figure that must not exceed its limit, −1 for one that must reach it
+ */
+export function meets(sign: number, value: number, limit: number): boolean {
+  if (Number.isNaN(limit)) return true;
+  return sign > 0 ? value <= limit && limit > 0 : value >= limit;
+}
+
 /** Status of a margin: at least the policy's band is a pass, met at all is marginal. */
 export function statusOf(
   margin: number,

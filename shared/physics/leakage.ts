@@ -62,7 +62,7 @@ export function leakageA(table: LeakageTable, degC: number): number {
   const last = table.degC.length - 1;
   const hottest = table.degC[last] ?? SHEET_DEG_C;
   if (degC >= hottest) {
-    return (table.currentA[last] ?? 0) * Math.pow(2, (degC - hottest) / table.doublingK);
+    return (table.currentA[last] ?? 0) * Math.exp((Math.LN2 * (degC - hottest)) / table.doublingK);
   }
   if (degC <= (table.degC[0] ?? SHEET_DEG_C)) return table.currentA[0] ?? 0;
   let k = 0;

@@ -2,6 +2,7 @@ import { copperRatio } from '../physics/coil.ts';
 import { lampSteadyA } from '../physics/lamp.ts';
 import type { LedStringLoad } from './load.ts';
 import type { StageInput } from './stage-input.ts';
+import type { Writable } from './writable.ts';
 
 /** The load as the collector sees it: what voltage is there to drop, and over what resistance. */
 export interface CollectorPath {
@@ -30,30 +31,27 @@ export function loadDegC(input: StageInput, { ambientDegC, settled }: LoadEnds):
 /** Smallest resistance a load is taken for, Ω: copper near absolute zero must not divide by nothing. */
 const SMALLEST_LOAD_OHM = 1e-9;
 
-export function collectorPath(input: StageInput, supplyV: number, ends: LoadEnds): CollectorPath {
+/** Writes what the collector sees. */
+export function setCollectorPath(
+  path: Writable<CollectorPath>,
+  input: StageInput,
+  supplyV: number,
+  ends: LoadEnds,
+): void {
   const { load } = input;
-  switch (load.kind) {
-    case 'coil': {
-      const ratio = copperRatio(loadDegC(input, ends), load.referenceDegC);
-      const loadOhm = load.resistanceOhm * (1 + ends.sign * load.tolerance) * ratio;
-      return { availableV: supplyV, loadOhm: Math.max(SMALLEST_LOAD_OHM, loadOhm) };
-    }
-    case 'resistor':
-      return {
-        availableV: supplyV,
-        loadOhm: load.resistanceOhm * (1 + ends.sign * load.tolerance),
-      };
-    case 'led-string':
-      return {
-        availableV: supplyV - load.count * forwardV(load, ends),
-        loadOhm: load.resistanceOhm * (1 + ends.sign * load.tolerance),
-      };
-    case 'lamp':
-      return { availableV: supplyV, loadOhm: supplyV / lampSteadyA(load, supplyV) };
-    case 'logic-input': {
-      const loadOhm = load.pullUpOhm * (1 + ends.sign * load.tolerance);
-      return { availableV: supplyV + load.count * load.lowCurrentA * loadOhm, loadOhm };
-    }
+  path.availableV = supplyV;
+  if (load.kind === 'coil') {
+    const ratio = copperRatio(loadDegC(input, ends), load.referenceDegC);
+    const loadOhm = load.resistanceOhm * (1 + ends.sign * load.tolerance) * ratio;
+    path.loadOhm = Math.max(SMALLEST_LOAD_OHM, loadOhm);
+  } else if (load.kind === 'lamp') {
+    path.loadOhm = supplyV / lampSteadyA(load, supplyV);
+  } else if (load.kind === 'logic-input') {
+    path.loadOhm = load.pullUpOhm * (1 + ends.sign * load.tolerance);
+    path.availableV = supplyV + load.count * load.lowCurrentA * path.loadOhm;
+  } else {
+    path.loadOhm = load.resistanceOhm * (1 + ends.sign * load.tolerance);
+    if (load.kind === 'led-string') path.availableV = supplyV - load.count * forwardV(load, ends);
   }
 }
 

@@ -202,8 +202,10 @@ export class OperatingPoint {
    * lowest counts: it is the one a stage switched on at ambient comes to.
    *
    * @param guessDegC where to start a saturated corner, which has one only; the sooner found the nearer
+   * @param nearK how near it must be brought
+   * @param feedback what the balance is expected to move by with the junction, K per K
    */
-  settle(guessDegC: number): void {
+  settle(guessDegC: number, nearK = NEAR_K, feedback = 0): void {
     const ambient = this.condition.ambientDegC;
     const rth = this.model.part.rthJaKPerW ?? 0;
     this.runaway = false;
@@ -213,13 +215,13 @@ export class OperatingPoint {
       return;
     }
     let gap0 = ambient + rth * this.powerW - t0;
-    let t1 = t0 + gap0;
+    let t1 = t0 + gap0 / (1 - feedback);
     for (let step = 0; step < SECANT_STEPS; step++) {
-      if (Math.abs(gap0) < NEAR_K) return;
+      if (Math.abs(gap0) < nearK) return;
       if (!(t1 >= ambient && t1 < RUNAWAY_DEG_C)) break;
       if (!this.solve(t1)) break;
       const gap1 = ambient + rth * this.powerW - t1;
-      if (Math.abs(gap1) < NEAR_K) return;
+      if (Math.abs(gap1) < nearK) return;
       const next = t1 - (gap1 * (t1 - t0)) / (gap1 - gap0);
       t0 = t1;
       gap0 = gap1;

@@ -2,7 +2,7 @@ import { maximumVbeV, minimumVbeV, vbeBetweenV } from '../physics/base-emitter.t
 import { gainBetween, maximumGain, minimumGain } from '../physics/gain.ts';
 import { pieceAt } from '../physics/saturation.ts';
 import { type ClampVoltages, clampVoltages } from './clamp-voltages.ts';
-import { collectorPath, loadDegC, type LoadEnds } from './collector-path.ts';
+import { loadDegC, type LoadEnds, setCollectorPath } from './collector-path.ts';
 import { cornerSpace, type CornerSpace, type CornerVariable } from './corners.ts';
 import { type DriveSource, driveSource } from './drive-source.ts';
 import { insideModel, type InsideModel } from './internal-resistors.ts';
@@ -183,14 +183,12 @@ export function setLoadCondition(
   ends: LoadEnds,
   seriesV: number,
 ): void {
-  const path = collectorPath(input, supplyV, ends);
-  const availableV = path.availableV - seriesV;
-  const fullA = Math.max(0, availableV) / path.loadOhm;
+  setCollectorPath(condition, input, supplyV, ends);
+  condition.availableV -= seriesV;
+  const fullA = Math.max(0, condition.availableV) / condition.loadOhm;
   condition.supplyV = supplyV;
   condition.ambientDegC = ends.ambientDegC;
   condition.coilDegC = loadDegC(input, ends);
-  condition.availableV = availableV;
-  condition.loadOhm = path.loadOhm;
   condition.fullA = fullA;
   const { gain, baseEmitter, saturation } = part;
   condition.piece = saturation === null ? 0 : pieceAt(saturation, fullA);
