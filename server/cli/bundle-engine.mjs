@@ -14,9 +14,7 @@ const ROOT = fileURLToPath(new URL('../../', import.meta.url));
 const CACHE = join(ROOT, 'node_modules', '.cache', 'sinkwell');
 
 /**
- * Bundles a TypeScript entry of this project with everything it imports and loads it. The bundle is kept in
- * node_modules/.cache under a hash of all sources, so that the second start costs next to nothing and an
- * edited source is never missed.
+ * Bundles a TypeScript entry of this project with everything it imports and loads it.
  *
  * @param {string} entry path from the project's root
  * @param {string[]} folders where the entry and all it imports live
@@ -24,9 +22,20 @@ const CACHE = join(ROOT, 'node_modules', '.cache', 'sinkwell');
  * @throws {Error} if the packages are not installed
  */
 export async function loadBundled(entry, folders) {
+  return import(pathToFileURL(await bundledFile(entry, folders)).href);
+}
+
+/**
+ * Bundles a TypeScript entry of this project into plain JavaScript. The bundle is kept in node_modules/.cache under a
+ * hash of all sources, so that the second start costs next to nothing and an edited source is never missed.
+ *
+ * @returns {Promise<string>} the bundle's path
+ * @throws {Error} if the packages are not installed
+ */
+export async function bundledFile(entry, folders) {
   const file = join(CACHE, `${entry.replace(/\W+/g, '-')}-${sourceHash(folders)}.mjs`);
   if (!existsSync(file)) await bundle(entry, file);
-  return import(pathToFileURL(file).href);
+  return file;
 }
 
 async function bundle(entry, file) {

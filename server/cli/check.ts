@@ -2,10 +2,11 @@ import { readFile } from 'node:fs/promises';
 import { text } from 'node:stream/consumers';
 import { judgeStage } from '../../shared/sizing/judge-stage.ts';
 import { stageResult } from '../../shared/sizing/result.ts';
+import { statisticsOf } from '../../shared/statistics/monte-carlo.ts';
 import { StageInput } from '../../shared/stage/stage-input.ts';
 import { stageIssues } from '../../shared/stage/stage-issues.ts';
-
-const USAGE = 'Usage: npm run --silent check -- FILE [FILE …]   (- reads standard input)';
+import { CheckOptions, Misused } from './check-options.ts';
+import { spreadOnThreads } from './sample-threads.ts';
 
 /** Exit codes: every stage pass or marginal · one failing or open · one file that cannot be read. */
 const MET = 0;
@@ -18,22 +19,22 @@ class Unreadable extends Error {}
 /**
  * Judges stage files: one `sinkwell-result/1` per file and line on standard output, errors on standard error.
  *
- * @param args file names; `-` is standard input
+ * @param args file names and options; `-` is standard input
+ * @param threadFile plain JavaScript of `sample-thread.ts`
  * @returns the exit code
  */
-export async function check(args: readonly string[]): Promise<number> {
-  const option = args.find((arg) => arg.startsWith('-') && arg !== '-');
-  if (option !== undefined) return refuse(optionRefusal(option));
-  if (args.length === 0) return refuse(`Name at least one stage file.\n${USAGE}`);
-  let code = MET;
-  for (const file of args) code = Math.max(code, await checkFile(file));
-  return code;
-}
-
-function optionRefusal(option: string): string {
-  return /^--(samples|seed)\b/.test(option)
-    ? `${option}: Monte-Carlo statistics are not available in this version.`
-    : `${option}: unknown option.\n${USAGE}`;
+export async function check(args: readonly string[], threadFile: string): Promise<number> {
+  try {
+    const options = new CheckOptions(args);
+    let code = MET;
+    for (const file of options.files) {
+      code = Math.max(code, await checkFile(file, options, threadFile));
+    }
+    return code;
+  } catch (error) {
+    if (error instanceof Misused) return refuse(error.message);
+    throw error;
+  }
 }
 
 function refuse(reason: string): number {
@@ -41,10 +42,21 @@ function refuse(reason: string): number {
   return UNREADABLE;
 }
 
-async function checkFile(file: string): Promise<number> {
+async function checkFile(
+  file: string,
+  { samples }: CheckOptions,
+  threadFile: string,
+): Promise<number> {
   try {
     const judged = judgeStage(await readStage(file));
-    process.stdout.write(`${JSON.stringify(stageResult(judged))}\n`);
+    const result = stageResult(judged);
+    const sampled =
+      samples === null
+        ? {}
+        : {
+            statistics: statisticsOf(await spreadOnThreads(judged.input, samples, { threadFile })),
+          };
+    process.stdout.write(`${JSON.stringify({ ...result, ...sampled })}\n`);
     const { verdict } = judged.evaluation;
     return verdict === 'pass' || verdict === 'marginal' ? MET : NOT_MET;
   } catch (error) {

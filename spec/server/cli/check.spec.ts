@@ -89,9 +89,44 @@ describe('check', { timeout: 120_000 }, () => {
     expect(run([folder]).status).toBe(2);
     expect(run([]).status).toBe(2);
     expect(run(['--bogus']).status).toBe(2);
-    const sampled = run([file('a.json', sized), '--samples', '1000', '--seed', '7']);
-    expect(sampled.status).toBe(2);
-    expect(sampled.lines).toEqual([]);
-    expect(sampled.stderr).toContain('not available in this version');
+  });
+
+  it('adds the statistics of stated samples and seed, the same bytes at every run', () => {
+    const args = [file('a.json', sized), '--samples', '120000', '--seed', '7'];
+    const first = run(args);
+    expect(first.status).toBe(0);
+    expect(run(args).lines).toEqual(first.lines);
+    const { statistics, ...plain } = JSON.parse(first.lines[0] ?? '') as {
+      statistics: { yield: number; percentiles: Record<string, number[]> };
+    };
+    expect(Object.keys(statistics)).toEqual(['samples', 'seed', 'yield', 'percentiles']);
+    expect(statistics).toMatchObject({ samples: 120_000, seed: 7 });
+    expect(statistics.yield).toBeGreaterThan(0.9);
+    expect(Object.keys(statistics.percentiles)).toEqual([
+      'overdriveFactor',
+      'vceSatV',
+      'icA',
+      'powerW',
+      'tjDegC',
+    ]);
+    expect(statistics.percentiles['overdriveFactor']).toHaveLength(3);
+    expect(run([file('a.json', sized)]).lines).toEqual([JSON.stringify(plain)]);
+    expect(run(['--samples=120000', '--seed=7', file('a.json', sized)]).lines).toEqual(first.lines);
+  });
+
+  it.each([
+    [['--samples'], '--samples: expected a whole number from 1 to 10000000.'],
+    [['--samples', '0'], '--samples: expected a whole number'],
+    [['--samples', '1e5'], '--samples: expected a whole number'],
+    [['--samples', '10000001'], '--samples: expected a whole number'],
+    [['--samples', '10', '--seed', '-1'], '--seed: expected a whole number from 0'],
+    [['--samples', '10', '--seed', '9007199254740992'], '--seed: expected a whole number'],
+    [['--samples', '10', '--samples', '20'], '--samples: given twice.'],
+    [['--seed', '7'], '--seed: expected --samples beside it.'],
+  ])('exits 2 for %j and says why', (options, reason) => {
+    const { status, lines, stderr } = run([file('a.json', sized), ...options]);
+    expect(status).toBe(2);
+    expect(lines).toEqual([]);
+    expect(stderr).toContain(reason);
   });
 });
