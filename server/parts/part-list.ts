@@ -55,6 +55,8 @@ async function latestRows(manager: EntityManager): Promise<Row[]> {
     .addSelect('part.partNumber', 'partNumber')
     .addSelect('revision.summary', 'summary')
     .addSelect(jsonText('revision.record', 'package'), 'package')
+    .addSelect(jsonText('revision.record', 'family'), 'family')
+    .addSelect(jsonText('revision.record', 'polarity'), 'polarity')
     .addSelect(jsonText('revision.record', 'confidence'), 'confidence')
     .addSelect('revision.id', 'latestRevisionId')
     .addSelect('revision.number', 'revision')

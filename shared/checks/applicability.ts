@@ -1,33 +1,6 @@
-import type { Load } from '../stage/load.ts';
-import type { StageInput, Topology } from '../stage/stage-input.ts';
+import type { StageInput } from '../stage/stage-input.ts';
+import { needsOf } from '../stage/topology-needs.ts';
 import type { Finding, Verdict } from './evaluation.ts';
-
-interface TopologyNeeds {
-  readonly polarity: 'npn' | 'pnp';
-  readonly loads: readonly Load['kind'][];
-}
-
-/** What a topology's output transistor must be and what it can drive; topologies not listed are not judged yet. */
-const NEEDS: Partial<Record<Topology, TopologyNeeds>> = {
-  'low-side-npn': {
-    polarity: 'npn',
-    loads: ['coil', 'resistor', 'led-string', 'lamp', 'logic-input'],
-  },
-  'high-side-pnp': { polarity: 'pnp', loads: ['coil', 'resistor', 'led-string', 'lamp'] },
-  'two-transistor-high-side': {
-    polarity: 'pnp',
-    loads: ['coil', 'resistor', 'led-string', 'lamp'],
-  },
-  'low-side-darlington': {
-    polarity: 'npn',
-    loads: ['coil', 'resistor', 'led-string', 'lamp', 'logic-input'],
-  },
-  'low-side-pre-biased': {
-    polarity: 'npn',
-    loads: ['coil', 'resistor', 'led-string', 'lamp', 'logic-input'],
-  },
-  'level-translator': { polarity: 'npn', loads: ['logic-input'] },
-};
 
 /** Why a stage cannot be run through its corners at all, and the verdict that gives. */
 export interface Obstacle {
@@ -37,11 +10,8 @@ export interface Obstacle {
 
 /** @returns null where the stage can be judged */
 export function obstacleTo(input: StageInput): Obstacle | null {
-  const needs = NEEDS[input.topology];
+  const needs = needsOf(input.topology);
   const { transistor, topology, load } = input;
-  if (needs === undefined) {
-    return notJudged(`This version does not judge the topology ${topology} yet.`);
-  }
   if (!needs.loads.includes(load.kind)) {
     return notJudged(`A load of kind ${load.kind} is not judged in the topology ${topology}.`);
   }

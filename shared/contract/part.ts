@@ -25,6 +25,9 @@ export const PartRow = z.object({
   /** One line: "NPN, 40 V, 0.2 A". */
   summary: z.string(),
   package: z.string().nullable(),
+  /** Of the record, where its kind has them. */
+  family: z.string().nullable(),
+  polarity: z.string().nullable(),
   confidence: Confidence,
   latestRevisionId: Id,
   revision: z.int(),
