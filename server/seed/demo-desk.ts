@@ -41,15 +41,20 @@ export class DemoDesk {
 
   /** A stage filled from the library. */
   async draft(projectId: string, stage: DemoStage, [day, clock]: When): Promise<RevisionAnswer> {
-    const transistor = await this.#latest(stage.transistor);
-    if (transistor.record.kind !== 'transistor') throw new Error(`no ${stage.transistor}`);
-    const derived = deriveTransistor(transistor.record);
-    if (!derived.ok) throw new Error(derived.reason);
+    const transistor = await this.#transistor(stage.transistor);
+    const { designator = null, transistor: frontNumber, ...network } = stage.preDriver ?? {};
+    const front = frontNumber === undefined ? null : await this.#transistor(frontNumber);
+    const preDriver = front && { ...network, transistor: front.data };
     const load = stage.load === undefined ? null : await this.#latest(stage.load);
     const link = (id: string) => ({ partRevisionId: id, choice: {} });
     const made = await this.#stages.create(this.crew.act('designer', day, clock), projectId, {
-      definition: StageInput.parse({ ...stage.file, transistor: derived.data }),
-      parts: { transistor: link(transistor.id), load: load && link(load.id) },
+      definition: StageInput.parse({ ...stage.file, preDriver, transistor: transistor.data }),
+      designators: { preDriver: designator },
+      parts: {
+        transistor: link(transistor.id),
+        preDriver: front && link(front.id),
+        load: load && link(load.id),
+      },
     });
     return { body: made.body.revision, etag: made.etag };
   }
@@ -137,6 +142,14 @@ export class DemoDesk {
       document: record.documents[0]?.title.slice(0, 200) ?? record.partNumber,
       note: 'Demo: shown as read back row by row. Read the sheet yourself before you rely on it.',
     });
+  }
+
+  async #transistor(partNumber: string) {
+    const { id, record } = await this.#latest(partNumber);
+    if (record.kind !== 'transistor') throw new Error(`no ${partNumber}`);
+    const derived = deriveTransistor(record);
+    if (!derived.ok) throw new Error(derived.reason);
+    return { id, data: derived.data };
   }
 
   async #latest(partNumber: string) {

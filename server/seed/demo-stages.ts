@@ -10,13 +10,20 @@ export interface DemoStage {
   readonly transistor: string;
   /** Of the invented relay part, where the coil is one of the library. */
   readonly load?: string;
-  readonly file: Omit<StageFile, 'transistor'>;
+  /** Of the library too: the transistor in front, with its base network. */
+  readonly preDriver?: Front;
+  readonly file: Omit<StageFile, 'transistor' | 'preDriver'>;
+}
+
+interface Front extends Omit<NonNullable<StageFile['preDriver']>, 'transistor'> {
+  readonly designator: string;
+  readonly transistor: string;
 }
 
 /** Part number of the invented relay that is revised after a lock. */
 export const DEMO_RELAY = 'DEMO-RY24';
 
-type Changes = Partial<Omit<StageFile, 'transistor'>>;
+type Changes = Partial<DemoStage['file']>;
 
 const PIN = {
   kind: 'push-pull',
@@ -39,6 +46,32 @@ const OPEN_COLLECTOR = {
   leakageA: 1e-6,
   pullUp: { valueOhm: 10_000, tolerance: 0.05, ratingW: 0.25 },
 } as const;
+
+/** The same output at a 5 V rail. */
+const PIN_5V = { ...PIN, railV: { min: 4.75, max: 5.25 } } as const;
+
+const resistor = (valueOhm: number, ratingW = 0.1) => ({ valueOhm, tolerance: 0.05, ratingW });
+
+const NO_CLAMP = { clamp: null } as const;
+
+const leds = (count: number, resistanceOhm: number) => ({
+  ...{ kind: 'led-string' as const, count, resistanceOhm, tolerance: 0.05 },
+  ...{ forwardV: { min: 1.8, max: 2.2 }, maximumA: 0.02, minimumA: 0.002 },
+});
+
+/** A PNP behind an NPN, on a 3.3 V output. */
+function behind(front: Front, made: DemoStage): DemoStage {
+  return {
+    ...made,
+    preDriver: front,
+    file: {
+      ...made.file,
+      topology: 'two-transistor-high-side',
+      drive: PIN,
+      shuntResistor: resistor(10_000),
+    },
+  };
+}
 
 const coil = (resistanceOhm: number, operateV: number) => ({
   kind: 'coil' as const,
@@ -124,6 +157,56 @@ export const COLD_ROOM = {
     load: DEMO_RELAY,
   },
   spare: stage('Q15', 'Spare output', '2N3904', 680),
+  suction: behind(
+    {
+      ...{ designator: 'Q17', transistor: '2N3904' },
+      baseResistor: resistor(2200),
+      shuntResistor: resistor(22_000),
+    },
+    stage('Q16', 'Suction line valve, high side', '2N3906', 6200, {
+      load: coil(1100, 14.4),
+      baseResistor: resistor(6200, 0.5),
+    }),
+  ),
+  doorOpen: stage('Q18', 'Door open, LED string', 'DTC114E', 0, {
+    topology: 'low-side-pre-biased',
+    ambientDegC: { min: -10, max: 50 },
+    drive: PIN_5V,
+    load: leds(3, 2400),
+    shuntResistor: null,
+    ...NO_CLAMP,
+  }),
+  fanSpeed: stage('Q19', 'Speed signal to the 5 V fan drive', '2N3904', 5600, {
+    topology: 'level-translator',
+    supplyV: { min: 4.75, max: 5.25 },
+    drive: PIN,
+    ...{ frequencyHz: 10_000, duty: 0.5 },
+    load: {
+      ...{ kind: 'logic-input', pullUpOhm: 2200, tolerance: 0.05, ratingW: 0.1, count: 1 },
+      ...{ vilV: 1.5, vihV: 3.5, leakageA: 1e-6, lowCurrentA: 1e-6 },
+      ...{ capacitanceF: 1e-11, wiringF: 3e-11, riseTimeLimitSec: 1e-6 },
+    },
+    ...NO_CLAMP,
+  }),
+  water: stage('Q20', 'Defrost water valve, 12 V', 'MPSA14', 560, {
+    topology: 'low-side-darlington',
+    supplyV: { min: 10.8, max: 13.2 },
+    drive: PIN_5V,
+    load: { ...coil(270, 7.2), releaseV: 1.2, maximumV: 15.6, inductanceH: 0.8 },
+    baseResistor: resistor(560, 0.25),
+    shuntResistor: resistor(47_000),
+  }),
+  pilotLamp: stage('Q21', 'Pilot lamp, panel', '2N4401', 470, {
+    drive: PIN_5V,
+    load: { kind: 'lamp', nominalV: 24, currentA: 0.02, coldRatio: 10 },
+    baseResistor: resistor(470, 0.25),
+    ...NO_CLAMP,
+  }),
+  frame: stage('Q22', 'Window frame heater, pulsed', '2N3904', 820, {
+    ...{ frequencyHz: 1000, duty: 0.5 },
+    load: { kind: 'resistor', resistanceOhm: 1500, tolerance: 0.05 },
+    ...NO_CLAMP,
+  }),
 } as const;
 
 const STRICT: Changes = { policy: { name: 'High reliability' } };
@@ -144,5 +227,21 @@ export const IRRIGATION = {
     ...STRICT,
     load: { kind: 'resistor', resistanceOhm: 1500, tolerance: 0.05 },
     clamp: null,
+  }),
+  zone3: behind(
+    {
+      ...{ designator: 'Q8', transistor: '2N3904' },
+      baseResistor: resistor(3300),
+      shuntResistor: resistor(22_000),
+    },
+    stage('Q6', 'Zone 3 valve, high side', '2N3906', 9100, {
+      ...STRICT,
+      baseResistor: resistor(9100, 0.5),
+    }),
+  ),
+  running: stage('Q7', 'Pump running, LED string', '2N3904', 1200, {
+    ...STRICT,
+    load: leds(5, 1500),
+    ...NO_CLAMP,
   }),
 } as const;

@@ -78,6 +78,9 @@ export class DemoStory {
       reviews.locked(COLD_ROOM.sounder, 2, '09', -0.014),
       reviews.locked(COLD_ROOM.condenser, 3, '09', 0.061),
       reviews.revised(fan, 390, 4),
+      reviews.locked(COLD_ROOM.suction, 3, '08', 0.024),
+      reviews.locked(COLD_ROOM.fanSpeed, 4, '10', -0.008),
+      reviews.locked(COLD_ROOM.doorOpen, 2, '10', 0),
     ];
     this.#note(projectId, locked);
     reviews.checked(COLD_ROOM.drain, 5, '09', -0.022);
@@ -87,6 +90,9 @@ export class DemoStory {
     reviews.withFindings(COLD_ROOM.supervisory);
     reviews.returned(COLD_ROOM.humidifier);
     reviews.withdrawn(COLD_ROOM.spare);
+    reviews.checked(COLD_ROOM.water, 5, '08', 0.011);
+    reviews.submitted(COLD_ROOM.pilotLamp, [6, '09:15'], [6, '09:50']);
+    reviews.draft(COLD_ROOM.frame, [7, '14:20']);
     reviews.draft(COLD_ROOM.roomLight, [7, '15:10']);
     reviews.draft(COLD_ROOM.agitator, [8, '08:30']);
   }
@@ -97,6 +103,8 @@ export class DemoStory {
     reviews.checked(IRRIGATION.panel, 4, '11', 0.004);
     reviews.draft(IRRIGATION.zone2, [6, '16:20']);
     reviews.draft(IRRIGATION.pump, [7, '16:00']);
+    reviews.submitted(IRRIGATION.zone3, [6, '13:10'], [6, '15:30']);
+    reviews.draft(IRRIGATION.running, [7, '10:45']);
     reviews.submitted(IRRIGATION.zone1, [7, '08:50'], [8, '09:15']);
   }
 

@@ -9,6 +9,7 @@ import { Desk } from '../../../shared/contract/desk.ts';
 import { listProjects } from '../../../shared/contract/project.ts';
 import { Revision } from '../../../shared/contract/revision.ts';
 import { listStages, type StageRow } from '../../../shared/contract/stage.ts';
+import { TOPOLOGIES } from '../../../shared/stage/stage-input.ts';
 import { TestServer } from '../test-server.ts';
 import type { TestClient } from '../test-client.ts';
 
@@ -48,8 +49,9 @@ describe('the demo', () => {
     expect(new Set(rows.map(({ verdict }) => verdict))).toEqual(
       new Set(['pass', 'marginal', 'open', 'fail']),
     );
-    expect(new Set(rows.map(({ topology }) => topology))).toEqual(
-      new Set(['low-side-npn', 'high-side-pnp']),
+    expect(new Set(rows.map(({ topology }) => topology))).toEqual(new Set(TOPOLOGIES));
+    expect(new Set(rows.map(({ loadKind }) => loadKind))).toEqual(
+      new Set(['coil', 'resistor', 'led-string', 'lamp', 'logic-input']),
     );
     expect(rows.filter(({ partDataChanged }) => partDataChanged)).toHaveLength(1);
   });
