@@ -1,5 +1,6 @@
 import type { FittedResistor } from '../stage/drive.ts';
 import type { Load } from '../stage/load.ts';
+import type { StageInput } from '../stage/stage-input.ts';
 import type { TransistorData } from '../stage/transistor-data.ts';
 import type { NoteSource, PartPlace } from './bom-note-source.ts';
 import { clampParts } from './clamp-parts.ts';
@@ -23,9 +24,14 @@ export function fittedParts(source: NoteSource): FittedPart[] {
   ];
 }
 
+/** A transistor in front is fitted where the topology has one, whatever the file carries. */
+const frontOf = ({ topology, preDriver }: StageInput) =>
+  topology === 'two-transistor-high-side' ? preDriver : null;
+
 function transistors(source: NoteSource): FittedPart[] {
   const { definition, designators } = source;
-  const { transistor, preDriver, reference } = definition;
+  const { transistor, reference } = definition;
+  const preDriver = frontOf(definition);
   const common = { family: 'transistor', source } as const;
   const main: FittedPart = {
     ...common,
@@ -66,7 +72,8 @@ function transistorLink(source: NoteSource, role: 'transistor' | 'preDriver') {
 type Resistor = Omit<FittedResistor, 'valueOhm'> & { valueOhm: number | null };
 
 function resistors(source: NoteSource): FittedPart[] {
-  const { baseResistor, shuntResistor, drive, preDriver, load } = source.definition;
+  const { baseResistor, shuntResistor, drive, load } = source.definition;
+  const preDriver = frontOf(source.definition);
   const valueOhm = baseResistor.valueOhm ?? source.evaluation.baseResistorOhm;
   const collector: Resistor | null =
     load.kind === 'logic-input' ? { ...load, valueOhm: load.pullUpOhm } : null;
