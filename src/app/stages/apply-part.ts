@@ -4,18 +4,10 @@ import { deriveDrive, drivePoints } from '../../../shared/parts/derive-drive.ts'
 import { deriveLoad } from '../../../shared/parts/derive-load.ts';
 import { deriveTransistor } from '../../../shared/parts/derive-transistor.ts';
 import { refused, type Derived } from '../../../shared/parts/derived.ts';
-import type { PartKind, PartRecord } from '../../../shared/parts/part-record.ts';
+import type { PartRole } from '../../../shared/parts/part-fit.ts';
+import type { PartRecord } from '../../../shared/parts/part-record.ts';
+import { clampFor } from './sample-stage.ts';
 import { StageInput } from '../../../shared/stage/stage-input.ts';
-
-/** Places of a stage that a part from the library can fill. */
-export type PartRole = 'transistor' | 'load' | 'drive' | 'clamp';
-
-export const KIND_OF_ROLE: Readonly<Record<PartRole, PartKind>> = {
-  transistor: 'transistor',
-  load: 'load',
-  drive: 'logic-output',
-  clamp: 'diode',
-};
 
 /** Keys of the choices made about a record; '' leaves one open. */
 export type Choice = Readonly<Record<string, string>>;
@@ -40,11 +32,19 @@ export function applyPart(
       (transistor) => ({ ...stage, transistor }),
     );
   }
+  const { preDriver } = stage;
+  if (role === 'preDriver' && record.kind === 'transistor' && preDriver !== null) {
+    return fitted(
+      deriveTransistor(record, { group: chosen(choice, 'group'), maker: chosen(choice, 'maker') }),
+      (transistor) => ({ ...stage, preDriver: { ...preDriver, transistor } }),
+    );
+  }
   if (role === 'load' && record.kind === 'load') {
     const coil = Number(choice['coil'] ?? 0);
     return fitted(deriveLoad(record, { coil, contacts: chosen(choice, 'contacts') }), (load) => ({
       ...stage,
       load,
+      clamp: clampFor(load, stage.clamp),
     }));
   }
   if (role === 'drive' && record.kind === 'logic-output') {

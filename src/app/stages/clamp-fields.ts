@@ -8,12 +8,15 @@ const kinds =
 const clamp = { group: 'clamp', part: 'clamp' } as const;
 const zener = kinds('diode-zener', 'zener-across-transistor', 'tvs-across-transistor');
 const diode = kinds('diode', 'diode-zener');
+const clampable = ({ loadKind, clampKind }: StageShape) =>
+  loadKind === 'coil' || clampKind !== 'none';
 const fitted = ({ clampKind }: StageShape) => clampKind !== 'none';
 
 /** What takes the coil's energy at turn-off. */
 export const CLAMP_FIELDS = {
   'clamp/kind': {
     ...clamp,
+    when: clampable,
     kind: 'choice',
     label: 'Kind',
     note: 'and where it sits',

@@ -41,7 +41,13 @@ function items(): readonly Item[] {
     value: ({ definition, parts }) => [definition.transistor, parts.transistor],
     text: ({ definition }) => definition.transistor.partNumber,
   };
-  return [...fields, transistor, ...designatorItems(), ...linkItems()];
+  const preDriver: Item = {
+    key: 'preDriver',
+    label: 'Pre-driver: part and data',
+    value: ({ definition, parts }) => [definition.preDriver?.transistor ?? null, parts.preDriver],
+    text: ({ definition }) => definition.preDriver?.transistor.partNumber ?? '–',
+  };
+  return [...fields, transistor, preDriver, ...designatorItems(), ...linkItems()];
 }
 
 function designatorItems(): readonly Item[] {
@@ -51,6 +57,10 @@ function designatorItems(): readonly Item[] {
     'pullUp',
     'speedUpCapacitor',
     'load',
+    'loadResistor',
+    'preDriver',
+    'preBaseResistor',
+    'preShuntResistor',
     'clamp',
     'clampZener',
     'drive',
@@ -109,7 +119,11 @@ export function merged(
   const mixed = Object.fromEntries(
     FIELD_PATHS.map((path) => [path, sides.get(path) === 'theirs' ? other[path] : value[path]]),
   ) as unknown as typeof value;
-  const base = { ...yours.definition, transistor: from('transistor').definition.transistor };
+  const base = {
+    ...yours.definition,
+    transistor: from('transistor').definition.transistor,
+    preDriver: from('preDriver').definition.preDriver,
+  };
   const reading = formToStage(mixed, base);
   if (!reading.ok) return null;
   const designators = Object.fromEntries(
@@ -124,6 +138,7 @@ export function merged(
     parts: {
       ...yours.parts,
       transistor: from('transistor').parts.transistor,
+      preDriver: from('preDriver').parts.preDriver,
       load: from('parts.load').parts.load,
       drive: from('parts.drive').parts.drive,
       clamp: from('parts.clamp').parts.clamp,

@@ -5,12 +5,16 @@ import { Icon } from '../ui/icon.ts';
 
 type Key = keyof Designators;
 
-const NAMES: Readonly<Partial<Record<Key, string>>> = {
+const NAMES: Readonly<Record<Key, string>> = {
   baseResistor: 'Base resistor',
   shuntResistor: 'Base–emitter resistor',
+  preDriver: 'Pre-driver',
+  preBaseResistor: 'Its base resistor',
+  preShuntResistor: 'Its base–emitter resistor',
   pullUp: 'Pull-up',
   speedUpCapacitor: 'Speed-up capacitor',
   load: 'Load',
+  loadResistor: 'Series resistor',
   clamp: 'Clamp',
   clampZener: 'Zener of the clamp',
   drive: 'Logic output',
@@ -32,9 +36,16 @@ export class DesignatorGroup {
 
   protected readonly wrong = signal<Key | null>(null);
   protected readonly rows = computed(() => {
-    const { shuntResistor, drive, speedUpCapacitorF, clamp } = this.stage();
+    const { baseResistor, shuntResistor, drive, speedUpCapacitorF, clamp, load, ...rest } =
+      this.stage();
+    const front = rest.topology === 'two-transistor-high-side' ? rest.preDriver : null;
     const there: Partial<Record<Key, boolean>> = {
+      baseResistor: baseResistor.valueOhm !== 0,
       shuntResistor: shuntResistor !== null,
+      preDriver: front !== null,
+      preBaseResistor: front !== null,
+      preShuntResistor: (front?.shuntResistor ?? null) !== null,
+      loadResistor: load.kind === 'led-string',
       pullUp: drive.kind === 'open-collector',
       speedUpCapacitor: speedUpCapacitorF !== null,
       clamp: clamp.kind !== 'none',
@@ -42,7 +53,7 @@ export class DesignatorGroup {
     };
     return (Object.keys(NAMES) as Key[])
       .filter((key) => there[key] ?? true)
-      .map((key) => ({ key, name: NAMES[key] ?? key, value: this.designators()[key] }));
+      .map((key) => ({ key, name: NAMES[key], value: this.designators()[key] }));
   });
 
   /** On leaving the field: an empty one means none is given. */

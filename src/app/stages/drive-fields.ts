@@ -22,7 +22,11 @@ export const DRIVE_FIELDS = {
       ['open-collector', 'Open collector'],
     ],
   },
-  'drive/railV': pair('volt', { ...drive, label: 'Logic rail' }),
+  'drive/railV': pair('volt', {
+    ...drive,
+    label: 'Logic rail',
+    labelIn: ({ topology }) => (topology === 'level-translator' ? 'Logic rail V1' : null),
+  }),
   'drive/high/dropV': needed('voltOrZero', {
     ...drive,
     label: 'High drop',

@@ -4,7 +4,7 @@ import { Icon } from '../ui/icon.ts';
 import { QuantityField } from '../ui/quantity-field.ts';
 import { QuantitySpanField } from '../ui/quantity-span-field.ts';
 import { SymbolText } from '../ui/symbol-text.ts';
-import type { FieldSpec } from './field-spec.ts';
+import type { ChoiceSpec, FieldSpec } from './field-spec.ts';
 import { rangeLine, valueText } from './field-words.ts';
 import { fieldSpec, type FieldPath } from './stage-fields.ts';
 
@@ -29,6 +29,8 @@ export class FieldRow {
   readonly readOnly = input(false);
   readonly fault = input<string | null>(null);
   readonly steps = input<readonly number[]>([]);
+  /** In place of the choice's own options. */
+  readonly options = input<ChoiceSpec['options'] | null>(null);
   /** In place of the field's own range: the policy's bounds for a preferred value. */
   readonly range = input<string | null>(null);
 

@@ -8,7 +8,9 @@ export const FIELD_GROUPS = [
   'load',
   'transistor',
   'base',
+  'preDriver',
   'clamp',
+  'switching',
   'stage',
   'limits',
 ] as const;
@@ -21,7 +23,9 @@ export const GROUP_TITLES: Readonly<Record<FieldGroup, string>> = {
   load: 'Load',
   transistor: 'Transistor',
   base: 'Base network',
+  preDriver: 'Pre-driver',
   clamp: 'Clamp',
+  switching: 'Switching',
   limits: 'Own limits',
 };
 
@@ -33,6 +37,8 @@ export interface StageShape {
   readonly clampKind: string;
   readonly resetKind: string;
   readonly shuntFitted: boolean;
+  readonly preShuntFitted: boolean;
+  readonly frequencyHz: number | null;
 }
 
 interface FieldCommon {
@@ -40,6 +46,8 @@ interface FieldCommon {
   readonly label: string;
   /** Stands behind the range: `20 °C`, `closed`. */
   readonly note?: string;
+  /** Another label in a stage of some shape; null keeps the usual one. */
+  readonly labelIn?: (shape: StageShape) => string | null;
   /** Folded under "More" until somebody opens it. */
   readonly advanced?: boolean | ((shape: StageShape) => boolean);
   /** The part on the drawing that this field belongs to. */

@@ -10,6 +10,8 @@ const BOUNDS = {
   ampere: { unit: 'A', min: 1e-9, max: 1000 },
   ampereOrZero: { unit: 'A', min: 0, max: 1000 },
   ohm: { unit: 'Ohm', min: 0.001, max: 1e12 },
+  ohmOrZero: { unit: 'Ohm', min: 0, max: 1e12 },
+  factor: { unit: '1', min: 0.001, max: 1e6 },
   watt: { unit: 'W', min: 1e-6, max: 1e5 },
   celsius: { unit: '°C', min: -200, max: 500 },
   kelvin: { unit: 'K', min: 0, max: 500 },

@@ -8,9 +8,10 @@ import type { StageInput } from '../../../shared/stage/stage-input.ts';
 import { formatQuantity } from '../../../shared/units/engineering-notation.ts';
 import { preferredValues } from '../../../shared/units/preferred-values.ts';
 import { Icon } from '../ui/icon.ts';
-import type { PartRole } from './apply-part.ts';
+import { needsOf } from '../../../shared/stage/topology-needs.ts';
+import type { PartRole } from '../../../shared/parts/part-fit.ts';
 import { DesignatorGroup } from './designator-group.ts';
-import { FIELD_GROUPS, GROUP_TITLES, type FieldGroup } from './field-spec.ts';
+import { FIELD_GROUPS, GROUP_TITLES, type ChoiceSpec, type FieldGroup } from './field-spec.ts';
 import { FieldRow } from './field-row.ts';
 import type { FieldFault } from './form-to-stage.ts';
 import { groupFigure } from './group-figure.ts';
@@ -18,6 +19,7 @@ import { PolicyGroup } from './policy-group.ts';
 import {
   applies,
   FIELD_PATHS,
+  fieldLabel,
   fieldSpec,
   isFolded,
   shapeOf,
@@ -39,8 +41,11 @@ const DESIGNATED: readonly PartKey[] = [
   'pullUp',
   'speedUpCapacitor',
   'load',
+  'loadResistor',
   'clamp',
   'drive',
+  'preBaseResistor',
+  'preShuntResistor',
 ];
 
 /** The whole definition as rows in groups; seldom used fields are folded in their group. */
@@ -82,13 +87,14 @@ export class FormPanel {
         group,
         title: GROUP_TITLES[group],
         figure: groupFigure(group, this.stage(), this.evaluation(), this.sizing()),
-        role: ROLE_OF_GROUP[group] ?? null,
+        role: this.roleOf(group),
+        transistor: this.transistorOf(group),
         plain: paths.filter((path) => !isFolded(path, this.shape())),
         folded,
         open:
           this.readOnly() || this.opened().has(group) || folded.some((path) => this.faultOf(path)),
       };
-    }),
+    }).filter(({ plain, folded, transistor }) => plain.length + folded.length > 0 || transistor),
   );
 
   protected control(path: FieldPath): FormControl<unknown> {
@@ -109,23 +115,30 @@ export class FormPanel {
   /** Whether the row belongs to the part chosen on the drawing. Its main figure stands for a part. */
   protected isSelected(path: FieldPath): boolean {
     const part = this.selected();
-    return part !== null && mainField(part) === path;
+    return part !== null && mainField(part, this.stage()) === path;
   }
 
   protected designatorOf(path: FieldPath): string | null {
-    const { part, label } = { part: undefined, ...fieldSpec(path) };
-    if (part === undefined || !DESIGNATED.includes(part) || mainField(part) !== path) return null;
-    return label === '' ? null : this.designators()[part as keyof Designators];
+    const part = DESIGNATED.find((each) => mainField(each, this.stage()) === path);
+    return part === undefined ? null : this.designators()[part as keyof Designators];
   }
 
   /** Levels are guaranteed at a current: the label says which. */
   protected labelOf(path: FieldPath): string {
-    const { label } = fieldSpec(path);
+    const label = fieldLabel(path, this.shape());
     const { high, low } = this.stage().drive;
     const at = { 'drive/high/dropV': high?.currentA, 'drive/low/levelV': low.currentA }[
       path as string
     ];
     return at === undefined ? label : `${label} at ${formatQuantity(at, 'A')}`;
+  }
+
+  /** Only loads that the topology can drive. */
+  protected optionsOf(path: FieldPath): ChoiceSpec['options'] | null {
+    const spec = fieldSpec(path);
+    if (path !== 'load/kind' || spec.kind !== 'choice') return null;
+    const { loads } = needsOf(this.stage().topology);
+    return spec.options.filter(([kind]) => loads.some((load) => load === kind));
   }
 
   protected stepsOf(path: FieldPath): readonly number[] {
@@ -135,8 +148,29 @@ export class FormPanel {
 
   protected rangeOf(path: FieldPath): string | null {
     if (path !== 'baseResistor/valueOhm' && path !== 'shuntResistor/valueOhm') return null;
-    const { series, smallestOhm, largestOhm } = this.stage().policy;
+    const { topology, policy } = this.stage();
+    const { series, smallestOhm, largestOhm } = policy;
+    if (path === 'baseResistor/valueOhm' && topology === 'low-side-pre-biased') {
+      return `0 … ${formatQuantity(largestOhm, 'Ohm')}, 0: none`;
+    }
     return `${formatQuantity(smallestOhm, 'Ohm')} … ${formatQuantity(largestOhm, 'Ohm')}, ${series}`;
+  }
+
+  /** What the library has for a group. */
+  private roleOf(group: FieldGroup): PartRole | null {
+    const { loads } = needsOf(this.stage().topology);
+    if (group === 'load' && !loads.includes('coil')) return null;
+    return ROLE_OF_GROUP[group] ?? null;
+  }
+
+  /** The transistor a group is about, taken whole from its record. */
+  private transistorOf(group: FieldGroup) {
+    const { transistor, preDriver, topology } = this.stage();
+    if (group === 'transistor') return { role: 'transistor', data: transistor } as const;
+    if (group !== 'preDriver' || preDriver === null) return null;
+    return topology === 'two-transistor-high-side'
+      ? ({ role: 'preDriver', data: preDriver.transistor } as const)
+      : null;
   }
 
   protected toggle(group: FieldGroup): void {
@@ -152,8 +186,16 @@ export class FormPanel {
   }
 }
 
-/** The field that choosing a part on the drawing leads to. */
-export function mainField(part: PartKey): FieldPath | null {
+const LOAD_FIELD: Readonly<Record<StageInput['load']['kind'], FieldPath>> = {
+  coil: 'load/resistanceOhm',
+  resistor: 'load/resistanceOhm',
+  'led-string': 'load/count',
+  lamp: 'load/nominalV',
+  'logic-input': 'load/pullUpOhm',
+};
+
+/** The field that choosing a part on the drawing leads to; null for transistors, which have a picker. */
+export function mainField(part: PartKey, { load }: StageInput): FieldPath | null {
   const fields: Readonly<Record<PartKey, FieldPath | null>> = {
     supply: 'supplyV',
     drive: 'drive/kind',
@@ -162,13 +204,13 @@ export function mainField(part: PartKey): FieldPath | null {
     speedUpCapacitor: 'speedUpCapacitorF',
     shuntResistor: 'shuntResistor/valueOhm',
     transistor: null,
-    load: 'load/resistanceOhm',
-    loadResistor: null,
-    logicInput: null,
-    preDriver: null,
-    preBaseResistor: null,
-    preShuntResistor: null,
+    load: LOAD_FIELD[load.kind],
+    loadResistor: load.kind === 'led-string' ? 'load/resistanceOhm' : null,
+    logicInput: 'load/vihV',
     clamp: 'clamp/kind',
+    preDriver: null,
+    preBaseResistor: 'preDriver/baseResistor/valueOhm',
+    preShuntResistor: 'preDriver/shuntResistor/valueOhm',
   };
   return fields[part];
 }

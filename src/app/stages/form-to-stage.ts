@@ -41,17 +41,27 @@ function candidateOf(value: StageFormValue, base: StageInput): unknown {
     drive: driveRest(value, base),
     clamp: { ...NO_CLAMP },
     shuntResistor: null,
-    preDriver: base.preDriver,
+    preDriver: frontRest(value, base),
     transistor: base.transistor,
     policy: base.policy,
   };
   for (const path of FIELD_PATHS) {
-    if (path === 'shuntFitted' || !applies(path, shape)) continue;
+    if (FLAGS.includes(path) || !applies(path, shape)) continue;
     const entry = emptied(path, value[path]);
     if (path === 'drive/reset/kind' && entry === null) continue;
     put(candidate, path.split('/'), entry);
   }
   return candidate;
+}
+
+/** Fields that stand for whether a part is there, and have no key of their own. */
+const FLAGS: readonly FieldPath[] = ['shuntFitted', 'preShuntFitted'];
+
+/** The transistor in front; its base network has fields. */
+function frontRest(value: StageFormValue, { preDriver }: StageInput) {
+  return value.topology === 'two-transistor-high-side' && preDriver !== null
+    ? { transistor: preDriver.transistor, shuntResistor: null }
+    : preDriver;
 }
 
 /** What a drive may carry without its kind having a field for it. */

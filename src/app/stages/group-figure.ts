@@ -1,6 +1,7 @@
 import type { Evaluation } from '../../../shared/checks/evaluation.ts';
 import type { Sizing } from '../../../shared/sizing/sizing.ts';
 import type { StageInput } from '../../../shared/stage/stage-input.ts';
+import type { TransistorData } from '../../../shared/stage/transistor-data.ts';
 import { formatQuantity } from '../../../shared/units/engineering-notation.ts';
 import type { FieldGroup } from './field-spec.ts';
 
@@ -20,7 +21,13 @@ export function groupFigure(
       return currentA === null ? '' : `up to ${formatQuantity(currentA, 'A')}`;
     }
     case 'transistor':
-      return rowsText(stage);
+      return rowsText(stage.transistor);
+    case 'preDriver':
+      return stage.preDriver === null ? '' : rowsText(stage.preDriver.transistor);
+    case 'switching': {
+      const storageSec = figure('storage-time');
+      return storageSec === null ? '' : `storage and fall ${formatQuantity(storageSec, 's')}`;
+    }
     case 'base':
       return windowText(sizing);
     case 'clamp': {
@@ -44,7 +51,7 @@ function sourceResistance({ drive, topology }: StageInput): string {
   return `source resistance ${formatQuantity((dropV - unloadedDropV) / currentA, 'Ohm')}`;
 }
 
-function rowsText({ transistor }: StageInput): string {
+function rowsText(transistor: TransistorData): string {
   const { gain, saturation, baseEmitter, leakage } = transistor;
   const rows = gain.length + saturation.length + baseEmitter.length + leakage.length;
   return [transistor.package ?? '', rows === 0 ? 'no rows' : `${rows} rows`]

@@ -1,9 +1,21 @@
-import { ChangeDetectionStrategy, Component, inject, input, signal } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  effect,
+  inject,
+  input,
+  signal,
+} from '@angular/core';
+import { toSignal } from '@angular/core/rxjs-interop';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
 import { createStage, type PolicyDifference } from '../../../shared/contract/stage.ts';
-import { StageInput } from '../../../shared/stage/stage-input.ts';
+import { needsOf } from '../../../shared/stage/topology-needs.ts';
+import { choiceWords } from '../../../shared/report/definition-words.ts';
+import { topologyName } from '../../../shared/report/schematic/schematic-name.ts';
+import { StageInput, TOPOLOGIES, type Topology } from '../../../shared/stage/stage-input.ts';
 import { ApiClient } from '../api/api-client.ts';
 import { toApiProblem } from '../api/api-problem.ts';
 import { Icon } from '../ui/icon.ts';
@@ -11,6 +23,16 @@ import { PageHeading } from '../ui/page-focus.ts';
 import { fieldError, schemaValidator } from '../ui/schema-validator.ts';
 import { startingStage, type NewStageWords } from './sample-stage.ts';
 import { readStageText } from './stage-file.ts';
+
+/** What each topology does, beside its name. */
+const WHERE: Readonly<Record<Topology, string>> = {
+  'low-side-npn': 'load between supply and collector',
+  'high-side-pnp': 'load between collector and return',
+  'two-transistor-high-side': 'an NPN turns the PNP on',
+  'low-side-darlington': 'two transistors in one part',
+  'low-side-pre-biased': 'base resistors inside the part',
+  'level-translator': 'inverts from one logic rail to another',
+};
 
 /** A new stage: a few words first, then the sheet; or a stage file, which brings everything. */
 @Component({
@@ -32,9 +54,28 @@ export class NewStage {
     topology: this.builder.control<NewStageWords['topology']>('low-side-npn'),
     loadKind: this.builder.control<NewStageWords['loadKind']>('coil'),
   });
+  protected readonly topologies = TOPOLOGIES.map((topology) => ({
+    topology,
+    text: `${topologyName(topology)}: ${WHERE[topology]}`,
+  }));
+  private readonly topology = toSignal(this.form.controls.topology.valueChanges, {
+    initialValue: this.form.controls.topology.value,
+  });
+  protected readonly loads = computed(() =>
+    needsOf(this.topology()).loads.map((kind) => ({ kind, text: choiceWords(kind) })),
+  );
   protected readonly faults = signal<readonly string[]>([]);
   protected readonly busy = signal(false);
   protected readonly fieldError = fieldError;
+
+  constructor() {
+    effect(() => {
+      const { loadKind } = this.form.controls;
+      const kinds = this.loads().map(({ kind }) => kind);
+      const [first = 'coil'] = kinds;
+      if (!kinds.includes(loadKind.value)) loadKind.setValue(first);
+    });
+  }
 
   protected async create(): Promise<void> {
     this.form.markAllAsTouched();

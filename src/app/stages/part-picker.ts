@@ -9,11 +9,12 @@ import {
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogModule, MatDialogRef } from '@angular/material/dialog';
 import { listParts, readPart, type Part } from '../../../shared/contract/part.ts';
+import { fitText, KIND_OF_ROLE, partFits, type PartRole } from '../../../shared/parts/part-fit.ts';
 import type { StageInput } from '../../../shared/stage/stage-input.ts';
 import { ApiClient } from '../api/api-client.ts';
 import { Icon } from '../ui/icon.ts';
 import { LoadState } from '../ui/load-state.ts';
-import { applyPart, KIND_OF_ROLE, type Choice, type PartRole } from './apply-part.ts';
+import { applyPart, type Choice } from './apply-part.ts';
 import { partChoices } from './part-choices.ts';
 
 export interface PartPickerData {
@@ -30,6 +31,7 @@ export interface PickedPart {
 
 const TITLES: Readonly<Record<PartRole, string>> = {
   transistor: 'Choose a transistor',
+  preDriver: 'Choose the pre-driver',
   load: 'Choose a load',
   drive: 'Choose a logic output',
   clamp: 'Choose a clamp',
@@ -55,9 +57,16 @@ export class PartPicker {
   protected readonly list = resource({
     params: () => ({ search: this.search() }),
     loader: async ({ params }) => {
-      const query = { kind: KIND_OF_ROLE[this.data.role], ...params };
-      return (await this.api.send(listParts, { query })).value;
+      const query = { kind: KIND_OF_ROLE[this.data.role], pageSize: 500, ...params };
+      return (await this.api.send(listParts, { query })).value.parts;
     },
+  });
+  /** What the place is made for; how many of the parts found are not. */
+  protected readonly fitting = computed(() => {
+    const { role, stage } = this.data;
+    const found = this.list.hasValue() ? this.list.value() : [];
+    const parts = found.filter((part) => partFits(role, stage.topology, part));
+    return { parts, others: found.length - parts.length, what: fitText(role, stage.topology) };
   });
   protected readonly part = resource({
     params: () => this.partId() ?? undefined,

@@ -1,82 +1,160 @@
+import { needsOf, type TransistorKind } from '../../../shared/stage/topology-needs.ts';
+import { type Clamp, NO_CLAMP } from '../../../shared/stage/clamp.ts';
+import type { Drive } from '../../../shared/stage/drive.ts';
+import { Load } from '../../../shared/stage/load.ts';
 import { GENERAL_PRACTICE, type Policy } from '../../../shared/stage/policy.ts';
 import { STAGE_FORMAT, StageInput, type Topology } from '../../../shared/stage/stage-input.ts';
-import type { TransistorData } from '../../../shared/stage/transistor-data.ts';
+import { TransistorData } from '../../../shared/stage/transistor-data.ts';
+import type { PreDriver } from '../../../shared/stage/two-transistors.ts';
+import { preferredValues } from '../../../shared/units/preferred-values.ts';
 
 /** What the person says about a new stage before its sheet opens. */
 export interface NewStageWords {
   readonly reference: string;
   readonly title: string;
   readonly topology: Topology;
-  readonly loadKind: 'coil' | 'resistor';
+  readonly loadKind: Load['kind'];
 }
 
+type Span = Readonly<Record<'min' | 'max', number>>;
+
 /** A transistor without data: the sheet says what is open until one is picked. */
-export const noTransistor = (polarity: 'npn' | 'pnp'): TransistorData => ({
-  partNumber: 'not chosen',
-  polarity,
-  darlington: false,
-  package: null,
-  source: null,
-  limits: {
-    vceoV: null,
-    vcboV: null,
-    veboV: null,
-    icA: null,
-    icPeakA: null,
-    ibA: null,
-    powerW: null,
-    tjMaxDegC: 150,
-  },
-  thermal: { rthJaKPerW: null, rthJcKPerW: null },
-  gain: [],
-  saturation: [],
-  baseEmitter: [],
-  leakage: [],
-  switching: null,
-  capacitanceF: null,
-  model: { earlyV: null, betaR: null, isA: null, rcOhm: null },
-  internal: null,
+export const noTransistor = (
+  polarity: 'npn' | 'pnp',
+  kind: TransistorKind = 'transistor',
+): TransistorData =>
+  TransistorData.parse({
+    partNumber: 'not chosen',
+    polarity,
+    darlington: kind === 'darlington',
+    limits: { vceoV: null, icA: null, powerW: null, tjMaxDegC: 150 },
+    thermal: { rthJaKPerW: null },
+    ...{ gain: [], saturation: [], baseEmitter: [] },
+    internal: kind === 'pre-biased' ? { r1Ohm: 10_000, r2Ohm: 10_000 } : null,
+  });
+
+/** The output transistor a topology starts with. */
+export function startingTransistor(topology: Topology): TransistorData {
+  const { polarity, kinds } = needsOf(topology);
+  return noTransistor(polarity, kinds[0]);
+}
+
+/** The transistor in front of a two-transistor high side, with its base network. */
+export const startingPreDriver = (): PreDriver => ({
+  transistor: noTransistor('npn'),
+  baseResistor: { valueOhm: 4700, tolerance: 0.05, ratingW: 0.1 },
+  shuntResistor: { valueOhm: 22_000, tolerance: 0.05, ratingW: 0.1 },
 });
 
+/** A 3.3 V output; an open collector where only that can turn a PNP off. */
+export function startingDrive(topology: Topology): Drive {
+  const common = {
+    railV: { min: 3.0, max: 3.6 },
+    ...{ railTracksSupply: false, leakageA: 0, reset: null, groundShiftV: 0 },
+    low: { levelV: 0.4, currentA: 0.008, unloadedV: null },
+    ...{ sinkLimitA: 0.02, port: null, portTotalA: null, maximumV: null },
+  };
+  return topology === 'high-side-pnp'
+    ? {
+        ...common,
+        kind: 'open-collector',
+        high: null,
+        sourceLimitA: null,
+        pullUp: { valueOhm: 10_000, tolerance: 0.05, ratingW: null },
+      }
+    : {
+        ...common,
+        kind: 'push-pull',
+        high: { dropV: 0.6, currentA: 0.008, unloadedDropV: 0 },
+        sourceLimitA: 0.02,
+        pullUp: null,
+      };
+}
+
+const LED_V = { min: 1.8, max: 2.4 };
+const LED_A = 0.01;
+/** Share of the supply that a string may take, so that its resistor still sets the current. */
+const STRING_SHARE = 0.5;
+
+const COIL_W = 0.4;
+const rounded = (value: number) => Number(value.toPrecision(3));
+
+/** A small load of the kind at the supply: usual values of the trade that the designer replaces. */
+export function startingLoad(kind: Load['kind'], supplyV: Span): Load {
+  const middleV = (supplyV.min + supplyV.max) / 2;
+  switch (kind) {
+    case 'coil':
+      return Load.parse({
+        ...{ kind, tolerance: 0.1, referenceDegC: 20, inductanceH: null, maximumV: null },
+        resistanceOhm: rounded(middleV ** 2 / COIL_W),
+        ...{ operateV: rounded(0.7 * middleV), releaseV: rounded(0.1 * middleV) },
+      });
+    case 'resistor':
+      return { kind, resistanceOhm: 1000, tolerance: 0.05 };
+    case 'led-string': {
+      const count = Math.max(1, Math.floor((STRING_SHARE * supplyV.min) / LED_V.max));
+      const acrossV = Math.max(0.5, middleV - (count * (LED_V.min + LED_V.max)) / 2);
+      return {
+        ...{ kind, count, forwardV: LED_V, tolerance: 0.05, maximumA: 0.03, minimumA: null },
+        resistanceOhm: preferredValues('E24', acrossV / LED_A, 1e6)[0] ?? 1e6,
+      };
+    }
+    case 'lamp':
+      return { kind, nominalV: middleV, currentA: 0.04, coldRatio: 12 };
+    case 'logic-input':
+      return {
+        ...{ kind, pullUpOhm: 4700, tolerance: 0.05, ratingW: 0.1, count: 1 },
+        ...cmosLevels(supplyV),
+        ...{ leakageA: 1e-6, lowCurrentA: 1e-6, capacitanceF: 1e-11, wiringF: 2e-11 },
+        riseTimeLimitSec: null,
+      };
+  }
+}
+
+/** Input levels of CMOS logic at its own supply: 30 and 70 % of it (common practice). */
+const cmosLevels = (supplyV: Span) => ({
+  vilV: rounded(0.3 * supplyV.min),
+  vihV: rounded(0.7 * supplyV.max),
+});
+
+/** The clamp a load asks for: a coil its diode, any other none. */
+export function clampFor(load: Load, clamp: Clamp): Clamp {
+  if (load.kind !== 'coil') return NO_CLAMP;
+  return clamp.kind === 'none' ? { ...NO_CLAMP, kind: 'diode', forwardV: 1 } : clamp;
+}
+
+/** The base network a topology starts with: RB to be sized, nothing outside a pre-biased part. */
+export function startingNetwork(
+  topology: Topology,
+): Pick<StageInput, 'baseResistor' | 'shuntResistor'> {
+  return topology === 'low-side-pre-biased'
+    ? { baseResistor: { valueOhm: 0, tolerance: 0.05, ratingW: 0.1 }, shuntResistor: null }
+    : {
+        baseResistor: { valueOhm: null, tolerance: 0.05, ratingW: ratingOf(topology) },
+        shuntResistor: { valueOhm: 22_000, tolerance: 0.05, ratingW: 0.1 },
+      };
+}
+
+/** RB of a PNP lies at the whole supply. */
+const ratingOf = (topology: Topology) => (needsOf(topology).polarity === 'pnp' ? 0.25 : 0.1);
+
 /**
- * A stage to start from: 24 V, a small load and a 3.3 V output, usual values of the trade that the designer
- * replaces by the project's own.
+ * A stage to start from: 24 V (a level translator: 5 V), a small load and a 3.3 V output, usual values of the trade that
+ * the designer replaces by the project's own.
  */
 export function startingStage(asked: NewStageWords, policy: Policy = GENERAL_PRACTICE): StageInput {
-  const highSide = asked.topology === 'high-side-pnp';
+  const { topology, reference, title, loadKind } = asked;
+  const supplyV =
+    topology === 'level-translator' ? { min: 4.75, max: 5.25 } : { min: 21.6, max: 26.4 };
+  const load = startingLoad(loadKind, supplyV);
   return StageInput.parse({
     format: STAGE_FORMAT,
-    reference: asked.reference,
-    title: asked.title,
-    topology: asked.topology,
-    supplyV: { min: 21.6, max: 26.4 },
+    ...{ reference, title, topology, supplyV, load, policy },
     ambientDegC: { min: 0, max: 50 },
-    drive: {
-      kind: highSide ? 'open-collector' : 'push-pull',
-      railV: { min: 3.0, max: 3.6 },
-      high: highSide ? null : { dropV: 0.6, currentA: 0.008 },
-      low: { levelV: 0.4, currentA: 0.008 },
-      sourceLimitA: highSide ? null : 0.02,
-      sinkLimitA: 0.02,
-      ...(highSide ? { pullUp: { valueOhm: 10000, tolerance: 0.05 } } : {}),
-    },
-    load:
-      asked.loadKind === 'coil'
-        ? {
-            kind: 'coil',
-            resistanceOhm: 1440,
-            tolerance: 0.1,
-            referenceDegC: 20,
-            inductanceH: null,
-            operateV: 16.8,
-            releaseV: 2.4,
-            maximumV: null,
-          }
-        : { kind: 'resistor', resistanceOhm: 1000, tolerance: 0.05 },
-    baseResistor: { valueOhm: null, tolerance: 0.05, ratingW: 0.1 },
-    shuntResistor: { valueOhm: 22000, tolerance: 0.05, ratingW: 0.1 },
-    ...(asked.loadKind === 'coil' ? { clamp: { kind: 'diode', forwardV: 1 } } : {}),
-    transistor: noTransistor(highSide ? 'pnp' : 'npn'),
-    policy,
+    drive: startingDrive(topology),
+    ...startingNetwork(topology),
+    clamp: clampFor(load, NO_CLAMP),
+    transistor: startingTransistor(topology),
+    preDriver: topology === 'two-transistor-high-side' ? startingPreDriver() : null,
   });
 }

@@ -5,8 +5,9 @@ import { Router } from '@angular/router';
 import { firstValueFrom } from 'rxjs';
 import type { Revision } from '../../../shared/contract/revision.ts';
 import { toApiProblem } from '../api/api-problem.ts';
+import type { PartRole } from '../../../shared/parts/part-fit.ts';
 import { ReasonDialog, type ReasonAsked } from '../ui/reason-dialog.ts';
-import { linked, type PartRole } from './apply-part.ts';
+import { linked } from './apply-part.ts';
 import { CompareDialog, comparedRevision, type ComparedPair } from './compare-dialog.ts';
 import { ConflictDialog, type ConflictData } from './conflict-dialog.ts';
 import { draftOf, type Draft } from './draft.ts';
@@ -44,7 +45,10 @@ export class SheetActs {
     } satisfies PartPickerData);
     if (picked === undefined) return;
     const { definition, partRevisionId, choice } = picked;
-    this.store.replace({ definition, parts: linked(draft.parts, role, partRevisionId, choice) });
+    const parts = linked(draft.parts, role, partRevisionId, choice);
+    // A load of another kind leaves its clamp behind.
+    const clampKept = definition.clamp.kind === draft.definition.clamp.kind || role === 'clamp';
+    this.store.replace({ definition, parts: clampKept ? parts : { ...parts, clamp: null } });
   }
 
   submit(): Promise<void> {

@@ -1,10 +1,16 @@
 import type { FieldSpec, StageShape, ValueOf } from './field-spec.ts';
+import { topologyName } from '../../../shared/report/schematic/schematic-name.ts';
+import { TOPOLOGIES } from '../../../shared/stage/stage-input.ts';
 import { CLAMP_FIELDS } from './clamp-fields.ts';
 import { DRIVE_FIELDS } from './drive-fields.ts';
 import { LOAD_FIELDS } from './load-fields.ts';
 import { needed, pair, perhaps } from './field-units.ts';
+import { PRE_DRIVER_FIELDS } from './pre-driver-fields.ts';
 
 const shunt = ({ shuntFitted }: StageShape) => shuntFitted;
+const preBiased = ({ topology }: StageShape) => topology === 'low-side-pre-biased';
+const translates = ({ topology }: StageShape) => topology === 'level-translator';
+const held = ({ frequencyHz }: StageShape) => frequencyHz === 0;
 const coil = ({ loadKind }: StageShape) => loadKind === 'coil';
 
 /**
@@ -35,15 +41,16 @@ export const FIELDS = {
   topology: {
     kind: 'choice',
     group: 'stage',
-    advanced: true,
     label: 'Topology',
     note: 'where the switch sits',
-    options: [
-      ['low-side-npn', 'Low-side NPN'],
-      ['high-side-pnp', 'High-side PNP'],
-    ],
+    options: TOPOLOGIES.map((topology) => [topology, topologyName(topology)] as const),
   },
-  supplyV: pair('volt', { group: 'supply', label: 'Supply at load', part: 'supply' }),
+  supplyV: pair('volt', {
+    group: 'supply',
+    label: 'Supply at load',
+    labelIn: (shape) => (translates(shape) ? 'Rail V2' : null),
+    part: 'supply',
+  }),
   ambientDegC: pair('celsius', { group: 'supply', label: 'Ambient' }),
   'supplyV/surge': perhaps('volt', {
     group: 'supply',
@@ -58,21 +65,12 @@ export const FIELDS = {
     part: 'supply',
     when: coil,
   }),
-  frequencyHz: needed('hertz', {
-    group: 'supply',
-    label: 'Switching rate',
-    advanced: true,
-  }),
-  duty: needed('share', {
-    group: 'supply',
-    label: 'On share',
-    advanced: true,
-  }),
   ...DRIVE_FIELDS,
   ...LOAD_FIELDS,
-  'baseResistor/valueOhm': perhaps('ohm', {
+  'baseResistor/valueOhm': perhaps('ohmOrZero', {
     group: 'base',
     label: 'RB',
+    labelIn: (shape) => (preBiased(shape) ? 'Outer RB' : null),
     part: 'baseResistor',
     preferred: true,
   }),
@@ -95,6 +93,8 @@ export const FIELDS = {
     label: 'RBE fitted',
     note: 'base to emitter',
     part: 'shuntResistor',
+    // A pre-biased part has its own; one that a file brings in can be taken away.
+    when: (shape) => !preBiased(shape) || shape.shuntFitted,
   },
   'shuntResistor/valueOhm': needed('ohm', {
     group: 'base',
@@ -123,17 +123,21 @@ export const FIELDS = {
     part: 'speedUpCapacitor',
     advanced: true,
   }),
+  ...PRE_DRIVER_FIELDS,
   ...CLAMP_FIELDS,
+  frequencyHz: needed('hertz', { group: 'switching', label: 'Frequency', note: '0: held on' }),
+  duty: needed('share', { group: 'switching', label: 'Duty', note: 'on', advanced: held }),
+  storageTimeLimitSec: perhaps('second', {
+    group: 'switching',
+    label: 'Storage time limit',
+    note: 'empty: 10\u00a0% of the shorter part',
+    advanced: held,
+  }),
   saturationLimitV: perhaps('volt', {
     group: 'limits',
     advanced: true,
     label: 'VCE(sat) budget',
     part: 'transistor',
-  }),
-  storageTimeLimitSec: perhaps('second', {
-    group: 'limits',
-    advanced: true,
-    label: 'Storage time',
   }),
 } as const satisfies Record<string, FieldSpec>;
 
@@ -155,6 +159,8 @@ export function shapeOf(value: StageFormValue): StageShape {
     clampKind: value['clamp/kind'],
     resetKind: value['drive/reset/kind'],
     shuntFitted: value.shuntFitted,
+    preShuntFitted: value.preShuntFitted,
+    frequencyHz: value.frequencyHz,
   };
 }
 
@@ -162,6 +168,12 @@ export function shapeOf(value: StageFormValue): StageShape {
 export function isFolded(path: FieldPath, shape: StageShape): boolean {
   const { advanced } = fieldSpec(path);
   return typeof advanced === 'function' ? advanced(shape) : (advanced ?? false);
+}
+
+/** What a field is called in a stage of this shape. */
+export function fieldLabel(path: FieldPath, shape: StageShape): string {
+  const { label, labelIn } = fieldSpec(path);
+  return labelIn?.(shape) ?? label;
 }
 
 /** Whether a field belongs to a stage of this shape. */

@@ -168,10 +168,13 @@ export class StageSheet implements KeepsWork {
   /** A part chosen on the drawing: its field gets the focus. */
   protected choosePart(part: PartKey): void {
     this.selected.set(part);
-    const path = mainField(part);
+    const stage = this.view()?.draft.definition;
+    if (stage === undefined) return;
+    const path = mainField(part, stage);
     if (this.layout() === 'medium') this.drawerOpen.set(true);
     setTimeout(() => {
-      const id = path === null ? 'pick-transistor' : fieldId(path);
+      const picker = part === 'preDriver' ? 'pick-preDriver' : 'pick-transistor';
+      const id = path === null ? picker : fieldId(path);
       document.getElementById(id)?.focus();
     });
   }

@@ -16,6 +16,8 @@ const USUAL: Partial<Record<FieldPath, unknown>> = {
   'drive/reset/leakageA': 1e-6,
   'load/referenceDegC': 20,
   'load/temperatureRiseK': 0,
+  'preDriver/shuntResistor/valueOhm': 22000,
+  'preDriver/shuntResistor/tolerance': 0.05,
   'load/tolerance': 0.1,
   'shuntResistor/valueOhm': 22000,
   'shuntResistor/tolerance': 0.05,
@@ -41,6 +43,7 @@ export function stageToForm(stage: StageInput): StageFormValue {
 
 function entryOf(stage: StageInput, path: FieldPath): unknown {
   if (path === 'shuntFitted') return stage.shuntResistor !== null;
+  if (path === 'preShuntFitted') return (stage.preDriver?.shuntResistor ?? null) !== null;
   const found = valueAt(stage, path) ?? USUAL[path];
   switch (fieldSpec(path).kind) {
     case 'quantity':

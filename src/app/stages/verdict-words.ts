@@ -25,8 +25,17 @@ export const GROUP_NAMES: Readonly<Record<CriterionGroup, string>> = {
 /** The criteria a designer looks at first; the others stand behind "Show all" while they are met. */
 const FIRST = new Set<string>([
   'overdrive-factor',
+  'input-on',
+  'pre-overdrive-factor',
+  'pre-forced-beta',
+  'pre-drive-current',
   'forced-beta',
   'load-voltage',
+  'load-current',
+  'inrush-saturation',
+  'output-low',
+  'output-high',
+  'input-off',
   'saturation-voltage',
   'drive-current',
   'collector-current',
@@ -34,6 +43,7 @@ const FIRST = new Set<string>([
   'off-base-voltage',
   'peak-collector-voltage',
   'release-time',
+  'storage-time',
 ] satisfies CriterionId[]);
 
 export interface VerdictGroup {
