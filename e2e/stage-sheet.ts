@@ -50,6 +50,11 @@ export class StageSheet {
     });
   }
 
+  /** The word at the head of the verdicts. */
+  get verdict(): Locator {
+    return this.page.locator('app-verdict-panel .headline app-verdict-mark');
+  }
+
   get ladder(): Locator {
     return this.page.getByRole('toolbar', { name: 'Values for the base resistor' });
   }
