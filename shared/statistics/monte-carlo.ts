@@ -5,10 +5,7 @@ import type { StageInput } from '../stage/stage-input.ts';
 import { type Histogram, spreadOfValues } from './order-statistics.ts';
 import { Drawing } from './quantities.ts';
 import { sampledStage, type SampledStage } from './sampled-stage.ts';
-
-/** The figures whose spread is kept. */
-export const SPREAD_FIGURES = ['overdriveFactor', 'vceSatV', 'icA', 'powerW', 'tjDegC'] as const;
-export type SpreadFigure = (typeof SPREAD_FIGURES)[number];
+import { byFigure, type SpreadFigure } from './spread-figures.ts';
 
 /** Which samples: the same request gives the same result, however it is shared out. */
 export interface SampleRequest {
@@ -78,9 +75,7 @@ export class SampleRun {
     this.block = index;
     const total = this.stage === null ? 0 : ownSamples(request.samples, index, workers);
     const known = evaluation === null ? [] : knownFigures(evaluation);
-    this.figures = Object.fromEntries(
-      SPREAD_FIGURES.map((name) => [name, new Float64Array(known.includes(name) ? total : 0)]),
-    ) as Record<SpreadFigure, Float64Array>;
+    this.figures = byFigure((name) => new Float64Array(known.includes(name) ? total : 0));
   }
 
   /** Samples judged so far. */
@@ -171,13 +166,6 @@ export function spreadOf(request: SampleRequest, shares: readonly SampleShare[])
 export function statisticsOf(spread: SampleSpread): Statistics {
   const { samples, seed, percentiles } = spread;
   return { samples, seed, yield: spread.yield, percentiles };
-}
-
-function byFigure<T>(of: (name: SpreadFigure) => T): Record<SpreadFigure, T> {
-  return Object.fromEntries(SPREAD_FIGURES.map((name) => [name, of(name)])) as Record<
-    SpreadFigure,
-    T
-  >;
 }
 
 /**
