@@ -31,6 +31,7 @@ import { SheetActs } from './sheet-acts.ts';
 import { SheetForm } from './sheet-form.ts';
 import { sheetLayout } from './sheet-layout.ts';
 import { SheetNotes } from './sheet-notes.ts';
+import { SpreadPanel } from './spread/spread-panel.ts';
 import { StageStore } from './stage-store.ts';
 import { submitNote } from './submit-note.ts';
 import type { KeepsWork } from './unsaved-guard.ts';
@@ -58,6 +59,7 @@ const TABS: readonly (readonly [Tab, string])[] = [
     RouterLink,
     SaveStatus,
     SheetNotes,
+    SpreadPanel,
     StateChip,
     StripCell,
     SymbolText,
