@@ -1,5 +1,6 @@
 import { In, type EntityManager } from 'typeorm';
 import type * as z from 'zod';
+import { portVerdicts } from '../../shared/checks/port-current.ts';
 import type { Project, ProjectSummary } from '../../shared/contract/project.ts';
 import { REVISION_STATES } from '../../shared/review/revision-state.ts';
 import type { Actor } from '../audit/act.ts';
@@ -15,14 +16,18 @@ export async function projectReply(
   { project, roles, mayManage }: ProjectAccess,
 ): Promise<z.input<typeof Project>> {
   const lines = (await revisionLines(manager, [project.id])).filter(({ current }) => current);
+  const policy = await manager.findOneByOrFail(PolicyEntity, { id: project.policyId });
   const { id, code, title, supplementaryTitle, legalOwner, department } = project;
   return {
     ...{ id, code, title, supplementaryTitle, legalOwner, department },
-    policy: await manager.findOneByOrFail(PolicyEntity, { id: project.policyId }),
+    policy,
     unverifiedBlocksLock: project.unverifiedBlocksLock,
     members: await membersOf(manager, project.id),
     counts: countStates(lines),
-    ports: sumPorts(lines),
+    ports: portVerdicts(
+      lines.filter(({ state }) => state !== 'withdrawn'),
+      policy.limits.marginalBand,
+    ),
     ownRoles: [...roles],
     mayManage,
   };
@@ -71,17 +76,4 @@ function countStates(lines: readonly RevisionLine[]): Project['counts'] {
   ) as Project['counts'];
   for (const { state } of lines) counts[state] += 1;
   return counts;
-}
-
-/** Port currents add up over the stages on the port; the tightest stated limit rules. */
-function sumPorts(lines: readonly RevisionLine[]): Project['ports'] {
-  const ports = new Map<string, { currentA: number; limitA: number | null }>();
-  for (const { port, portCurrentA, portLimitA, quantity, state } of lines) {
-    if (port === null || state === 'withdrawn') continue;
-    const sum = ports.get(port) ?? { currentA: 0, limitA: null };
-    sum.currentA += (portCurrentA ?? 0) * quantity;
-    if (portLimitA !== null) sum.limitA = Math.min(sum.limitA ?? portLimitA, portLimitA);
-    ports.set(port, sum);
-  }
-  return [...ports].map(([port, sum]) => ({ port, ...sum }));
 }

@@ -78,7 +78,7 @@ export class LockService {
       });
       await makeMove(manager, act, context, 'lock');
       await auditRevision(manager, act, context, 'revision.locked', (name) => `locked ${name}`, {
-        ...{ hash, meaning },
+        ...{ hash, meaning, port: context.port },
       });
       return answerRevision(manager, act.actor, revisionId);
     });

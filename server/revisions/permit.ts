@@ -5,6 +5,7 @@ import {
   type ReviewAction,
   type Situation,
 } from '../../shared/review/permission.ts';
+import { formatQuantity } from '../../shared/units/engineering-notation.ts';
 import { ApiError } from '../http/api-error.ts';
 import { expectVersion, type Versioned } from '../http/versioned.ts';
 import { isUnverified } from './part-standing.ts';
@@ -24,7 +25,7 @@ export function situationOf(context: RevisionContext): Situation {
     resistorChosen: revision.definition.baseResistor.valueOhm !== null,
     openFindings: findings.filter(({ state }) => state === 'open').length,
     missing: missingInCheck(context),
-    lockBlock: lockBlock(context),
+    lockBlock: unverifiedBlock(context) ?? portBlock(context),
   };
 }
 
@@ -37,12 +38,20 @@ export function missingInCheck({ actor, check, findings, revision }: RevisionCon
   ];
 }
 
-function lockBlock({ access, revision, standing }: RevisionContext): string | null {
+function unverifiedBlock({ access, revision, standing }: RevisionContext): string | null {
   if (!access.project.unverifiedBlocksLock) return null;
   if (!isUnverified(revision.topology, standing)) return null;
   const names = standing.filter(({ verified }) => !verified).map(({ partNumber }) => partNumber);
   const parts = names.length === 0 ? revision.transistor : [...new Set(names)].join(', ');
   return `The project locks verified part data only; not verified: ${parts}.`;
+}
+
+/** A stage that cannot work is not locked, nor is one with which its port cannot. */
+function portBlock({ port }: RevisionContext): string | null {
+  if (port?.criterion.status !== 'fail') return null;
+  const amount = (currentA: number | null) => formatQuantity(currentA, 'A');
+  const { value, limit } = port.criterion;
+  return `The stages on port ${port.port} draw ${amount(value)} where ${amount(limit)} are allowed: relieve the port first.`;
 }
 
 /**

@@ -1,4 +1,5 @@
 import type { EntityManager } from 'typeorm';
+import { type PortVerdict, portVerdicts } from '../../shared/checks/port-current.ts';
 import type { RevisionPeople } from '../../shared/review/revision-state.ts';
 import type { Actor } from '../audit/act.ts';
 import { CheckRecordEntity } from '../checks/check-record-entity.ts';
@@ -9,7 +10,7 @@ import { accessProject, type ProjectAccess } from '../projects/project-access.ts
 import { StageEntity } from '../stages/stage-entity.ts';
 import { type RevisionPartStanding, standingOfRevision } from './part-standing.ts';
 import { RevisionEntity } from './revision-entity.ts';
-import { linesOfStage, type RevisionLine } from './revision-line.ts';
+import { linesOfPort, linesOfStage, type RevisionLine } from './revision-line.ts';
 import { RevisionMoveEntity } from './revision-move-entity.ts';
 import { RevisionPersonEntity } from './revision-person-entity.ts';
 
@@ -29,6 +30,8 @@ export interface RevisionContext {
   readonly check: CheckRecordEntity | null;
   readonly findings: readonly FindingEntity[];
   readonly standing: readonly RevisionPartStanding[];
+  /** The port of the stage's pin, with this revision counted among the project's; null where it names none. */
+  readonly port: PortVerdict | null;
 }
 
 /**
@@ -61,7 +64,24 @@ export async function openRevision(
       order: { number: 'ASC' },
     }),
     standing: await standingOfRevision(manager, revisionId),
+    port: await portOf(manager, access, revision),
   };
+}
+
+async function portOf(
+  manager: EntityManager,
+  { project }: ProjectAccess,
+  revision: RevisionEntity,
+): Promise<PortVerdict | null> {
+  const { port, stageId } = revision;
+  if (port === null) return null;
+  const others = (await linesOfPort(manager, project.id, port)).filter(
+    (line) =>
+      line.current && line.port === port && line.state !== 'withdrawn' && line.stageId !== stageId,
+  );
+  const { limits } = await manager.findOneByOrFail(PolicyEntity, { id: project.policyId });
+  const [verdict] = portVerdicts([...others, revision], limits.marginalBand);
+  return verdict ?? null;
 }
 
 /** How often a revision was submitted. */

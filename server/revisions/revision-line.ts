@@ -73,6 +73,25 @@ export async function linesOfStage(
   );
 }
 
+/** All revisions, oldest first, of a project's stages that stand or once stood on a port. */
+export async function linesOfPort(
+  manager: EntityManager,
+  projectId: string,
+  port: string,
+): Promise<RevisionLine[]> {
+  const ever = await manager.find(RevisionEntity, {
+    select: { stageId: true },
+    where: { port, stage: { projectId } },
+  });
+  const rows = await manager.find(RevisionEntity, {
+    select: COLUMNS,
+    relations: { stage: true },
+    where: { stageId: In(ever.map(({ stageId }) => stageId)) },
+    order: { number: 'ASC' },
+  });
+  return toLines(rows);
+}
+
 function toLines(rows: readonly RevisionEntity[]): RevisionLine[] {
   const current = new Map<string, RevisionEntity>();
   const locked = new Map<string, number>();

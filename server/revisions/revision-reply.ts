@@ -57,6 +57,7 @@ async function revisionReply(
     ...{ definition, evaluation, designators, createdAtMs, savedAtMs },
     parts: asPartLinks(await manager.findBy(RevisionPartEntity, { revisionId: revision.id })),
     partStanding: [...context.standing],
+    port: context.port,
     policyVersion: context.policy.version,
     designer: named(revision.designerId),
     authors: people.authors.map(named),

@@ -1,4 +1,5 @@
 import type { Criterion, Evaluation, Verdict } from '../../shared/checks/evaluation.ts';
+import { strongDriveA } from '../../shared/checks/port-current.ts';
 import type { Load } from '../../shared/stage/load.ts';
 import type { StageInput } from '../../shared/stage/stage-input.ts';
 import { formatQuantity } from '../../shared/units/engineering-notation.ts';
@@ -47,8 +48,7 @@ export function rowFigures(definition: StageInput, evaluation: Evaluation): RowF
     leastCriterion: least?.id ?? null,
     leastMargin: least?.margin ?? null,
     port: drive.port,
-    // The pin of a two-transistor high side drives the transistor in front.
-    portCurrentA: value('drive-current') ?? value('pre-drive-current'),
+    portCurrentA: strongDriveA(evaluation),
     portLimitA: drive.portTotalA === null ? null : drive.portTotalA * policy.driveDerating,
   };
 }

@@ -72,7 +72,13 @@ const OWN = {
   'tested-range': words('data', 'Figures beyond tested rows', '<=', '1'),
 } as const satisfies Record<string, CriterionWords>;
 type OwnId = keyof typeof OWN;
-export type CriterionId = OwnId | `pre-${OwnId}`;
+
+/** What only a project can be asked, over all its stages: see port-current.ts. */
+const OF_PROJECT = {
+  'port-current': on('Port current', '<=', 'A', ['I', 'port']),
+} as const satisfies Record<string, CriterionWords>;
+
+export type CriterionId = OwnId | keyof typeof OF_PROJECT | `pre-${OwnId}`;
 
 /** Prefix of the criteria of the transistor in front of a two-transistor high side. */
 export const PRE = 'pre-';
@@ -86,7 +92,7 @@ const IN_FRONT = Object.fromEntries(
 ) as Record<`pre-${OwnId}`, CriterionWords>;
 
 /** Every criterion, in the order a result lists them. */
-export const CRITERIA: Record<CriterionId, CriterionWords> = { ...OWN, ...IN_FRONT };
+export const CRITERIA: Record<CriterionId, CriterionWords> = { ...OWN, ...OF_PROJECT, ...IN_FRONT };
 
 const IDS = Object.keys(CRITERIA) as CriterionId[];
 

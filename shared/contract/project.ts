@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import { Criterion } from '../checks/evaluation.ts';
 import { PROJECT_ROLES, REVISION_STATES } from '../review/revision-state.ts';
 import { PolicyLimits } from '../stage/policy.ts';
 import { Id, PersonName, PersonRef } from './common-fields.ts';
@@ -22,6 +23,12 @@ export const listPolicies = {
 export const Member = z.object({ person: PersonRef, roles: z.array(ProjectRole) });
 export type Member = z.infer<typeof Member>;
 
+/** A port of the project's controller, the pins in use taken together. */
+export const PortVerdict = z
+  .object({ port: z.string(), pins: z.int(), criterion: Criterion })
+  .meta({ id: 'PortVerdict' });
+export type PortVerdict = z.infer<typeof PortVerdict>;
+
 const stateCounts = z.object(
   Object.fromEntries(REVISION_STATES.map((state) => [state, z.int()])) as Record<
     (typeof REVISION_STATES)[number],
@@ -44,10 +51,8 @@ export const Project = z
     members: z.array(Member),
     /** Current revisions by state. */
     counts: stateCounts,
-    /** Strong drive current × quantity of the current revisions of each port, A. */
-    ports: z.array(
-      z.object({ port: z.string(), currentA: z.number(), limitA: z.number().nullable() }),
-    ),
+    /** The criterion `port-current` of each port that a current revision stands on. */
+    ports: z.array(PortVerdict),
     /** The roles of the person asking. */
     ownRoles: z.array(ProjectRole),
     /** Whether the person asking may change title, policy and members. */

@@ -12,6 +12,7 @@ import {
   saveCheckRequest,
 } from './check.ts';
 import { Id, Password, PersonRef, Prose, TimeMs } from './common-fields.ts';
+import { PortVerdict } from './project.ts';
 import type { Route } from './route.ts';
 
 const Designator = z
@@ -108,6 +109,8 @@ export const Revision = z
     designators: Designators,
     parts: PartLinks,
     partStanding: z.array(PartStanding),
+    /** The port of the stage's pin with this revision counted among the project's; null where it names none. */
+    port: PortVerdict.nullable(),
     policyVersion: z.int(),
     designer: PersonRef,
     authors: z.array(PersonRef),

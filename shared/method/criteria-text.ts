@@ -50,6 +50,12 @@ export const CRITERIA_TEXT: Readonly<Record<string, CriterionText>> = {
     limit: 'At most the pin’s limit times the policy’s derating.',
     cure: 'A larger base resistor, a larger base–emitter resistor, an output that delivers more, or a second transistor in front.',
   },
+  'port-current': {
+    asks: 'Do all pins of a port together stay within what the controller can carry?',
+    limit:
+      'At most the tightest port limit of the stages on it, times the policy’s derating; the strong drive currents of all current revisions of the project count, each as often as it is built.',
+    cure: 'Larger base resistors or transistors with more gain on this port, stages moved to another port, or a driver between port and stages.',
+  },
   'collector-current': {
     asks: 'Does the collector current stay within its rating?',
     limit: 'At most the rated IC times the policy’s derating.',

@@ -26,7 +26,7 @@ export interface Situation {
   readonly openFindings: number;
   /** What is missing before the check can pass, as sentences. */
   readonly missing: readonly string[];
-  /** Why the project's setting on unverified part data forbids a lock, else null. */
+  /** Why the project's setting on unverified part data, or an overloaded port, forbids a lock, else null. */
   readonly lockBlock: string | null;
 }
 

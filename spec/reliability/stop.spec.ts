@@ -121,7 +121,10 @@ class Load {
     const startedAtMs = performance.now();
     for (let sent = 0; this.#running; await pause(2)) {
       const due = ((performance.now() - startedAtMs) / 1000) * PER_SECOND;
-      for (; sent < due; sent++) this.#pending.push(this.#one((this.#sent += 1)));
+      for (; sent < due; sent++) {
+        this.#sent += 1;
+        this.#pending.push(this.#one(this.#sent));
+      }
     }
     this.#spentSec += (performance.now() - startedAtMs) / 1000;
   }

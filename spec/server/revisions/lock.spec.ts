@@ -1,9 +1,12 @@
 import path from 'node:path';
 import BetterSqlite3 from 'better-sqlite3';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { AuditLineEntity } from '../../../server/audit/audit-line-entity.ts';
 import { SHIPPED_LIMITS } from '../../../server/http/limits.ts';
+import { Project } from '../../../shared/contract/project.ts';
 import { LockPreview, Revision, verifyRevision } from '../../../shared/contract/revision.ts';
 import { done, ProjectFloor } from '../project-floor.ts';
+import { relayDriver } from '../../shared/relay-stage.ts';
 import type { Reply } from '../test-client.ts';
 import { PASSWORD, TestServer } from '../test-server.ts';
 
@@ -62,6 +65,39 @@ describe('signing', () => {
     expect([none.status, none.body.errors[0].pointer]).toEqual([422, '/password']);
     const now = await floor.approver.client.get(`/api/revisions/${idOf(checked)}`);
     expect([now.body.state, now.etag]).toEqual(['checked', checked.etag]);
+  });
+
+  it('holds the stage’s port against its limit over all stages of the project', async () => {
+    const { drive } = relayDriver();
+    const own = await ProjectFloor.open(server, 'PORT-1');
+    const on = (number: number, quantity: number) =>
+      own.at('checked', {
+        ...{ reference: `Q${number}`, quantity },
+        drive: { ...drive, port: 'PB', portTotalA: 0.05 },
+      });
+    const first = await on(1, 5);
+    const alone = Revision.parse(first.body).port!;
+    // 3.6 V less at least 0.65 V over 589 Ω is 5 mA a pin; General practice derates 50 mA to 40 mA
+    expect([alone.port, alone.pins, alone.criterion.status]).toEqual(['PB', 5, 'pass']);
+    expect(alone.criterion.limit).toBeCloseTo(0.04, 12);
+    const second = await on(2, 4);
+    const together = Revision.parse(second.body).port!;
+    expect([together.pins, together.criterion.status]).toEqual([9, 'fail']);
+    const project = await own.designer.client.get(`/api/projects/${own.projectId}`);
+    expect(Project.parse(project.body).ports).toEqual([together]);
+    const refused = await own.lock(second);
+    expect([refused.status, refused.body.code]).toEqual([409, 'conflict']);
+    expect(refused.body.detail).toMatch(/^The stages on port PB draw 4\d\.\d\smA where 40\smA are/);
+    const seen = await own.approver.client.get(`/api/revisions/${idOf(second)}`);
+    expect(Revision.parse(seen.body).may.lock.reason).toBe(refused.body.detail);
+    const back = done(await own.act(own.approver, second, '/return', { reason: 'Port PB.' }));
+    done(await own.act(own.designer, back, '/withdrawal', { reason: 'Moves to PC.' }));
+    const again = await own.approver.client.get(`/api/revisions/${idOf(first)}`);
+    expect(Revision.parse(done(await own.lock(again)).body).state).toBe('locked');
+    const [line] = await server.database.read((manager) =>
+      manager.find(AuditLineEntity, { order: { sequence: 'DESC' }, take: 1 }),
+    );
+    expect(line).toMatchObject({ action: 'revision.locked', detail: { port: alone } });
   });
 
   it('refuses a hash that was not shown', async () => {

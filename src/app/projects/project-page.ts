@@ -3,10 +3,13 @@ import { MatButton } from '@angular/material/button';
 import { MatDialog, MatDialogConfig } from '@angular/material/dialog';
 import { MatTabsModule } from '@angular/material/tabs';
 import { RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
+import type { PortVerdict } from '../../../shared/contract/project.ts';
+import { formatPercent } from '../../../shared/units/engineering-notation.ts';
 import { Icon } from '../ui/icon.ts';
 import { LoadState } from '../ui/load-state.ts';
 import { QuantityText } from '../ui/quantity-text.ts';
 import { StripCell, TitleStrip } from '../ui/title-strip.ts';
+import { VerdictMark } from '../ui/verdict-mark.ts';
 import { ProjectStore } from './project-store.ts';
 import { StateCounts } from './state-counts.ts';
 import { countsText, stageCount } from './state-counts-text.ts';
@@ -27,6 +30,7 @@ import { StageList } from './stage-list-store.ts';
     StateCounts,
     StripCell,
     TitleStrip,
+    VerdictMark,
   ],
   providers: [ProjectStore, StageList],
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -58,6 +62,12 @@ export class ProjectPage {
       ? null
       : 'Only a designer of the project adds stages.',
   );
+
+  protected portLabel({ port, criterion: { margin } }: PortVerdict): string {
+    return margin === null
+      ? `Port ${port}`
+      : `Port ${port}, margin ${formatPercent(margin, { digits: 2 })}`;
+  }
 
   protected async importFiles(): Promise<void> {
     const project = this.project();

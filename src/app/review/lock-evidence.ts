@@ -2,9 +2,11 @@ import { ChangeDetectionStrategy, Component, computed, input } from '@angular/co
 import type { Revision } from '../../../shared/contract/revision.ts';
 import { CAUTIONS } from '../../../shared/method/cautions.ts';
 import { criterionName } from '../../../shared/report/criterion-name.ts';
+import { portSentence } from '../../../shared/report/port-sentence.ts';
 import { formatNumber, formatPercent } from '../../../shared/units/engineering-notation.ts';
 import { Icon } from '../ui/icon.ts';
 import { SymbolText } from '../ui/symbol-text.ts';
+import { STATUS_ICONS } from '../ui/verdict-mark.ts';
 import { LeastMargins } from './least-margins.ts';
 import { lockedValues } from './locked-values.ts';
 import { SectionHead } from './section-head.ts';
@@ -52,6 +54,13 @@ export class LockEvidence {
     const acted = (act: 'answered' | 'closed') =>
       findings.filter(({ history }) => history.some((event) => event.act === act)).length;
     return { raised: findings.length, answered: acted('answered'), closed: acted('closed') };
+  });
+  protected readonly port = computed(() => {
+    const { port } = this.revision();
+    if (port === null) return null;
+    const { status } = port.criterion;
+    const tone = { pass: 'ok', fail: 'fail', marginal: 'warn', open: 'warn', stated: '' }[status];
+    return { text: portSentence(port), icon: STATUS_ICONS[status], tone };
   });
   protected readonly parts = computed(() =>
     this.revision().partStanding.map((part) => ({

@@ -118,6 +118,7 @@ export const IN_CHECK: Revision = {
   },
   parts: { transistor: null, preDriver: null, load: null, drive: null, clamp: null },
   partStanding: [],
+  port: null,
   policyVersion: 3,
   designer: DESIGNER,
   authors: [DESIGNER],

@@ -12,7 +12,8 @@ export const STATUS_WORDS: Record<CriterionStatus, string> = {
   stated: 'Stated',
 };
 
-const ICONS: Record<CriterionStatus, IconName> = {
+/** Icon of each status, for a sentence that says the rest. */
+export const STATUS_ICONS: Record<CriterionStatus, IconName> = {
   pass: 'circle-check',
   marginal: 'triangle',
   fail: 'octagon',
@@ -75,7 +76,7 @@ export class VerdictMark {
   /** `stacked`: icon over word, for the verdict list; `large`: the verdict of a sheet. */
   readonly layout = input<'row' | 'stacked' | 'large'>('row');
 
-  protected readonly icon = computed(() => ICONS[this.status()]);
+  protected readonly icon = computed(() => STATUS_ICONS[this.status()]);
   protected readonly word = computed(() => STATUS_WORDS[this.status()]);
   protected readonly classes = computed(() => `${this.status()} ${this.layout()}`);
 }

@@ -52,6 +52,7 @@ export function draftRevision(change: Partial<Revision> = {}): Revision {
     designators: NO_DESIGNATORS,
     parts: NO_PARTS,
     partStanding: [],
+    port: none,
     policyVersion: 1,
     designer: person,
     authors: [person],
