@@ -1,8 +1,10 @@
 import { obstacleTo } from '../checks/applicability.ts';
 import { CRITERIA, type CriterionId } from '../checks/criteria.ts';
 import { criterionInSentence } from '../checks/criterion-in-sentence.ts';
+import { decidingCriteria } from '../checks/deciding-criteria.ts';
 import { evaluateStage } from '../checks/evaluate-stage.ts';
 import { type Criterion, type Evaluation, VERDICTS, type Verdict } from '../checks/evaluation.ts';
+import type { Policy } from '../stage/policy.ts';
 import type { StageInput, Topology } from '../stage/stage-input.ts';
 import type { TransistorData } from '../stage/transistor-data.ts';
 import { formatPercent } from '../units/engineering-notation.ts';
@@ -75,15 +77,14 @@ const withRb = (stage: StageInput, valueOhm: number | null): StageInput => ({
 });
 
 function judgedAs(stage: StageInput, evaluation: Evaluation, sized: boolean): JudgedPart {
-  const deciding = decidingCriterion(evaluation);
   return {
     stage,
     verdict: evaluation.verdict,
     margin: leastMargin(evaluation.criteria),
-    worst: deciding?.id ?? null,
+    worst: decidingCriteria(evaluation)[0]?.id ?? null,
     baseResistorOhm: stage.baseResistor.valueOhm,
     sized,
-    reason: reasonOf(evaluation, deciding),
+    reason: reasonOf(evaluation, stage.policy),
   };
 }
 
@@ -114,7 +115,8 @@ function lowSideWith({ internal, darlington }: TransistorData): Topology {
   return darlington ? 'low-side-darlington' : 'low-side-npn';
 }
 
-function unfit(reason: string): JudgedPart {
+/** A part that cannot stand in the stage at all, and why. */
+export function unfit(reason: string): JudgedPart {
   return {
     stage: null,
     verdict: null,
@@ -137,26 +139,23 @@ function leastMargin(criteria: readonly Criterion[]): number | null {
   return Number.isFinite(least) ? least : null;
 }
 
-function decidingCriterion({ criteria, verdict }: Evaluation): Criterion | undefined {
-  return criteria
-    .filter(({ status }) => status === verdict)
-    .sort((a, b) => (a.margin ?? -Infinity) - (b.margin ?? -Infinity))[0];
-}
-
-function reasonOf({ verdict, findings }: Evaluation, deciding: Criterion | undefined): string {
+function reasonOf(evaluation: Evaluation, { marginalBand }: Policy): string {
+  const { verdict, findings } = evaluation;
+  const [deciding] = decidingCriteria(evaluation);
   if (deciding === undefined) return findings[0]?.text ?? '';
   const { id, margin } = deciding;
-  const beyond = findings.find((finding) => finding.id === 'outside-tested-range');
-  if (id === 'tested-range' && beyond !== undefined) return beyond.text;
   const name = CRITERIA[id as CriterionId].name;
-  const by = margin === null ? null : formatPercent(Math.abs(margin), { digits: 2 });
-  switch (verdict) {
-    case 'fail':
-      return by === null ? `${name} is not met.` : `${name} is missed by ${by}.`;
-    case 'open':
-      return `${name} cannot be judged by the data sheet.`;
-    case 'marginal':
-    case 'pass':
-      return `Least margin ${by ?? ''}: ${criterionInSentence(id)}.`;
-  }
+  const by = margin === null ? '' : ` by ${formatPercent(Math.abs(margin), { digits: 2 })}`;
+  if (verdict === 'fail') return by === '' ? `${name} is not met.` : `${name} is missed${by}.`;
+  const cause = findings.find((each) => each.id === CAUSES[id])?.text;
+  if (verdict === 'open') return cause ?? `${name} cannot be judged by the data sheet.`;
+  const capped = verdict === 'marginal' && (margin ?? 0) >= marginalBand;
+  return (capped ? cause : undefined) ?? `Least margin: ${criterionInSentence(id)} is met${by}.`;
 }
+
+/** The finding that says why a criterion is open or at best marginal. */
+const CAUSES: Readonly<Record<string, string>> = {
+  'tested-range': 'outside-tested-range',
+  'overdrive-factor': 'vbe-sat-not-guaranteed',
+  'forced-beta': 'vbe-sat-not-guaranteed',
+};

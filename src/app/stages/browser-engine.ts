@@ -2,6 +2,7 @@ import { DestroyRef, inject, Injectable } from '@angular/core';
 import { filter, map, Observable, of, Subject, take } from 'rxjs';
 import { evaluateStage } from '../../../shared/checks/evaluate-stage.ts';
 import type { Evaluation } from '../../../shared/checks/evaluation.ts';
+import type { ShuntSizing } from '../../../shared/sizing/size-shunt.ts';
 import type { Sizing } from '../../../shared/sizing/sizing.ts';
 import type { StageInput } from '../../../shared/stage/stage-input.ts';
 import type { EngineReply, EngineRequest } from './engine-worker-message.ts';
@@ -37,7 +38,12 @@ export class BrowserEngine implements Engine {
     return this.ask<Sizing>('size', input);
   }
 
-  private ask<Result extends Evaluation | Sizing>(
+  /** A recommendation for RBE; null where the stage takes none. */
+  sizeShunt(input: StageInput): Observable<ShuntSizing | null> {
+    return this.ask<ShuntSizing | null>('shunt', input);
+  }
+
+  private ask<Result extends EngineReply['result']>(
     task: EngineRequest['task'],
     input: StageInput,
   ): Observable<Result> {

@@ -25,6 +25,7 @@ import {
   shapeOf,
   type FieldPath,
 } from './stage-fields.ts';
+import { ShuntAdvice } from './shunt-advice.ts';
 import type { StageForm } from './stage-form.ts';
 import { stageToForm } from './stage-to-form.ts';
 
@@ -51,7 +52,7 @@ const DESIGNATED: readonly PartKey[] = [
 /** The whole definition as rows in groups; seldom used fields are folded in their group. */
 @Component({
   selector: 'app-form-panel',
-  imports: [DesignatorGroup, FieldRow, Icon, PolicyGroup],
+  imports: [DesignatorGroup, FieldRow, Icon, PolicyGroup, ShuntAdvice],
   templateUrl: './form-panel.html',
   styleUrl: './form-panel.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -67,6 +68,7 @@ export class FormPanel {
   readonly selected = input<PartKey | null>(null);
   readonly readOnly = input(false);
   readonly partAsked = output<PartRole>();
+  readonly shuntTaken = output<number>();
   readonly designatorsChange = output<{ designators: Designators; field: string }>();
   readonly focusedPart = output<PartKey | null>();
 

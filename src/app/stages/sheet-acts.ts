@@ -43,12 +43,24 @@ export class SheetActs {
       role,
       stage: draft.definition,
     } satisfies PartPickerData);
-    if (picked === undefined) return;
-    const { definition, partRevisionId, choice } = picked;
+    if (picked !== undefined) this.takePart(role, picked);
+  }
+
+  /** Puts a part of the library in its place, with the link to the data it was filled from. */
+  takePart(role: PartRole, { definition, partRevisionId, choice }: PickedPart): void {
+    const draft = this.store.draft();
+    if (draft === null || !this.store.editable()) return;
     const parts = linked(draft.parts, role, partRevisionId, choice);
     // A load of another kind leaves its clamp behind.
     const clampKept = definition.clamp.kind === draft.definition.clamp.kind || role === 'clamp';
     this.store.replace({ definition, parts: clampKept ? parts : { ...parts, clamp: null } });
+  }
+
+  takeShunt(valueOhm: number): void {
+    const definition = this.store.draft()?.definition;
+    if (definition?.shuntResistor == null || !this.store.editable()) return;
+    const shuntResistor = { ...definition.shuntResistor, valueOhm };
+    this.store.replace({ definition: { ...definition, shuntResistor } });
   }
 
   submit(): Promise<void> {

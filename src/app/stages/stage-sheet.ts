@@ -26,6 +26,7 @@ import { BrowserEngine } from './browser-engine.ts';
 import { CircuitPanel } from './circuit-panel.ts';
 import { fieldId } from './field-row.ts';
 import { FormPanel, mainField } from './form-panel.ts';
+import { PartsForStage } from './parts-for-stage.ts';
 import { SaveStatus } from './save-status.ts';
 import { SheetActs } from './sheet-acts.ts';
 import { SheetForm } from './sheet-form.ts';
@@ -56,6 +57,7 @@ const TABS: readonly (readonly [Tab, string])[] = [
     MatButton,
     MatMenuModule,
     NotAllowed,
+    PartsForStage,
     RouterLink,
     SaveStatus,
     SheetNotes,

@@ -5,6 +5,7 @@ import {
   type CriterionId,
   PRE,
 } from '../../../shared/checks/criteria.ts';
+import { decidingCriteria } from '../../../shared/checks/deciding-criteria.ts';
 import type { Criterion, Evaluation } from '../../../shared/checks/evaluation.ts';
 import { CRITERIA_TEXT } from '../../../shared/method/criteria-text.ts';
 import { cornerWords } from '../../../shared/report/corner-words.ts';
@@ -124,10 +125,8 @@ export function shortCornerText(criterion: Criterion): string {
 
 /** The verdict in one sentence: which criterion decides it, and by how much. */
 export function verdictSentence(evaluation: Evaluation): string {
-  const { criteria, verdict } = evaluation;
-  const deciding = criteria
-    .filter(({ status }) => status === verdict)
-    .sort((a, b) => (a.margin ?? -Infinity) - (b.margin ?? -Infinity));
+  const { verdict } = evaluation;
+  const deciding = decidingCriteria(evaluation);
   const [worst] = deciding;
   if (worst === undefined) return evaluation.findings[0]?.text ?? '';
   const name = criterionName(worst.id);
