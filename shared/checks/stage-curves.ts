@@ -5,9 +5,11 @@ import {
   outputCurve,
   type Sample,
 } from '../physics/curves.ts';
-import { deviceAt, fitDevice, type DeviceModel, type FigureOrigin } from '../physics/device-fit.ts';
+import { SHEET_DEG_C } from '../physics/constants.ts';
+import { deviceAt, type DeviceModel, type FigureOrigin } from '../physics/device-fit.ts';
 import {
   baseVoltageV,
+  collectorCurrentA,
   meetLoadLine,
   outputResistanceOhm,
   type BaseDrive,
@@ -15,13 +17,10 @@ import {
   type Device,
 } from '../physics/device-model.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
-import { sheetSaturation, type SheetSaturation } from '../stage/part-curves.ts';
+import { deviceOfPart, sheetSaturation, type SheetSaturation } from '../stage/part-curves.ts';
 import type { StageInput } from '../stage/stage-input.ts';
-import { roundStep } from '../units/round-step.ts';
 import { pointAt } from './corner-figures.ts';
 import type { Corner } from './evaluation.ts';
-
-const NO_FIGURES = { earlyV: null, betaR: null, isA: null, rcOhm: null };
 
 /** The operating point of a corner in limit figures, as the verdict uses it. */
 export interface LimitPoint {
@@ -60,18 +59,16 @@ export interface CurvesAtCorner {
  * What the curves of a stage start from.
  *
  * @param corner as a criterion reports it; null: the middle of every tolerance
- * @returns null where the stage cannot be drawn: no load current, or no drive
+ * @returns null where the stage cannot be drawn: no load current, no drive, or a part without a row
  */
 export function curvesAtCorner(input: StageInput, corner: Corner | null): CurvesAtCorner | null {
   const point = pointAt(input, corner);
   const { condition, ibA, icA, vceV, tjDegC, rceSatOhm, saturated, model } = point;
   const { availableV, loadOhm, fullA } = condition;
-  if (!(fullA > 0 && ibA > 0 && Number.isFinite(tjDegC))) return null;
+  const rowless = model.part.gain === null && model.part.saturation === null;
+  if (rowless || !(fullA > 0 && ibA > 0 && Number.isFinite(tjDegC))) return null;
   const { transistor, policy } = model.input;
-  const device = fitDevice(transistor.model ?? NO_FIGURES, {
-    ...model.part,
-    icMaxA: transistor.limits.icA,
-  });
+  const device = deviceOfPart(model.part, transistor);
   const own = deviceAt(device, ibA, tjDegC, policy.rceTempcoPerK);
   const expected = meetLoadLine(own, { kind: 'current', ibA }, availableV, loadOhm);
   return {
@@ -100,7 +97,7 @@ export interface OutputCurve {
   readonly samples: readonly Sample[];
 }
 
-/** How many curves lie below the full load current, and the step between two at constant VBE, V. */
+/** Curves below the full load current, and the step between two at constant VBE, V. */
 const FAMILY = 5;
 const VBE_STEP_V = 0.01;
 /** The curves go a little beyond the end of the load line. */
@@ -130,16 +127,37 @@ export function outputCharacteristics(
   ];
 }
 
+const FOOT_STEPS = 32;
+
+/** The expected curve of the corner's own base current up to a small VCE, in fine equal steps. */
+export function footOfCurve(at: CurvesAtCorner, toV: number): readonly Sample[] {
+  const { limit, model, input } = at;
+  const own = deviceAt(model, limit.ibA, limit.tjDegC, input.policy.rceTempcoPerK);
+  return Array.from({ length: FOOT_STEPS + 1 }, (_, k) => {
+    const vceV = (toV * k) / FOOT_STEPS;
+    return [vceV, collectorCurrentA(own, { kind: 'current', ibA: limit.ibA }, vceV)];
+  });
+}
+
 /** Base currents in round steps, the largest making at most the full load current at the end of the load line. */
 function currentFamily(at: CurvesAtCorner, device: (ibA: number) => Device): BaseDrive[] {
   const activeA = at.fullA / (1 + at.availableV / at.earlyV);
   // The gain of a base current near the one asked for settles in two rounds.
   const roughA = activeA / device(activeA / USUAL_GAIN).gain;
   const largestA = activeA / device(roughA).gain;
-  const stepA = roundStep(largestA / FAMILY);
-  const count = Math.max(1, Math.floor(largestA / stepA));
+  const stepA = familyStepA(largestA);
+  const count = Math.floor(largestA / stepA + 1e-9);
   return Array.from({ length: count }, (_, k) => ({ kind: 'current', ibA: stepA * (k + 1) }));
 }
+
+/** The largest round step that goes into a current as often as there are to be curves, or once more. */
+function familyStepA(largestA: number): number {
+  const decade = 10 ** Math.floor(Math.log10(largestA / FAMILY));
+  const factor = ROUND_STEPS.find((each) => each * decade <= (largestA / FAMILY) * (1 + 1e-9));
+  return (factor ?? 1) * decade;
+}
+
+const ROUND_STEPS = [8, 6, 5, 4, 3, 2.5, 2, 1.5, 1];
 
 /** Where the search for a base current's gain starts. */
 const USUAL_GAIN = 100;
@@ -160,6 +178,8 @@ function voltageFamily(fullA: number, device: Device): BaseDrive[] {
 export interface SaturationAtCorner extends SheetSaturation {
   /** Limit at the corner's junction temperature and forced β. */
   readonly corner: readonly Sample[];
+  /** Whether it is another line than the sheet's. */
+  readonly cornerDiffers: boolean;
   readonly expected: readonly Sample[];
 }
 
@@ -167,6 +187,8 @@ const CURRENT_STEPS = 40;
 /** Rows far above the load current would press the stage's own part of the line into a corner. */
 const LARGEST_SPAN = 5;
 const AHEAD = 1.25;
+/** Lines closer than this are one, V. */
+const SAME_V = 1e-6;
 
 /** @returns null where the part prints no VCE(sat) row */
 export function saturationAtCorner(at: CurvesAtCorner): SaturationAtCorner | null {
@@ -180,9 +202,14 @@ export function saturationAtCorner(at: CurvesAtCorner): SaturationAtCorner | nul
   // A part judged by its input voltage takes its VO(on) rows as they stand.
   const judged = at.byInput ? { ...condition, forcedBeta: 0 } : condition;
   const currents = currentSteps([0, toA], near, CURRENT_STEPS, 'equal');
+  const corner = currents.map((icA): Sample => [icA, limitSaturationV(line, icA, judged)]);
+  const sheetAt = { ...judged, tjDegC: SHEET_DEG_C, forcedBeta: 0 };
   return {
     ...sheetSaturation(line, input.transistor, rceTempcoPerK, toA),
-    corner: currents.map((icA) => [icA, limitSaturationV(line, icA, judged)]),
+    corner,
+    cornerDiffers: corner.some(
+      ([icA, vceV]) => Math.abs(vceV - limitSaturationV(line, icA, sheetAt)) > SAME_V,
+    ),
     expected: currents.slice(1).map((icA) => [icA, expectedSaturationV(at.model, icA, condition)]),
   };
 }

@@ -7,9 +7,18 @@ import {
   mostGain,
   type Sample,
 } from '../physics/curves.ts';
+import { fitDevice, type DeviceModel } from '../physics/device-fit.ts';
 import type { GainTable } from '../physics/gain.ts';
 import type { SaturationLine } from '../physics/saturation.ts';
+import type { PartModel } from './part-model.ts';
 import type { TransistorData } from './transistor-data.ts';
+
+const NO_FIGURES = { earlyV: null, betaR: null, isA: null, rcOhm: null };
+
+/** The device expected of a part. */
+export function deviceOfPart(part: PartModel, { model, limits }: TransistorData): DeviceModel {
+  return fitDevice(model ?? NO_FIGURES, { ...part, icMaxA: limits.icA });
+}
 
 /** The VCE(sat) line of a part at 25 °C and the IC/IB of its rows, in V over A. */
 export interface SheetSaturation {

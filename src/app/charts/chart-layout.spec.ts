@@ -166,7 +166,7 @@ describe('chart table', () => {
         [1, 0.01],
         [3, 0.02],
       ],
-      { joined: false, marker: 'circle' },
+      { joined: false, labelled: null, marker: 'circle' },
     );
     const curve = series('curve', [
       [0, 0],

@@ -9,6 +9,8 @@ export interface ChartAxis {
   readonly to: number;
   /** Whether the ends stay where they are; else a linear axis runs on to its next tick. */
   readonly exact: boolean;
+  /** Smallest difference worth telling, SI; null: three digits of the largest value. */
+  readonly finest: number | null;
 }
 
 /** 1 what the tool says, 2 touch and current, 3 information, 4 and 5 whatever comes beside them. */
@@ -27,8 +29,8 @@ export interface ChartSeries {
   readonly marker: 'circle' | 'cross' | null;
   /** Whether the points are joined; unjoined ones are read only where they stand. */
   readonly joined: boolean;
-  /** Whether the label stands at the line; else it only heads the column. */
-  readonly labelled: boolean;
+  /** Where along the line the label is first tried; null: it only heads the column. */
+  readonly labelled: 'start' | 'end' | null;
 }
 
 /** A line right across: a limit in red, or another level in the tone given. */
@@ -110,7 +112,7 @@ export function series(
     dash: 'solid',
     marker: null,
     joined: true,
-    labelled: true,
+    labelled: 'end',
     ...look,
   };
 }
@@ -120,7 +122,7 @@ export function axis(
   quantity: string,
   unit: string,
   [from, to]: readonly [from: number, to: number],
-  look: Partial<Pick<ChartAxis, 'scale' | 'exact'>> = {},
+  look: Partial<Pick<ChartAxis, 'scale' | 'exact' | 'finest'>> = {},
 ): ChartAxis {
-  return { quantity, unit, from, to, scale: 'linear', exact: false, ...look };
+  return { quantity, unit, from, to, scale: 'linear', exact: false, finest: null, ...look };
 }

@@ -1,6 +1,5 @@
 import { formatQuantity } from '../../../shared/units/engineering-notation.ts';
 import { PREFIXES, QUANTITY_UNITS } from '../../../shared/units/quantity-unit.ts';
-import { roundStep } from '../../../shared/units/round-step.ts';
 import { fixedFigure } from '../ui/fixed-figure.ts';
 import type { ChartAxis } from './chart-model.ts';
 
@@ -10,7 +9,7 @@ export interface AxisUnit {
   readonly symbol: string;
   /** Number shown per SI value, 1000 for mA. */
   readonly factor: number;
-  /** Decimals that show three digits of the largest value. */
+  /** Decimals that show three digits of the largest value, or the finest difference. */
   readonly decimals: number;
 }
 
@@ -18,11 +17,13 @@ export interface AxisUnit {
 const LARGEST_IN_PREFIX = { V: 0.1 } as const;
 
 /** The one unit of an axis: an exponent of 3 that leaves its largest value (log: its middle) above 1. */
-export function axisUnit({ unit, scale, from, to }: ChartAxis): AxisUnit {
+export function axisUnit(axis: ChartAxis): AxisUnit {
+  const { unit, scale, from, to } = axis;
   const largest = Math.max(Math.abs(from), Math.abs(to));
-  if (unit === '%') return { symbol: '%', factor: 100, decimals: decimalsOf(largest * 100) };
+  const decimals = (factor: number) => decimalsOf(largest * factor, axis.finest, factor);
+  if (unit === '%') return { symbol: '%', factor: 100, decimals: decimals(100) };
   const kind = QUANTITY_UNITS[unit as keyof typeof QUANTITY_UNITS];
-  if (!kind.prefixed) return { symbol: kind.symbol, factor: 1, decimals: decimalsOf(largest) };
+  if (!kind.prefixed) return { symbol: kind.symbol, factor: 1, decimals: decimals(1) };
   const size = scale === 'log' ? Math.sqrt(from * to) : largest;
   const least = unit === 'V' ? LARGEST_IN_PREFIX.V : 1;
   const prefix =
@@ -30,11 +31,15 @@ export function axisUnit({ unit, scale, from, to }: ChartAxis): AxisUnit {
     PREFIXES[PREFIXES.length - 1];
   const chosen = size > 0 && prefix !== undefined ? prefix : { exponent: 0, symbol: '' };
   const factor = 10 ** -chosen.exponent;
-  return { symbol: chosen.symbol + kind.symbol, factor, decimals: decimalsOf(largest * factor) };
+  return { symbol: chosen.symbol + kind.symbol, factor, decimals: decimals(factor) };
 }
 
-const decimalsOf = (largest: number) =>
-  largest > 0 ? Math.min(6, Math.max(0, 2 - Math.floor(Math.log10(largest) + 1e-9))) : 0;
+function decimalsOf(largest: number, finest: number | null, factor: number): number {
+  const places = (least: number) => Math.ceil(-Math.log10(least) - 1e-9);
+  const usual = largest > 0 ? 2 - Math.floor(Math.log10(largest) + 1e-9) : 0;
+  const wanted = finest === null ? usual : Math.max(usual, places(finest * factor));
+  return Math.min(6, Math.max(0, wanted));
+}
 
 /** "IC / mA"; a bare number has no unit to name. */
 export function axisTitle(axis: ChartAxis): string {
@@ -100,6 +105,13 @@ function linearScale(axis: ChartAxis, startPx: number, endPx: number, room: numb
   const to = top / factor;
   const perValue = (endPx - startPx) / (to - from);
   return { from, to, ticks, toPx: (value) => startPx + (value - from) * perValue };
+}
+
+/** 1, 2, 2.5 or 5 times a power of ten, the smallest that is not below the step asked for. */
+function roundStep(least: number): number {
+  const decade = 10 ** Math.floor(Math.log10(least));
+  const factor = [1, 2, 2.5, 5].find((each) => each * decade >= least * (1 - 1e-9)) ?? 10;
+  return factor * decade;
 }
 
 const isWhole = (value: number) => Math.abs(value - Math.round(value)) < 1e-6;

@@ -63,9 +63,9 @@ function curveOf(series: ChartSeries, { x, y, plot }: PlotFrame): Piece {
     text: series.label,
     className: `label ${look}`,
     mono: false,
-    spots: spotsAlong(longest),
+    spots: spotsAlong(series.labelled === 'start' ? [...longest].reverse() : longest),
   };
-  const wanted = series.labelled && longest.length > 0;
+  const wanted = series.labelled !== null && longest.length > 0;
   return {
     shapes,
     lines: [...lines, ...marked.map((point) => boxLine(point, 4))],
