@@ -14,6 +14,7 @@ import { StateChip } from '../ui/state-chip.ts';
 import { SymbolText } from '../ui/symbol-text.ts';
 import { StripCell, TitleStrip } from '../ui/title-strip.ts';
 import { DataTable } from './data-table.ts';
+import { PartCurves } from './part-curves.ts';
 import { KIND_WORDS } from './part-kinds.ts';
 import { PartStore } from './part-store.ts';
 import { usableLimits } from './usable-limits.ts';
@@ -30,6 +31,7 @@ import { VerifyDialog, type VerifyAsked } from './verify-dialog.ts';
     MatButton,
     Moment,
     NotAllowed,
+    PartCurves,
     RouterLink,
     StateChip,
     StripCell,
@@ -64,6 +66,11 @@ export class PartPage {
   protected readonly limits = computed(() => {
     const record = this.shown()?.record;
     return record?.kind === 'transistor' ? usableLimits(record.limits, GENERAL_PRACTICE) : [];
+  });
+  /** What has curves to draw. */
+  protected readonly transistor = computed(() => {
+    const record = this.shown()?.record;
+    return record?.kind === 'transistor' ? record : null;
   });
   /** The ratings stand in their own panel, unless several makers' are to be told apart. */
   protected readonly tables = computed(() => {
