@@ -20,9 +20,7 @@ import { SchematicView } from '../schematic/schematic-view.ts';
 import { Icon } from '../ui/icon.ts';
 import { criterionName } from './ladder-model.ts';
 import { storedResistorStyle, storeResistorStyle, type ResistorStyle } from './resistor-style.ts';
-
-export const NOMINAL = 'nominal';
-const DECIDED_AT_FULL_CURRENT: readonly string[] = ['overdrive-factor', 'forced-beta'];
+import { hasFigures, judgedStage, NOMINAL, shownCorner } from './shown-corner.ts';
 
 /** The circuit with the figures of one corner, as a drawing or as text. */
 @Component({
@@ -51,20 +49,11 @@ export class CircuitPanel {
       .criteria.filter(({ corner }) => corner !== null)
       .map(({ id }) => ({ id, text: `${criterionName(id)}, worst corner` })),
   );
-  /** The stage as judged: with the recommended resistor where the field is empty. */
-  private readonly judged = computed<StageInput>(() => {
-    const stage = this.stage();
-    const valueOhm = stage.baseResistor.valueOhm ?? this.evaluation().baseResistorOhm;
-    return { ...stage, baseResistor: { ...stage.baseResistor, valueOhm } };
-  });
+  private readonly judged = computed(() => judgedStage(this.stage(), this.evaluation()));
   private readonly figures = computed<CornerFigures | null>(() => {
-    const { criteria, corners } = this.evaluation();
     const stage = this.judged();
-    if (corners === 0 || stage.baseResistor.valueOhm === null) return null;
-    const found = criteria.find(({ id }) => id === this.at())?.corner ?? null;
-    // Saturation is decided as if VCE were zero: the drawing shows the VCE(sat) there will be.
-    const asDecided = DECIDED_AT_FULL_CURRENT.includes(this.at());
-    const corner = found !== null && asDecided ? { ...found, vceSat: 'max' } : found;
+    if (!hasFigures(stage, this.evaluation())) return null;
+    const corner = shownCorner(this.evaluation(), this.at());
     return corner === null ? nominalFigures(stage) : figuresAtCorner(stage, corner);
   });
   protected readonly drawing = computed(() =>

@@ -1,5 +1,7 @@
-import type { CriterionStatus } from '../../../shared/checks/evaluation.ts';
+import type { CriterionStatus, Evaluation } from '../../../shared/checks/evaluation.ts';
 import { CRITERIA, type CriterionId } from '../../../shared/checks/criteria.ts';
+import { candidateOf } from '../../../shared/sizing/judged-value.ts';
+import { DECIDED_BY_RB } from '../../../shared/sizing/rb-dependence.ts';
 import type { Candidate, Sizing } from '../../../shared/sizing/sizing.ts';
 import { formatQuantity } from '../../../shared/units/engineering-notation.ts';
 import { criterionInSentence } from '../../../shared/checks/criterion-in-sentence.ts';
@@ -18,6 +20,8 @@ export interface Rung {
   readonly inWindow: boolean;
   readonly recommended: boolean;
   readonly inUse: boolean;
+  /** Whether it is no preferred value of the window's range, but stands there because it is in use. */
+  readonly standIn: boolean;
 }
 
 /** Neighbours of one verdict, whose word stands once below them. */
@@ -47,9 +51,22 @@ const near = (a: number | null, b: number | null) =>
 export const criterionName = (id: string): string =>
   Object.hasOwn(CRITERIA, id) ? CRITERIA[id as CriterionId].name : id;
 
-/** The window as it is drawn. A value in use that is no candidate has no rung. */
-export function ladder(sizing: Sizing, inUseOhm: number | null): Ladder {
-  const rungs = sizing.candidates.map((candidate) => rungOf(candidate, sizing, inUseOhm));
+/**
+ * The window as it is drawn. A value in use that was not sized stands in at its place, with what the verdicts say of it.
+ *
+ * @param evaluation of the stage on show; null while it is not judged
+ */
+export function ladder(
+  sizing: Sizing,
+  inUseOhm: number | null,
+  evaluation: Evaluation | null,
+): Ladder {
+  const extra = standIn(sizing, inUseOhm, evaluation);
+  const candidates = [...sizing.candidates, ...extra].sort((a, b) => a.valueOhm - b.valueOhm);
+  const rungs = candidates.map((candidate) => ({
+    ...rungOf(candidate, sizing, inUseOhm),
+    standIn: extra.includes(candidate),
+  }));
   const from = rungs.findIndex(({ inWindow }) => inWindow);
   const to = rungs.findLastIndex(({ inWindow }) => inWindow);
   return {
@@ -61,7 +78,24 @@ export function ladder(sizing: Sizing, inUseOhm: number | null): Ladder {
   };
 }
 
-function rungOf(candidate: Candidate, sizing: Sizing, inUseOhm: number | null): Rung {
+/** The value in use as a candidate of its own; none where it was sized, or is not judged. */
+function standIn(
+  { candidates }: Sizing,
+  inUseOhm: number | null,
+  evaluation: Evaluation | null,
+): Candidate[] {
+  if (inUseOhm === null || candidates.length === 0 || evaluation === null) return [];
+  if (candidates.some(({ valueOhm }) => near(valueOhm, inUseOhm))) return [];
+  if (!near(evaluation.baseResistorOhm, inUseOhm) || evaluation.criteria.length === 0) return [];
+  const { criteria } = evaluation;
+  return [candidateOf({ valueOhm: inUseOhm, criteria }, new Set(DECIDED_BY_RB))];
+}
+
+function rungOf(
+  candidate: Candidate,
+  sizing: Sizing,
+  inUseOhm: number | null,
+): Omit<Rung, 'standIn'> {
   const { valueOhm, margin, verdict, worst } = candidate;
   const text = formatQuantity(valueOhm, 'Ohm');
   const [figure = text, unit = 'Ω'] = text.split('\u00a0');

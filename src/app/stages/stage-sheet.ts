@@ -24,6 +24,7 @@ import { StripCell, TitleStrip } from '../ui/title-strip.ts';
 import { VerdictMark } from '../ui/verdict-mark.ts';
 import { BrowserEngine } from './browser-engine.ts';
 import { CircuitPanel } from './circuit-panel.ts';
+import { CurvesPanel } from './curves/curves-panel.ts';
 import { fieldId } from './field-row.ts';
 import { FormPanel, mainField } from './form-panel.ts';
 import { PartsForStage } from './parts-for-stage.ts';
@@ -40,11 +41,12 @@ import { VerdictPanel } from './verdict-panel.ts';
 import { countWords, verdictSentence } from './verdict-words.ts';
 import { WindowLadder } from './window-ladder.ts';
 
-type Tab = 'circuit' | 'values' | 'verdicts';
+type Tab = 'circuit' | 'values' | 'verdicts' | 'charts';
 const TABS: readonly (readonly [Tab, string])[] = [
   ['circuit', 'Circuit'],
   ['values', 'Values'],
   ['verdicts', 'Verdicts'],
+  ['charts', 'Charts'],
 ];
 
 /** The main screen: form, circuit, window and verdicts of one revision, side by side and live. */
@@ -52,6 +54,7 @@ const TABS: readonly (readonly [Tab, string])[] = [
   selector: 'app-stage-sheet',
   imports: [
     CircuitPanel,
+    CurvesPanel,
     FormPanel,
     Icon,
     MatButton,

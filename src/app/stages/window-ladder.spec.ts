@@ -5,7 +5,10 @@ import {
   signal,
 } from '@angular/core';
 import { TestBed, type ComponentFixture } from '@angular/core/testing';
+import { evaluateStage } from '../../../shared/checks/evaluate-stage.ts';
+import type { Evaluation } from '../../../shared/checks/evaluation.ts';
 import type { Sizing } from '../../../shared/sizing/sizing.ts';
+import { relaySample } from './testing/relay-sample.ts';
 import { WindowLadder } from './window-ladder.ts';
 
 const candidate = (valueOhm: number, margin: number, verdict: 'pass' | 'marginal' | 'fail') => ({
@@ -36,6 +39,7 @@ const SIZING: Sizing = {
     series="E24"
     [sizing]="sizing()"
     [inUseOhm]="inUse()"
+    [evaluation]="evaluation()"
     [readOnly]="readOnly()"
     (taken)="inUse.set($event)"
   />`,
@@ -44,6 +48,7 @@ class Host {
   readonly sizing = signal<Sizing | null>(SIZING);
   readonly inUse = signal<number | null>(680);
   readonly readOnly = signal(false);
+  readonly evaluation = signal<Evaluation | null>(null);
 }
 
 describe('WindowLadder', () => {
@@ -122,5 +127,23 @@ describe('WindowLadder', () => {
       'forced β asks for a smaller one, drive current for a larger',
     );
     expect(page().textContent).toContain('More gain opens it.');
+  });
+
+  it.each([
+    [1000, 5],
+    [650, 3],
+  ])('lets %d Ω stand in at its place while it is in use without being sized', async (ohm, at) => {
+    const baseResistor = { ...relaySample().baseResistor, valueOhm: ohm };
+    fixture.componentInstance.inUse.set(ohm);
+    fixture.componentInstance.evaluation.set(evaluateStage(relaySample({ baseResistor })));
+    await fixture.whenStable();
+    expect(rungs()).toHaveLength(6);
+    expect(rungs()[at]!.classList).toContain('stand-in');
+    expect(rungs()[at]!.getAttribute('aria-label')).toMatch(
+      ohm === 1000
+        ? /^1.kΩ, Fail, .*, Forced β, in use, not among the sized values$/
+        : /^650.Ω, .*in use, not among the sized values$/,
+    );
+    expect(stop()).toEqual([rungs()[at]]);
   });
 });

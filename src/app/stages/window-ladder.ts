@@ -11,6 +11,7 @@ import {
   viewChild,
 } from '@angular/core';
 import { criterionInSentence } from '../../../shared/checks/criterion-in-sentence.ts';
+import type { Evaluation } from '../../../shared/checks/evaluation.ts';
 import type { Sizing } from '../../../shared/sizing/sizing.ts';
 import { formatPercent } from '../../../shared/units/engineering-notation.ts';
 import { Icon } from '../ui/icon.ts';
@@ -42,12 +43,14 @@ function conflictSentence(between: readonly string[]): string {
   selector: 'app-window-ladder',
   imports: [Icon, SymbolText],
   templateUrl: './window-ladder.html',
-  styleUrl: './window-ladder.scss',
+  styleUrls: ['./window-ladder.scss', './ladder-rungs.scss'],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class WindowLadder {
   readonly sizing = input.required<Sizing | null>();
   readonly inUseOhm = input.required<number | null>();
+  /** What the verdicts say of the value in use, where it was not sized. */
+  readonly evaluation = input.required<Evaluation | null>();
   readonly series = input.required<string>();
   readonly readOnly = input(false);
   readonly taken = output<number>();
@@ -59,7 +62,7 @@ export class WindowLadder {
   protected readonly bandPercent = BAND_HEIGHT * 100;
   protected readonly view = computed(() => {
     const sizing = this.sizing();
-    return sizing === null ? null : ladder(sizing, this.inUseOhm());
+    return sizing === null ? null : ladder(sizing, this.inUseOhm(), this.evaluation());
   });
   protected readonly conflict = computed(() => {
     const conflict = this.sizing()?.conflict ?? null;
@@ -102,12 +105,14 @@ export class WindowLadder {
       rung.worst === null ? margin : `${margin}, ${rung.worst}`,
       rung.recommended ? 'recommended' : '',
       rung.inUse ? 'in use' : '',
+      rung.standIn ? 'not among the sized values' : '',
     ]
       .filter((word) => word !== '')
       .join(', ');
   }
 
   protected flag(rung: Rung): string {
+    if (rung.standIn) return 'in use';
     if (!rung.recommended) return '';
     return rung.inUse ? 'recommended, in use' : 'recommended';
   }
