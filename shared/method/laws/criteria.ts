@@ -1,0 +1,191 @@
+import { law } from '../law.ts';
+
+const CIRCUIT = 'Ohm’s and Kirchhoff’s laws';
+const POLICY = 'Policy of the project';
+const RATING = 'Data-sheet rating times the policy’s derating';
+
+/** Limits, and the figures of the on state that are held against them. */
+export const CRITERION_LAWS = {
+  'margin-at-most': law({
+    result: 'm',
+    formula: '(L - x) / max(abs(L), L_0)',
+    name: 'Margin to an upper limit',
+    validity: 'A limit that is not above 0 fails with −1.',
+    source: 'Definition',
+  }),
+  'margin-at-least': law({
+    result: 'm',
+    formula: '(x - L) / max(abs(L), L_0)',
+    name: 'Margin to a lower limit',
+    source: 'Definition',
+  }),
+  derated: law({ result: 'L', formula: 'd * L_n', name: 'Derated rating', source: RATING }),
+  'forced-beta-limit': law({
+    result: 'L',
+    formula: 'min(b_pol, b_t)',
+    name: 'Largest forced β',
+    validity: 'Guaranteed figures only; else the policy’s alone.',
+    source: 'Policy and data-sheet rows',
+  }),
+  'power-limit': law({
+    result: 'L',
+    formula: 'd * P_tot * max(0, min(1, (T_Jmax - T_A) / (T_Jmax - 25)))',
+    name: 'Power left at an ambient temperature',
+    source: 'Derating curve of the data sheet, JESD51',
+  }),
+  'resistor-limit': law({
+    result: 'L',
+    formula: 'd * L_n * min(1, max(0, (155 - T_A) / (155 - 70)))',
+    name: 'Resistor power left at an ambient temperature',
+    source: 'Data sheets of film resistors',
+  }),
+  'rb-power': law({
+    result: 'P_RB',
+    formula: 'I_R * I_R * R_Bo',
+    name: 'Power in the base resistor',
+    source: CIRCUIT,
+  }),
+  'rbe-power': law({
+    result: 'P_RBE',
+    formula: 'V_BE * V_BE / R_BE',
+    name: 'Power in the base–emitter resistor',
+    source: CIRCUIT,
+  }),
+  'pull-up-power': law({
+    result: 'P_pu',
+    formula: 'V_r * V_r / R_pu',
+    name: 'Power in the pull-up, output low',
+    source: CIRCUIT,
+  }),
+  'pull-up-current': law({
+    result: 'I_pu',
+    formula: 'V_r / R_pu',
+    name: 'Current of the pull-up, output low',
+    source: CIRCUIT,
+  }),
+  'rc-power': law({
+    result: 'P_RC',
+    formula: 'V_S * V_S / R_C',
+    name: 'Power in the collector resistor, output low',
+    source: CIRCUIT,
+  }),
+  'coil-voltage': law({
+    result: 'V_coil',
+    formula: 'V_a - V_CE',
+    name: 'Voltage across the coil',
+    source: CIRCUIT,
+  }),
+  'mean-voltage': law({
+    result: 'V_m',
+    formula: 'D * V_S',
+    name: 'Mean voltage of a switched coil',
+    source: 'Definition',
+  }),
+  'operate-limit': law({
+    result: 'L',
+    formula: 'V_op * max(1, (234.5 + T_L) / (234.5 + T_op))',
+    name: 'Must-operate voltage of a warm coil',
+    validity: 'A relay needs current, so copper’s resistance raises it; no credit when cold.',
+    source: 'Coil data sheet; IEC 60028',
+  }),
+  'overvoltage-limit': law({
+    result: 'L',
+    formula: 'V_max * min(1, sqrt(max(0, T_cm - T_A) / (T_cm - T_mr)))',
+    name: 'Highest coil voltage at an ambient temperature',
+    validity: 'Never above the printed one.',
+    source: 'Coil data sheet; heat goes with the square of the voltage',
+  }),
+  'lamp-cold': law({
+    result: 'R_cold',
+    formula: 'V_n / (I_n * c) * min(1, (max(0, T_A + 273) / 298)^1.2)',
+    name: 'Resistance of the cold filament',
+    validity: 'No credit above room temperature.',
+    source: 'Common practice for tungsten',
+    judgement: true,
+  }),
+  'lamp-inrush': law({
+    result: 'I_in',
+    formula: 'V_Smax / R_cold',
+    name: 'Inrush of the lamp',
+    source: CIRCUIT,
+  }),
+  'lamp-peak': law({
+    result: 'I_pk',
+    formula: 'min(I_in, h_max * I_B)',
+    name: 'Peak collector current of a lamp',
+    validity: 'The filament or the transistor limits it.',
+    source: 'Definition of hFE',
+  }),
+  'lamp-saturation': law({
+    result: 'O_in',
+    formula: 'h_in * I_B / I_in',
+    name: 'Overdrive at the inrush',
+    validity: 'Below 1 a safe-operating-area curve decides.',
+    source: 'Definition',
+  }),
+  'low-level': law({
+    result: 'V_low',
+    formula: 'V_CE + V_gs',
+    name: 'Low level of the stage',
+    source: CIRCUIT,
+  }),
+  'input-junction': law({
+    result: 'V_J',
+    formula: '0.75 * k_s',
+    name: 'Junction’s part of VI(on)',
+    source: 'Judgement, with the cold VI(on) formula',
+    judgement: true,
+  }),
+  'input-divider': law({
+    result: 'k_s',
+    formula: '1 + 1 / k_x',
+    name: 'Divider of R1 and R2',
+    source: CIRCUIT,
+  }),
+  'input-extra': law({
+    result: 'V_ext',
+    formula: 'R_1x * max(0, I_full - I_Ot) / G_I',
+    name: 'Addition above the tested output current',
+    validity: 'Then the criterion is open.',
+    source: 'Data sheet of the part: GI',
+  }),
+  'input-on-limit': law({
+    result: 'L',
+    formula: 'V_J + (V_Ion - V_J) * (298.15 / (T_J + 273.15))^X + k_s * 0.002 * (25 - T_J) + V_ext',
+    name: 'Input voltage for on, cold',
+    validity: 'Below 25 °C.',
+    source: 'Judgement: junction and gain go with temperature',
+    judgement: true,
+  }),
+  'input-on-limit-warm': law({
+    result: 'L',
+    formula: 'V_Ion + V_ext',
+    name: 'Input voltage for on, from 25 °C up',
+    source: 'Data sheet of the part: VI(on)',
+  }),
+  'tested-sum': law({
+    result: 'n_x',
+    formula: 'n_h + n_V + n_B + n_O',
+    name: 'Figures used beyond tested rows',
+    source: 'Data sheets',
+  }),
+  'policy-off-voltage': law({
+    result: 'L',
+    formula: 'n_j * V_offB + a_BE * (T_J - 25)',
+    name: 'Largest VBE while off',
+    validity: 'At the junction that is still hot.',
+    source: `${POLICY}; −2 mV/K`,
+  }),
+  'release-share': law({
+    result: 'L',
+    formula: '0.1 * V_rel / R_n',
+    name: 'A tenth of the release current',
+    source: 'Common practice for relays',
+  }),
+  'load-share': law({
+    result: 'L',
+    formula: 'max(I_offp, 0.001 * I_C)',
+    name: 'Current left in a resistor or lamp',
+    source: POLICY,
+  }),
+} as const;

@@ -1,0 +1,222 @@
+import { law } from '../law.ts';
+
+const CIRCUIT = 'Ohm’s and Kirchhoff’s laws';
+const RL = 'Solution of the RL circuit with a constant clamp voltage';
+
+/** Off state and turn-off. */
+export const OFF_LAWS = {
+  'leakage-doubling': law({
+    result: 'I_leak',
+    formula: 'I_1 * 2^((T_J - T_1) / K_2)',
+    name: 'Leakage beyond the hottest row',
+    source: 'Common practice, doubling every 10 K; data sheets',
+  }),
+  'leakage-between': law({
+    result: 'I_leak',
+    formula: 'I_1 * (I_2 / I_1)^((T_J - T_1) / (T_2 - T_1))',
+    name: 'Leakage between two rows',
+    source: 'Data-sheet rows',
+  }),
+  'leakage-interval': law({
+    result: 'K_2',
+    formula: 'min(K_p, (T_2 - T_1) * log(2) / log(I_2 / I_1))',
+    name: 'Interval in which leakage doubles',
+    validity: 'The worse of the policy’s and that of the two hottest rows.',
+    source: 'Data-sheet rows',
+  }),
+  parallel: law({
+    result: 'R_p',
+    formula: 'R_B * R_BE / (R_B + R_BE)',
+    name: 'RB and RBE in parallel',
+    source: CIRCUIT,
+  }),
+  'off-npn': law({
+    result: 'V_off',
+    formula: '((V_OL + V_gs) / R_B + I_CBO) * R_p',
+    name: 'VBE while off, held by a low output',
+    source: CIRCUIT,
+  }),
+  'high-level': law({
+    result: 'V_OH',
+    formula: 'V_r - max(V_unl, 0.1)',
+    name: 'High output that turns a PNP off',
+    validity: 'At least 0.1 V below its rail.',
+    source: 'Data sheet of the output',
+  }),
+  'off-pnp': law({
+    result: 'V_off',
+    formula: '((V_S - V_OH) / R_B + I_CBO) * R_p',
+    name: 'VEB while off, held by a high output',
+    source: CIRCUIT,
+  }),
+  'off-shunt': law({
+    result: 'V_off',
+    formula: '(I_CBO + I_lk) * R_BE',
+    name: 'VEB while off, held by RBE alone',
+    source: CIRCUIT,
+  }),
+  'anchor-temperature': law({
+    result: 'V_an',
+    formula: 'V_a25 + a_BE * (T_J - 25)',
+    name: 'VBE of the anchor row at the junction temperature',
+    source: 'Common practice, −2 mV/K',
+  }),
+  'off-current': law({
+    result: 'I_off',
+    formula: 'min(I_leak + I_an * exp((V_off - V_an) / (n_j * V_T)), I_full)',
+    name: 'Collector current while off',
+    validity: 'Never above what the load would take.',
+    source: 'Junction law through the lowest VBE row',
+  }),
+  'off-current-open': law({
+    result: 'I_off',
+    formula: 'min((1 + h_max) * (I_CBO + I_pin) + I_bes, I_full)',
+    name: 'Collector current with the base open',
+    source: 'Definition of hFE: ICEO = (1 + hFE)·ICBO',
+  }),
+  'pin-pull-up': law({
+    result: 'I_pin',
+    formula: 'V_r / (R_pu + R_B + R_BE)',
+    name: 'Current of a pull-up in reset',
+    source: CIRCUIT,
+  }),
+  'reset-voltage': law({
+    result: 'V_rst',
+    formula: '(I_CBO + I_pin) * R_BE',
+    name: 'VBE in reset',
+    source: CIRCUIT,
+  }),
+  'input-low': law({
+    result: 'V_offI',
+    formula: 'V_OL + V_gs',
+    name: 'Input voltage while off',
+    source: CIRCUIT,
+  }),
+  'output-high': law({
+    result: 'V_OH',
+    formula: 'V_Smin - R_C * (I_off + n * I_IH)',
+    name: 'High level of the stage',
+    source: CIRCUIT,
+  }),
+  'back-pnp': law({
+    result: 'V_bk',
+    formula: 'V_r - V_Smin',
+    name: 'Rail above the lowest supply',
+    source: CIRCUIT,
+  }),
+  'back-npn': law({
+    result: 'V_bk',
+    formula: '-V_gs',
+    name: 'Logic ground below the load return',
+    source: CIRCUIT,
+  }),
+  'swing-capacitor': law({
+    result: 'V_sw',
+    formula: 'I_R * R_B + V_bk',
+    name: 'Swing of a speed-up capacitor',
+    source: CIRCUIT,
+  }),
+  'reverse-shunted': law({
+    result: 'V_EBr',
+    formula: 'max(0, V_bk * R_BE / (R_B + R_BE), V_sw)',
+    name: 'Reverse base–emitter voltage',
+    source: CIRCUIT,
+  }),
+  'reverse-plain': law({
+    result: 'V_EBr',
+    formula: 'max(0, V_bk, V_sw)',
+    name: 'Reverse base–emitter voltage without RBE',
+    source: CIRCUIT,
+  }),
+  'clamp-in-series': law({
+    result: 'V_own',
+    formula: 'V_F + V_Zmax',
+    name: 'Largest voltage of a clamp across the coil',
+    validity: 'A diode alone has no zener voltage.',
+    source: 'Data sheet of the clamp',
+  }),
+  'clamp-least': law({
+    result: 'V_c',
+    formula: '0.5 + V_Zmin',
+    name: 'Smallest clamp voltage across the coil',
+    validity: 'A diode drops 0.5 V at least.',
+    source: 'Common practice; data sheet of the clamp',
+  }),
+  'clamp-across-least': law({
+    result: 'V_c',
+    formula: 'V_Zmin - V_Smax',
+    name: 'Smallest voltage a clamp across the transistor leaves the coil',
+    source: CIRCUIT,
+  }),
+  'clamp-across-largest': law({
+    result: 'V_cl',
+    formula: 'max(0, V_Zmax - V_Smax)',
+    name: 'Largest voltage a clamp across the transistor leaves the coil',
+    source: CIRCUIT,
+  }),
+  'peak-voltage': law({
+    result: 'V_pk',
+    formula: 'V_Smax + V_own',
+    name: 'Peak collector–emitter voltage',
+    validity: 'Clamp across the coil.',
+    source: CIRCUIT,
+  }),
+  'surge-voltage': law({
+    result: 'V_CEs',
+    formula: 'V_sg + V_cl',
+    name: 'Collector–emitter voltage in a surge',
+    source: CIRCUIT,
+  }),
+  'surge-limit': law({
+    result: 'L',
+    formula: 'min(V_CEO, V_so)',
+    name: 'VCEO and the stand-off of the clamp',
+    source: 'Data sheets, not derated',
+  }),
+  'release-current': law({
+    result: 'I_rel',
+    formula: 'V_rel / R_n',
+    name: 'Release current of the coil',
+    source: 'Coil data sheet',
+  }),
+  'release-time': law({
+    result: 't_rel',
+    formula: 'L_c / R_L * log((I_C + V_c / R_L) / (I_rel + V_c / R_L))',
+    name: 'Time until the relay releases',
+    validity:
+      'Smallest clamp voltage; armature closed. Rule 9.0 ms where a solved diode clamp gives 8.72 ms.',
+    source: RL,
+  }),
+  'clamp-charge': law({
+    result: 'Q_cl',
+    formula: 'L_c / R_L * (I_C - V_cl / R_L * log(1 + I_C / (V_cl / R_L)))',
+    name: 'Charge through the clamp at one turn-off',
+    source: RL,
+  }),
+  'clamp-energy': law({
+    result: 'E_cl',
+    formula: 'V_cl * Q_cl',
+    name: 'Energy of the clamp at one turn-off',
+    validity: 'Clamp across the coil.',
+    source: 'Definition',
+  }),
+  'clamp-energy-across': law({
+    result: 'E_cl',
+    formula: 'V_own * Q_cl',
+    name: 'Energy of a clamp across the transistor at one turn-off',
+    source: 'Definition',
+  }),
+  'clamp-power': law({
+    result: 'P_cl',
+    formula: 'min(f * E_cl, V_own * I_C * (1 - D))',
+    name: 'Mean power of the clamp',
+    validity: 'The current may never run down within a period.',
+    source: 'Definition',
+  }),
+  'clamp-power-steady': law({
+    result: 'P_cl',
+    formula: 'V_own * I_C * (1 - D)',
+    name: 'Mean power of a clamp whose current does not run down',
+    source: 'Definition',
+  }),
+} as const;
