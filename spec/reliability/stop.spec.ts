@@ -119,12 +119,14 @@ class Load {
 
   async #send(): Promise<void> {
     const startedAtMs = performance.now();
-    for (let sent = 0; this.#running; await pause(2)) {
+    let sent = 0;
+    while (this.#running) {
       const due = ((performance.now() - startedAtMs) / 1000) * PER_SECOND;
       for (; sent < due; sent++) {
         this.#sent += 1;
         this.#pending.push(this.#one(this.#sent));
       }
+      await pause(2);
     }
     this.#spentSec += (performance.now() - startedAtMs) / 1000;
   }
