@@ -50,7 +50,7 @@ const headingWithUnit = ({ heading, unit }: Column) =>
 const valueOf = ({ text, number }: Cell): DataValue => number ?? guarded(text);
 
 function ofList({ heading, items }: ListSection): DataTable {
-  return { name: heading, header: [heading], records: items.map(({ text }) => [guarded(text)]) };
+  return { name: heading, header: ['Text'], records: items.map(({ text }) => [guarded(text)]) };
 }
 
 function ofTitleBlock(document: TechnicalDocument): DataTable {

@@ -35,6 +35,8 @@ describe('CSV', () => {
     expect(records[1]).toEqual(['R4', '4700']);
     const flat = records.map((record) => record.join('|'));
     expect(flat).toContain('Coils store energy.|');
+    const heading = flat.indexOf('Cautions|');
+    expect(flat.slice(heading, heading + 2)).toEqual(['Cautions|', 'Text|']);
     expect(flat).toContain('Identification number|GH-12-TEST-0001');
     expect(flat).toContain('Content|SHA-256 3be890d1');
   });
