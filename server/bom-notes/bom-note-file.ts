@@ -1,9 +1,7 @@
 import type { DocumentFormat } from '../../shared/contract/bom-note.ts';
 import type { BomNote } from '../../shared/report/bom-note.ts';
 import { writeCsv } from '../documents/csv.ts';
-import { writePdf } from '../documents/pdf.ts';
 import type { TechnicalDocument } from '../documents/technical-document.ts';
-import { writeXlsx } from '../documents/xlsx.ts';
 import type { FileAnswer } from '../http/file-answer.ts';
 import { bomNoteDocument } from './bom-note-document.ts';
 
@@ -27,12 +25,17 @@ export async function bomNoteFile(note: BomNote, wish: FileWish): Promise<FileAn
   return { name: `${document.fileName}.${wish.format}`, type: TYPES[wish.format], bytes };
 }
 
-function write(document: TechnicalDocument, wish: FileWish): Promise<Buffer> | Buffer {
+/** What writes PDFs and workbooks is loaded when first asked for: it would take a third of the start. */
+async function write(document: TechnicalDocument, wish: FileWish): Promise<Buffer> {
   switch (wish.format) {
-    case 'pdf':
+    case 'pdf': {
+      const { writePdf } = await import('../documents/pdf.ts');
       return writePdf(document);
-    case 'xlsx':
+    }
+    case 'xlsx': {
+      const { writeXlsx } = await import('../documents/xlsx.ts');
       return writeXlsx(document);
+    }
     case 'csv':
       return writeCsv(document, { decimalMark: wish.decimalMark === 'comma' ? ',' : '.' });
   }
