@@ -56,7 +56,7 @@ export function readConfig(env: NodeJS.ProcessEnv, webFolder: string): Config {
     smtpUrl: readSmtpUrl(env['SINKWELL_SMTP_URL']),
     mailFrom: env['SINKWELL_MAIL_FROM'] ?? `sinkwell@${url.hostname}`,
     logLevel: readLogLevel(env['SINKWELL_LOG_LEVEL'] ?? 'info'),
-    scrypt: readScryptCost(env['SINKWELL_SCRYPT_COST']),
+    scrypt: readScryptCost(env['SINKWELL_SCRYPT_COST'], secure),
     limits: readLimits(env['SINKWELL_REQUESTS_PER_MINUTE']),
     now: Date.now,
   };

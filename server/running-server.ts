@@ -6,6 +6,7 @@ import type { Config } from './config.ts';
 import { Database } from './persistence/database.ts';
 import { DataFolder } from './persistence/data-folder.ts';
 import { prepareDatabase } from './seed/prepare-database.ts';
+import { isCheap } from './session/scrypt-cost.ts';
 import { createServices, type Services } from './services.ts';
 import { StartRefusal } from './start-refusal.ts';
 
@@ -48,6 +49,13 @@ export class RunningServer {
       const database = await Database.open(folder.databaseFile);
       const services = createServices(config, database, folder.mailbox, logger);
       const { express } = createApp(services, secrets, logger);
+      if (isCheap(config.scrypt)) {
+        const cost = config.scrypt.logN;
+        logger.warn(
+          { event: 'cheap-hashes', cost },
+          'SINKWELL_SCRYPT_COST makes passwords cheap to guess',
+        );
+      }
       await prepareDatabase(services, tell);
       const timers = [setInterval(() => void services.sessions.sweep(), SWEEP_EVERY_MS)];
       const running = new RunningServer(http, folder, services, timers, logger);

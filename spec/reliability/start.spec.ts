@@ -58,6 +58,26 @@ describe('start', () => {
     expect(second.stdout).toContain('is ready at');
   });
 
+  it('S-05: warns of hashes cheaper than shipped, and of nothing else', async () => {
+    const lines = () => server.stderr.trim().split('\n');
+    expect(lines()).toHaveLength(1);
+    expect(JSON.parse(lines()[0]!)).toMatchObject({ level: 40, event: 'cheap-hashes', cost: 4 });
+    await server.end('SIGTERM');
+    await server.start({ SINKWELL_SCRYPT_COST: '' });
+    expect(server.stderr).toBe('');
+  });
+
+  it('S-47: answers and limits callers by IPv6 without a word of complaint from its libraries', async () => {
+    await server.end('SIGTERM');
+    await server.start({ SINKWELL_HOST: '::1', NODE_ENV: 'production', SINKWELL_SCRYPT_COST: '' });
+    const reply = await fetch(`http://[::1]:${server.port}/api/session`);
+    expect([reply.status, reply.headers.get('ratelimit')]).toEqual([
+      200,
+      expect.stringMatching(/r=/),
+    ]);
+    expect(server.stderr).toBe('');
+  });
+
   it('S-09: prints a set-up code as long as nobody has an account, another one each time', async () => {
     const code = /this once: ([0-9A-F-]{35})/.exec(server.stdout)?.[1];
     expect(code).toBeDefined();

@@ -48,6 +48,7 @@ describe('configuration', () => {
     [{ SINKWELL_SMTP_URL: 'mail.example' }, 'SINKWELL_SMTP_URL'],
     [{ SINKWELL_LOG_LEVEL: 'loud' }, 'SINKWELL_LOG_LEVEL'],
     [{ SINKWELL_SCRYPT_COST: '3' }, 'SINKWELL_SCRYPT_COST'],
+    [{ SINKWELL_SCRYPT_COST: '16', SINKWELL_URL: 'https://s.example' }, 'SINKWELL_SCRYPT_COST'],
     [{ SINKWELL_REQUESTS_PER_MINUTE: '1' }, 'SINKWELL_REQUESTS_PER_MINUTE'],
   ])('S-51: refuses %j in one line that names the variable', (env, name) => {
     expect(() => read(env as Record<string, string>)).toThrow(new RegExp(`^${name}: [^\n]+$`));
@@ -79,6 +80,12 @@ describe('configuration', () => {
     ['0', false],
   ])('S-47: takes %j as declared proxies', (text, expected) => {
     expect(read({ SINKWELL_TRUST_PROXY: text }).trustProxy).toEqual(expected);
+  });
+
+  it('S-05: takes cheaper hashes on loopback, dearer ones anywhere', () => {
+    expect(read({ SINKWELL_SCRYPT_COST: '16' }).scrypt.logN).toBe(16);
+    const dear = { SINKWELL_SCRYPT_COST: '18', SINKWELL_URL: 'https://sinkwell.firm.example' };
+    expect(read(dear).scrypt.logN).toBe(18);
   });
 
   it('takes a demo only on plain loopback unless told otherwise', () => {
