@@ -3,7 +3,7 @@ import type { InsideModel } from '../stage/internal-resistors.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
-import type { FigureSink } from './figure-sink.ts';
+import type { FigureBoard } from './figure-board.ts';
 
 const ON = criterionNumber('input-on');
 const MAXIMUM = criterionNumber('input-voltage');
@@ -17,26 +17,26 @@ const JUNCTION_V_PER_K = 0.002;
 export class InputChecks {
   private readonly model: StageModel;
   private readonly inside: InsideModel;
-  private readonly worst: FigureSink;
+  private readonly worst: FigureBoard;
   private readonly exponent: number;
 
-  constructor(model: StageModel, inside: InsideModel, worst: FigureSink) {
+  constructor(model: StageModel, inside: InsideModel, worst: FigureBoard) {
     this.model = model;
     this.inside = inside;
     this.worst = worst;
     this.exponent = model.input.policy.gainExponent;
   }
 
-  visit(point: OperatingPoint, corner: number): void {
+  visit(point: OperatingPoint): void {
     if (!this.inside.byInput) return;
-    this.worst.note(ON, point.vbeV, this.onV(point), corner);
-    this.worst.note(MAXIMUM, point.vbeV, this.inside.input?.maximumV ?? NaN, corner);
+    this.worst.note(ON, point.vbeV, this.onV(point));
+    this.worst.note(MAXIMUM, point.vbeV, this.inside.input?.maximumV ?? NaN);
   }
 
-  visitOff(corner: number): void {
+  visitOff(): void {
     const { low, groundShiftV } = this.model.input.drive;
     const lowV = (low.unloadedV ?? low.levelV) + groundShiftV;
-    this.worst.note(OFF, lowV, this.inside.input?.offV ?? NaN, corner);
+    this.worst.note(OFF, lowV, this.inside.input?.offV ?? NaN);
   }
 
   /** Whether the load draws more than VI(on) was tested with. */

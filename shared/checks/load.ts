@@ -5,7 +5,7 @@ import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageInput } from '../stage/stage-input.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
-import type { FigureSink } from './figure-sink.ts';
+import type { FigureBoard } from './figure-board.ts';
 
 const LOAD_CURRENT = criterionNumber('load-current');
 const LEAST_LOAD_CURRENT = criterionNumber('load-current-low');
@@ -15,14 +15,12 @@ const OUTPUT_LOW = criterionNumber('output-low');
 const RISE = criterionNumber('rise-time');
 const RC_POWER = criterionNumber('rc-dissipation');
 
-const NO_CORNER = -1;
-
 /** The criteria that belong to LED strings, lamps and logic inputs; `visit` takes in one corner. */
 export class LoadChecks {
   private readonly model: StageModel;
-  private readonly worst: FigureSink;
+  private readonly worst: FigureBoard;
 
-  constructor(model: StageModel, worst: FigureSink) {
+  constructor(model: StageModel, worst: FigureBoard) {
     this.model = model;
     this.worst = worst;
   }
@@ -32,44 +30,44 @@ export class LoadChecks {
     const { load } = this.model.input;
     const constantSec = riseConstantSec(this.model.input);
     if (load.kind !== 'logic-input' || constantSec === null) return;
-    this.worst.note(RISE, RISE_FACTOR * constantSec, load.riseTimeLimitSec ?? NaN, NO_CORNER);
+    this.worst.note(RISE, RISE_FACTOR * constantSec, load.riseTimeLimitSec ?? NaN);
   }
 
-  visit(point: OperatingPoint, corner: number): void {
+  visit(point: OperatingPoint): void {
     const { load } = this.model.input;
-    if (load.kind === 'led-string') this.visitLeds(load, point, corner);
-    else if (load.kind === 'lamp') this.visitLamp(load, point, corner);
-    else if (load.kind === 'logic-input') this.visitInputs(load, point, corner);
+    if (load.kind === 'led-string') this.visitLeds(load, point);
+    else if (load.kind === 'lamp') this.visitLamp(load, point);
+    else if (load.kind === 'logic-input') this.visitInputs(load, point);
   }
 
-  private visitLeds(load: LedStringLoad, point: OperatingPoint, corner: number): void {
+  private visitLeds(load: LedStringLoad, point: OperatingPoint): void {
     const { currentDerating } = this.model.input.policy;
     const limitA = load.maximumA === null ? NaN : load.maximumA * currentDerating;
-    this.worst.note(LOAD_CURRENT, point.icA, limitA, corner);
+    this.worst.note(LOAD_CURRENT, point.icA, limitA);
     if (load.minimumA !== null) {
-      this.worst.note(LEAST_LOAD_CURRENT, point.icA, load.minimumA, corner);
+      this.worst.note(LEAST_LOAD_CURRENT, point.icA, load.minimumA);
     }
   }
 
-  private visitLamp(load: LampLoad, point: OperatingPoint, corner: number): void {
+  private visitLamp(load: LampLoad, point: OperatingPoint): void {
     const { input } = this.model;
     const inrushA = inrushCurrentA(load, input.supplyV.max, point.condition.ambientDegC);
     const mostA = point.mostGainAt(inrushA) * point.ibA;
     const leastA = point.leastGainAt(inrushA) * point.ibA;
     const { icPeakA, icA } = input.transistor.limits;
     const limitA = (icPeakA ?? icA ?? NaN) * input.policy.currentDerating;
-    this.worst.note(PEAK, Math.min(inrushA, mostA), limitA, corner);
-    this.worst.note(INRUSH, leastA / inrushA, 1, corner);
+    this.worst.note(PEAK, Math.min(inrushA, mostA), limitA);
+    this.worst.note(INRUSH, leastA / inrushA, 1);
   }
 
-  private visitInputs(load: LogicInputLoad, point: OperatingPoint, corner: number): void {
+  private visitInputs(load: LogicInputLoad, point: OperatingPoint): void {
     const { drive, policy } = this.model.input;
     const { supplyV, ambientDegC } = point.condition;
-    this.worst.note(OUTPUT_LOW, point.vceV + drive.groundShiftV, load.vilV, corner);
+    this.worst.note(OUTPUT_LOW, point.vceV + drive.groundShiftV, load.vilV);
     const smallestOhm = load.pullUpOhm * (1 - load.tolerance);
     const ratingW = (load.ratingW ?? NaN) * policy.resistorDerating;
     const limitW = ratingW * resistorShare(ambientDegC);
-    this.worst.note(RC_POWER, (supplyV * supplyV) / smallestOhm, limitW, corner);
+    this.worst.note(RC_POWER, (supplyV * supplyV) / smallestOhm, limitW);
   }
 }
 

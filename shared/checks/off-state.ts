@@ -4,7 +4,7 @@ import { OffState } from '../stage/off-state.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
-import type { FigureSink } from './figure-sink.ts';
+import type { FigureBoard } from './figure-board.ts';
 
 const BASE = criterionNumber('off-base-voltage');
 const CURRENT = criterionNumber('off-collector-current');
@@ -24,12 +24,12 @@ const LOAD_SHARE = 0.001;
 /** The criteria of the off state; `visit` takes in a settled corner at the highest supply. */
 export class OffStateChecks {
   private readonly model: StageModel;
-  private readonly worst: FigureSink;
+  private readonly worst: FigureBoard;
   private readonly off: OffState;
   private readonly drivesOpenDrain: boolean;
   private readonly coilLimitA: number;
 
-  constructor(model: StageModel, worst: FigureSink) {
+  constructor(model: StageModel, worst: FigureBoard) {
     this.model = model;
     this.worst = worst;
     this.off = new OffState(model);
@@ -54,7 +54,7 @@ export class OffStateChecks {
     this.largestA = 0;
   }
 
-  visit(point: OperatingPoint, corner: number): void {
+  visit(point: OperatingPoint): void {
     const { worst, off } = this;
     const { policy, transistor, drive } = this.model.input;
     off.solve(point);
@@ -63,33 +63,33 @@ export class OffStateChecks {
       policy.offBaseV * this.model.part.junctions +
       this.model.part.vbeTempcoVPerK * (point.tjDegC - SHEET_DEG_C);
     const currentLimitA = this.currentLimitA(point);
-    if (!off.baseOpen && this.model.inside === null) worst.note(BASE, off.vbeV, vbeLimitV, corner);
-    worst.note(CURRENT, off.collectorA, currentLimitA, corner);
-    this.visitOutput(corner);
+    if (!off.baseOpen && this.model.inside === null) worst.note(BASE, off.vbeV, vbeLimitV);
+    worst.note(CURRENT, off.collectorA, currentLimitA);
+    this.visitOutput();
     const { vceoV } = transistor.limits;
     const vceLimitV = vceoV === null ? NaN : vceoV * policy.voltageDerating;
-    worst.note(VOLTAGE, point.condition.supplyV, vceLimitV, corner);
-    worst.note(REVERSE, off.reverseV, transistor.limits.veboV ?? NaN, corner);
+    worst.note(VOLTAGE, point.condition.supplyV, vceLimitV);
+    worst.note(REVERSE, off.reverseV, transistor.limits.veboV ?? NaN);
     if (this.drivesOpenDrain) {
       const limitV = drive.maximumV === null ? NaN : point.condition.supplyV;
-      worst.note(DRIVE_MAXIMUM, drive.maximumV ?? NaN, limitV, corner);
+      worst.note(DRIVE_MAXIMUM, drive.maximumV ?? NaN, limitV);
     }
     if (drive.reset !== null && !isHighSide(this.model.input)) {
-      if (off.resetOpen) worst.note(RESET, off.resetCollectorA, currentLimitA, corner);
+      if (off.resetOpen) worst.note(RESET, off.resetCollectorA, currentLimitA);
       else {
-        worst.note(RESET, off.resetVbeV, vbeLimitV, corner);
-        worst.note(RESET_CURRENT, off.resetCollectorA, currentLimitA, corner);
+        worst.note(RESET, off.resetVbeV, vbeLimitV);
+        worst.note(RESET_CURRENT, off.resetCollectorA, currentLimitA);
       }
     }
   }
 
   /** The high level the next inputs see: what leaks through the collector and into them drops across RC. */
-  private visitOutput(corner: number): void {
+  private visitOutput(): void {
     const { load, supplyV } = this.model.input;
     if (load.kind !== 'logic-input') return;
     const largestOhm = load.pullUpOhm * (1 + load.tolerance);
     const leakA = this.off.collectorA + load.count * load.leakageA;
-    this.worst.note(OUTPUT_HIGH, supplyV.min - largestOhm * leakA, load.vihV, corner);
+    this.worst.note(OUTPUT_HIGH, supplyV.min - largestOhm * leakA, load.vihV);
   }
 
   private currentLimitA(point: OperatingPoint): number {

@@ -4,7 +4,7 @@ import { isHighSide } from '../stage/drive-source.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
-import type { FigureSink } from './figure-sink.ts';
+import type { FigureBoard } from './figure-board.ts';
 
 const OVERDRIVE = criterionNumber('overdrive-factor');
 const FORCED_BETA = criterionNumber('forced-beta');
@@ -28,7 +28,7 @@ const derated = (limit: number | null, derating: number) =>
 /** The criteria of the on state; limits are worked out once, `visit` takes in one corner. */
 export class OnStateChecks {
   private readonly model: StageModel;
-  private readonly worst: FigureSink;
+  private readonly worst: FigureBoard;
   private readonly collectorLimitA: number;
   private readonly peakLimitA: number;
   private readonly baseLimitA: number;
@@ -42,7 +42,7 @@ export class OnStateChecks {
   /** Whether a base current turns the part on, not a printed input voltage. */
   private readonly byBaseCurrent: boolean;
 
-  constructor(model: StageModel, worst: FigureSink) {
+  constructor(model: StageModel, worst: FigureBoard) {
     this.model = model;
     this.worst = worst;
     const { policy, transistor, drive, baseResistor, shuntResistor } = model.input;
@@ -63,25 +63,25 @@ export class OnStateChecks {
     this.pullUpLimitW = derated(drive.pullUp?.ratingW ?? null, policy.resistorDerating);
   }
 
-  visit(point: OperatingPoint, corner: number): void {
+  visit(point: OperatingPoint): void {
     const { policy, transistor } = this.model.input;
     const { worst } = this;
     const { ambientDegC } = point.condition;
     if (this.byBaseCurrent) {
-      worst.note(OVERDRIVE, point.overdrive, policy.overdriveFactor, corner);
-      worst.note(FORCED_BETA, point.forcedBeta, this.forcedBetaLimit(point), corner);
-      worst.note(BASE, point.ibA, this.baseLimitA, corner);
+      worst.note(OVERDRIVE, point.overdrive, policy.overdriveFactor);
+      worst.note(FORCED_BETA, point.forcedBeta, this.forcedBetaLimit(point));
+      worst.note(BASE, point.ibA, this.baseLimitA);
     }
-    worst.note(SATURATION, point.vceV, this.model.input.saturationLimitV ?? NaN, corner);
-    worst.note(COLLECTOR, point.icA, this.collectorLimitA, corner);
+    worst.note(SATURATION, point.vceV, this.model.input.saturationLimitV ?? NaN);
+    worst.note(COLLECTOR, point.icA, this.collectorLimitA);
     if (this.model.input.load.kind !== 'lamp') {
-      worst.note(PEAK, point.icA, this.peakLimitA, corner);
+      worst.note(PEAK, point.icA, this.peakLimitA);
     }
     const share = powerShare(ambientDegC, transistor.limits.tjMaxDegC);
-    worst.note(POWER, point.powerW, this.powerLimitW * share, corner);
-    worst.note(JUNCTION, point.tjDegC, this.junctionLimitDegC, corner);
-    this.visitResistors(point, corner);
-    if (this.model.input.load.kind === 'coil') this.visitCoil(point, corner);
+    worst.note(POWER, point.powerW, this.powerLimitW * share);
+    worst.note(JUNCTION, point.tjDegC, this.junctionLimitDegC);
+    this.visitResistors(point);
+    if (this.model.input.load.kind === 'coil') this.visitCoil(point);
   }
 
   private forcedBetaLimit(point: OperatingPoint): number {
@@ -91,40 +91,40 @@ export class OnStateChecks {
     return Math.min(policy.forcedBeta, saturation.testBeta[point.piece] ?? Infinity);
   }
 
-  private visitResistors(point: OperatingPoint, corner: number): void {
+  private visitResistors(point: OperatingPoint): void {
     const { worst } = this;
     const { drive, shuntResistor } = this.model.input;
     const share = resistorShare(point.condition.ambientDegC);
     const railV = drive.railTracksSupply ? point.condition.supplyV : drive.railV.max;
     const pullUpOhm = (drive.pullUp?.valueOhm ?? NaN) * (1 - (drive.pullUp?.tolerance ?? 0));
     const driveA = this.pullUpFeedsBase ? railV / pullUpOhm : point.driveA;
-    worst.note(DRIVE, driveA, this.driveLimitA, corner);
+    worst.note(DRIVE, driveA, this.driveLimitA);
     if (point.outerRbOhm > 0) {
       const rbW = point.driveA * point.driveA * point.outerRbOhm;
-      worst.note(RB_POWER, rbW, this.rbLimitW * share, corner);
+      worst.note(RB_POWER, rbW, this.rbLimitW * share);
     }
     if (shuntResistor !== null && this.model.inside === null) {
       const powerW = (point.vbeV * point.vbeV) / point.rbeOhm;
-      worst.note(RBE_POWER, powerW, this.rbeLimitW * share, corner);
+      worst.note(RBE_POWER, powerW, this.rbeLimitW * share);
     }
     if (drive.kind === 'open-collector') {
       const powerW = (railV * railV) / pullUpOhm;
-      worst.note(PULL_UP_POWER, powerW, this.pullUpLimitW * share, corner);
+      worst.note(PULL_UP_POWER, powerW, this.pullUpLimitW * share);
     }
   }
 
-  private visitCoil(point: OperatingPoint, corner: number): void {
+  private visitCoil(point: OperatingPoint): void {
     const { load, frequencyHz, duty } = this.model.input;
     if (load.kind !== 'coil') return;
     const { supplyV, ambientDegC, coilDegC } = point.condition;
     const coilV = point.condition.availableV - point.vceV;
-    if (frequencyHz > 0) this.worst.note(LOAD, duty * supplyV, load.holdV ?? NaN, corner);
+    if (frequencyHz > 0) this.worst.note(LOAD, duty * supplyV, load.holdV ?? NaN);
     else {
       const operateDegC = load.operateReferenceDegC ?? load.referenceDegC;
       const rise = Math.max(1, copperRatio(coilDegC, operateDegC));
-      this.worst.note(LOAD, coilV, (load.operateV ?? NaN) * rise, corner);
+      this.worst.note(LOAD, coilV, (load.operateV ?? NaN) * rise);
     }
-    this.worst.note(OVERVOLTAGE, coilV, this.overvoltageLimitV(ambientDegC), corner);
+    this.worst.note(OVERVOLTAGE, coilV, this.overvoltageLimitV(ambientDegC));
   }
 
   /** What the coil may carry at an ambient: less where there is less room to its own limit. */

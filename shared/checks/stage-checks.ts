@@ -1,6 +1,6 @@
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
-import type { FigureSink } from './figure-sink.ts';
+import type { FigureBoard } from './figure-board.ts';
 import { InputChecks } from './input.ts';
 import { LoadChecks } from './load.ts';
 import { OffStateChecks } from './off-state.ts';
@@ -19,14 +19,14 @@ export class StageChecks {
   private readonly hasOwnLoadChecks: boolean;
   private readonly switches: boolean;
 
-  constructor(model: StageModel, sink: FigureSink) {
+  constructor(model: StageModel, board: FigureBoard) {
     const { inside, input } = model;
-    this.on = new OnStateChecks(model, sink);
-    this.off = new OffStateChecks(model, sink);
-    this.load = new LoadChecks(model, sink);
-    this.input = inside === null ? null : new InputChecks(model, inside, sink);
-    this.turnOff = new TurnOffChecks(model, sink);
-    this.switching = new SwitchingChecks(model, sink);
+    this.on = new OnStateChecks(model, board);
+    this.off = new OffStateChecks(model, board);
+    this.load = new LoadChecks(model, board);
+    this.input = inside === null ? null : new InputChecks(model, inside, board);
+    this.turnOff = new TurnOffChecks(model, board);
+    this.switching = new SwitchingChecks(model, board);
     this.hasOwnLoadChecks = input.load.kind !== 'coil';
     this.switches = input.frequencyHz > 0 || input.load.kind === 'logic-input';
   }
@@ -39,9 +39,9 @@ export class StageChecks {
   }
 
   /** Takes in what RB decides by nature. */
-  probe(point: OperatingPoint, corner: number): void {
-    this.on.visit(point, corner);
-    this.input?.visit(point, corner);
+  probe(point: OperatingPoint): void {
+    this.on.visit(point);
+    this.input?.visit(point);
   }
 
   /**
@@ -49,15 +49,15 @@ export class StageChecks {
    *
    * @param off whether it is one to switch off from: settled, at the highest supply
    */
-  visit(point: OperatingPoint, corner: number, off: boolean): void {
-    this.on.visit(point, corner);
-    this.turnOff.visit(point, corner);
-    this.input?.visit(point, corner);
-    if (this.hasOwnLoadChecks) this.load.visit(point, corner);
-    if (this.switches) this.switching.visit(point, corner);
+  visit(point: OperatingPoint, off: boolean): void {
+    this.on.visit(point);
+    this.turnOff.visit(point);
+    this.input?.visit(point);
+    if (this.hasOwnLoadChecks) this.load.visit(point);
+    if (this.switches) this.switching.visit(point);
     if (off) {
-      this.off.visit(point, corner);
-      this.input?.visitOff(corner);
+      this.off.visit(point);
+      this.input?.visitOff();
     }
   }
 }

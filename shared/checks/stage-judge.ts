@@ -7,7 +7,7 @@ import type { Criterion } from './evaluation.ts';
 import { StageChecks } from './stage-checks.ts';
 import { standOffState, standOnData } from './standings.ts';
 import { TestedRange } from './tested-range.ts';
-import { WorstCases } from './worst-cases.ts';
+import { NO_CORNER, WorstCases } from './worst-cases.ts';
 
 /** Criteria that a few corners can already refute a base resistor by. */
 const PROBED = [
@@ -128,7 +128,8 @@ export class StageJudge {
     for (const corner of this.probes) {
       point.place(corner, rbOhm);
       point.solve(point.condition.ambientDegC);
-      this.checks.probe(point, corner);
+      this.checks.probe(point);
+      worst.take(corner);
       beyondPin ||= point.beyondPin;
     }
     const margin = Math.min(...PROBED.map((id) => worst.key(id)));
@@ -142,6 +143,7 @@ export class StageJudge {
     const rth = model.part.rthJaKPerW ?? 0;
     this.worst.reset();
     this.checks.begin();
+    this.worst.take(NO_CORNER);
     this.tested.begin();
     this.beyondTestBeta = false;
     this.runaway = false;
@@ -155,7 +157,8 @@ export class StageJudge {
         point.solve(ambientDegC);
         this.startW[corner] = point.powerW;
       }
-      this.checks.visit(point, corner, settled && ((corner >> shift.supply) & 1) === 1);
+      this.checks.visit(point, settled && ((corner >> shift.supply) & 1) === 1);
+      this.worst.take(corner);
       this.tested.visit(point);
       this.notice(point);
       this.observer?.visit(point, corner);

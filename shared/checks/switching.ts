@@ -5,7 +5,7 @@ import { isHighSide } from '../stage/drive-source.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
-import type { FigureSink } from './figure-sink.ts';
+import type { FigureBoard } from './figure-board.ts';
 import { riseConstantSec } from './load.ts';
 
 const STORAGE = criterionNumber('storage-time');
@@ -20,14 +20,14 @@ const PERIOD_SHARE = 0.1;
 /** Storage and fall time at a switching frequency, and how late a logic input sees the end; `visit` takes in one corner. */
 export class SwitchingChecks {
   private readonly model: StageModel;
-  private readonly worst: FigureSink;
+  private readonly worst: FigureBoard;
   private readonly constantSec: number | null;
   private readonly fallSec: number;
   private readonly limitSec: number;
   /** Largest time constant at a logic input, s; null for other loads, or without its capacitance. */
   private readonly riseConstantSec: number | null;
 
-  constructor(model: StageModel, worst: FigureSink) {
+  constructor(model: StageModel, worst: FigureBoard) {
     this.model = model;
     this.worst = worst;
     const { frequencyHz, duty, storageTimeLimitSec, transistor } = model.input;
@@ -42,17 +42,17 @@ export class SwitchingChecks {
     return this.constantSec !== null && !Number.isNaN(this.fallSec);
   }
 
-  visit(point: OperatingPoint, corner: number): void {
+  visit(point: OperatingPoint): void {
     const storeSec = this.storeSec(point);
     if (storeSec === null) return;
     if (this.model.input.frequencyHz > 0) {
-      this.worst.note(STORAGE, storeSec + this.fallSec, this.limitSec, corner);
+      this.worst.note(STORAGE, storeSec + this.fallSec, this.limitSec);
     }
-    this.visitDelay(point, corner, storeSec);
+    this.visitDelay(point, storeSec);
   }
 
   /** ts + RC·C·ln[(V2 − VOL)/(V2 − VIH)] */
-  private visitDelay(point: OperatingPoint, corner: number, storeSec: number): void {
+  private visitDelay(point: OperatingPoint, storeSec: number): void {
     const { load, drive } = this.model.input;
     if (load.kind !== 'logic-input' || this.riseConstantSec === null) return;
     const { supplyV } = point.condition;
@@ -60,7 +60,7 @@ export class SwitchingChecks {
     const reaches = supplyV > load.vihV;
     const span = (supplyV - lowV) / (supplyV - load.vihV);
     const riseSec = this.riseConstantSec * Math.log(Math.max(1, span));
-    this.worst.note(DELAY, reaches ? storeSec + riseSec : Infinity, NaN, corner);
+    this.worst.note(DELAY, reaches ? storeSec + riseSec : Infinity, NaN);
   }
 
   /** Storage time of a corner, s; null where the part does not print what it is computed from. */

@@ -2,7 +2,7 @@ import { clampChargeC, releaseTimeSec } from '../physics/coil.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
 import type { StageModel } from '../stage/stage-model.ts';
 import { criterionNumber } from './criteria.ts';
-import type { FigureSink } from './figure-sink.ts';
+import type { FigureBoard } from './figure-board.ts';
 
 const PEAK = criterionNumber('peak-collector-voltage');
 const SURGE = criterionNumber('surge-voltage');
@@ -11,17 +11,15 @@ const RELEASE = criterionNumber('release-time');
 const CLAMP_CURRENT = criterionNumber('clamp-current');
 const CLAMP_POWER = criterionNumber('clamp-power');
 
-const NO_CORNER = -1;
-
 /** The criteria of turning a coil off, and of the supply's surge and dip. */
 export class TurnOffChecks {
   private readonly model: StageModel;
-  private readonly worst: FigureSink;
+  private readonly worst: FigureBoard;
   private readonly clampLimitA: number;
   private readonly clampLimitW: number;
   private readonly releaseA: number;
 
-  constructor(model: StageModel, worst: FigureSink) {
+  constructor(model: StageModel, worst: FigureBoard) {
     this.model = model;
     this.worst = worst;
     const { clamp, policy, load } = model.input;
@@ -40,25 +38,25 @@ export class TurnOffChecks {
     const highSupply = 1 << corners.shift.supply;
     if (load.kind === 'coil') {
       const limitV = vceoV === null ? NaN : vceoV * policy.voltageDerating;
-      this.worst.note(PEAK, clamp?.peakV ?? Infinity, limitV, highSupply);
+      this.worst.noteAt(PEAK, clamp?.peakV ?? Infinity, limitV, highSupply);
       if (supplyV.dip !== null) {
-        this.worst.note(HOLDING, supplyV.dip, load.holdV ?? NaN, NO_CORNER);
+        this.worst.note(HOLDING, supplyV.dip, load.holdV ?? NaN);
       }
     }
     if (supplyV.surge !== null) {
       const standOffV = clamp?.standOffV ?? Infinity;
       const limitV = Math.min(vceoV ?? NaN, standOffV);
       const aboveV = clamp?.standOffV === null ? clamp.largestV : 0;
-      this.worst.note(SURGE, supplyV.surge + aboveV, limitV, NO_CORNER);
+      this.worst.note(SURGE, supplyV.surge + aboveV, limitV);
     }
   }
 
-  visit(point: OperatingPoint, corner: number): void {
+  visit(point: OperatingPoint): void {
     const { input, clamp } = this.model;
     const { load } = input;
     if (load.kind !== 'coil' || clamp === null) return;
     const { loadOhm } = point.condition;
-    this.worst.note(CLAMP_CURRENT, point.icA, this.clampLimitA, corner);
+    this.worst.note(CLAMP_CURRENT, point.icA, this.clampLimitA);
     if (load.inductanceH === null) return;
     if (load.releaseV !== null) {
       const { smallestV } = clamp;
@@ -69,11 +67,11 @@ export class TurnOffChecks {
         this.releaseA,
         smallestV,
       );
-      this.worst.note(RELEASE, timeSec, load.releaseTimeLimitSec ?? NaN, corner);
+      this.worst.note(RELEASE, timeSec, load.releaseTimeLimitSec ?? NaN);
     }
     if (input.frequencyHz > 0) {
       const powerW = this.clampPowerW(load.inductanceH, loadOhm, point.icA);
-      this.worst.note(CLAMP_POWER, powerW, this.clampLimitW, corner);
+      this.worst.note(CLAMP_POWER, powerW, this.clampLimitW);
     }
   }
 

@@ -1,14 +1,24 @@
 import { type CornerSpace, cornerNamed } from '../stage/corners.ts';
-import { CRITERIA, criterionIds, criterionNumber, type CriterionId } from './criteria.ts';
+import {
+  CRITERIA,
+  criterionIds,
+  criterionNumber,
+  type CriterionId,
+  ownCriterionIds,
+} from './criteria.ts';
 import type { Criterion, Unit } from './evaluation.ts';
+import { FigureBoard, UNSET } from './figure-board.ts';
 import { evenMargin, leastLimit, marginOf, statusOf } from './margin.ts';
 
 /** Corners whose margins differ by less than this count as equally bad; the first is reported. */
 const SAME = 1e-9;
 
-const NO_CORNER = -1;
+/** Of figures that no corner moves. */
+export const NO_CORNER = -1;
 
 const IDS = criterionIds();
+/** Those of a transistor in front are judged under their own names. */
+const OWN_COUNT = ownCriterionIds().length;
 
 /** What caps or replaces the status a margin alone would give. */
 export type Standing =
@@ -18,7 +28,7 @@ export type Standing =
  * The worst figure of every criterion over the corners of a stage. Typed arrays, filled in place: reading a
  * corner costs a comparison per criterion. A criterion takes part once `note` or `stand` names it.
  */
-export class WorstCases {
+export class WorstCases extends FigureBoard {
   private readonly keys = new Float64Array(IDS.length).fill(Infinity);
   private readonly value = new Float64Array(IDS.length).fill(NaN);
   private readonly limit = new Float64Array(IDS.length).fill(NaN);
@@ -32,6 +42,7 @@ export class WorstCases {
 
   /** Forgets all figures and standings. */
   reset(): void {
+    this.limits.fill(UNSET);
     this.keys.fill(Infinity);
     this.value.fill(NaN);
     this.limit.fill(NaN);
@@ -40,15 +51,21 @@ export class WorstCases {
     this.standings.clear();
   }
 
-  /**
-   * Takes in a figure of one corner.
-   *
-   * @param k the criterion's number
-   * @param limit NaN where none is set: then the extreme value itself is kept
-   * @param corner number of the corner; −1 for a figure that no corner moves
-   */
-  note(k: number, value: number, limit: number, corner: number): void {
+  /** Takes in what was noted since the last call as the figures of a corner; −1 for figures that no corner moves. */
+  take(corner: number): void {
+    for (let k = 0; k < OWN_COUNT; k++) if (this.limits[k] !== UNSET) this.takeOne(k, corner);
+  }
+
+  override noteAt(k: number, value: number, limit: number, corner: number): void {
+    this.note(k, value, limit);
+    this.takeOne(k, corner);
+  }
+
+  private takeOne(k: number, corner: number): void {
     const sign = this.sign[k] ?? 1;
+    const value = this.figures[k] ?? NaN;
+    const limit = this.limits[k] ?? NaN;
+    this.limits[k] = UNSET;
     // A limit of NaN leaves the figure itself to be compared.
     const key = Number.isNaN(limit)
       ? -sign * value
@@ -78,8 +95,7 @@ export class WorstCases {
     return this.standings.get(criterionNumber(id)) ?? 'judged';
   }
 
-  /** Measures a criterion in another unit than the table's. */
-  measureIn(id: CriterionId, unit: Unit): void {
+  override measureIn(id: CriterionId, unit: Unit): void {
     this.units[criterionNumber(id)] = unit;
     this.least[criterionNumber(id)] = leastLimit(unit);
   }

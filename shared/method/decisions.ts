@@ -259,7 +259,7 @@ export const DECISIONS: readonly MethodDecision[] = [
   {
     id: 'samples-expected',
     title: 'What a sample of the Monte-Carlo run is',
-    text: 'One stage without tolerances: every supply, temperature, resistor and part figure has the one value drawn for it, coil and junction are settled. The same rules judge it as judge a corner, with expected figures: hFE goes with (T/298.15 K)^1.5, squared for a Darlington’s two gains, RCE(sat) and V0 with temperature both ways, a Darlington’s VCE(sat) with −2 mV/K both ways. The junction is brought to 0.1 mK.',
+    text: 'One stage without tolerances: every supply, temperature, resistor and part figure has the one value drawn for it, coil and junction are settled. The same rules judge it as judge a corner, with expected figures: hFE goes with (T/298.15 K)^1.5, squared for a Darlington’s two gains, RCE(sat) and V0 with temperature both ways, a Darlington’s VCE(sat) with −2 mV/K both ways. The junction is brought to 1 mK.',
   },
   {
     id: 'samples-drawn',

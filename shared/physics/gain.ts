@@ -22,6 +22,8 @@ interface Curve {
   readonly gain: readonly number[];
   readonly logA: Float64Array;
   readonly logGain: Float64Array;
+  /** Slope from each row to the next; 0 at the last. */
+  readonly slope: Float64Array;
 }
 
 /** hFE over IC at 25 °C with its limits, and how the minimum falls in the cold. */
@@ -89,7 +91,12 @@ function curveOf(
 
 function logarithmic(icA: readonly number[], gain: readonly number[]): Curve {
   const logA = Float64Array.from(icA, Math.log);
-  return { icA, gain, logA, logGain: Float64Array.from(gain, Math.log) };
+  const logGain = Float64Array.from(gain, Math.log);
+  const slope = logA.map((from, k) => {
+    const run = (logA[k + 1] ?? from) - from;
+    return run > 0 ? ((logGain[k + 1] ?? 0) - (logGain[k] ?? 0)) / run : 0;
+  });
+  return { icA, gain, logA, logGain, slope };
 }
 
 /** hFE of a logarithm; where it is a row's, the figure as printed. */
@@ -154,12 +161,7 @@ function coldExponent(rows: readonly GainPoint[]): number | null {
 function onSegment(curve: Curve, k: number, logA: number): number {
   const x0 = curve.logA[k] ?? 0;
   const y0 = curve.logGain[k] ?? 0;
-  return y0 + slopeOf(curve, k) * (logA - x0);
-}
-
-function slopeOf({ logA, logGain }: Curve, k: number): number {
-  const run = (logA[k + 1] ?? 0) - (logA[k] ?? 0);
-  return run > 0 ? ((logGain[k + 1] ?? 0) - (logGain[k] ?? 0)) / run : 0;
+  return y0 + (curve.slope[k] ?? 0) * (logA - x0);
 }
 
 function segmentOf({ logA }: Curve, atLogA: number): number {
@@ -182,10 +184,10 @@ function logMinimum(table: GainTable, logA: number): number {
   const last = minimum.logA.length - 1;
   if (last === 0) return singleRowMinimum(table, logA);
   if (logA < (minimum.logA[0] ?? 0)) {
-    return slopeOf(minimum, 0) > 0 ? onSegment(minimum, 0, logA) : (minimum.logGain[0] ?? 0);
+    return (minimum.slope[0] ?? 0) > 0 ? onSegment(minimum, 0, logA) : (minimum.logGain[0] ?? 0);
   }
   if (logA > (minimum.logA[last] ?? 0)) {
-    const falls = slopeOf(minimum, last - 1) < 0;
+    const falls = (minimum.slope[last - 1] ?? 0) < 0;
     return falls ? onSegment(minimum, last - 1, logA) : (minimum.logGain[last] ?? 0);
   }
   return onSegment(minimum, segmentOf(minimum, logA), logA);

@@ -6,6 +6,7 @@ import {
   forcedBetaStepV,
   interceptAtV,
   resistanceRatio,
+  type SaturationLine,
 } from '../physics/saturation.ts';
 import type { DriveSource } from './drive-source.ts';
 import type { InsideModel } from './internal-resistors.ts';
@@ -68,6 +69,9 @@ export class OperatingPoint {
   private readonly exponent: number;
   /** Temperature moves expected figures both ways, limit figures only to the worse. */
   private readonly bothWays: boolean;
+  private readonly saturation: SaturationLine | null;
+  private readonly rceTempco: number;
+  private readonly switches: boolean;
 
   readonly model: StageModel;
 
@@ -78,6 +82,9 @@ export class OperatingPoint {
     this.vbeTempco = model.part.vbeTempcoVPerK;
     this.exponent = model.part.gain?.exponent ?? 0;
     this.bothWays = model.specimen !== null;
+    this.saturation = model.part.saturation;
+    this.rceTempco = model.input.policy.rceTempcoPerK;
+    this.switches = model.input.frequencyHz > 0;
   }
 
   /** Smallest hFE at another collector current, at the solved junction temperature. */
@@ -180,7 +187,7 @@ export class OperatingPoint {
       if (!this.saturated) {
         this.icA = this.gain * this.ibA;
         this.vceV = Math.max(0, availableV - this.icA * this.condition.loadOhm);
-      } else if (this.fullDrop && this.model.part.saturation !== null) {
+      } else if (this.fullDrop && this.saturation !== null) {
         this.dropAcross(tjDegC, this.forcedBeta);
       } else {
         this.icA = fullA;
@@ -192,9 +199,9 @@ export class OperatingPoint {
   }
 
   protected sumPower(): void {
-    this.powerW =
-      this.model.conductionShare * (this.vceV * this.icA + this.vbeV * this.ibA) +
-      switchingLossW(this);
+    const conductionW = this.vceV * this.icA + this.vbeV * this.ibA;
+    this.powerW = this.model.conductionShare * conductionW;
+    if (this.switches) this.powerW += switchingLossW(this);
   }
 
   /**
@@ -287,9 +294,8 @@ export class OperatingPoint {
   }
 
   protected slopeOhm(tjDegC: number): number {
-    const { saturation } = this.model.part;
+    const { saturation, rceTempco: tempco } = this;
     if (saturation === null) return 0;
-    const tempco = this.model.input.policy.rceTempcoPerK;
     const ratio = this.bothWays
       ? expectedResistanceRatio(tjDegC, tempco)
       : resistanceRatio(tjDegC, tempco);
@@ -298,7 +304,7 @@ export class OperatingPoint {
 
   /** Load line against the saturation line: piece by piece downwards from the full load current. */
   protected dropAcross(tjDegC: number, forcedBeta: number): void {
-    const { saturation } = this.model.part;
+    const { saturation } = this;
     const { availableV, loadOhm, fullA } = this.condition;
     if (saturation === null) return;
     let current = 0;

@@ -1,18 +1,17 @@
 import { CRITERIA, criterionIds, type PRE } from '../checks/criteria.ts';
 import type { Criterion } from '../checks/evaluation.ts';
-import type { FigureSink } from '../checks/figure-sink.ts';
+import { FigureBoard } from '../checks/figure-board.ts';
 import { meets } from '../checks/margin.ts';
 
 const IDS = criterionIds();
 const SIGN = Int8Array.from(IDS, (id) => (CRITERIA[id].relation === '<=' ? 1 : -1));
 
 /** Whether samples meet the criteria of one transistor, and how many miss each. */
-export class SampleTally implements FigureSink {
-  /** Whether the sample at hand has met everything so far. */
-  met = true;
+export class SampleTally extends FigureBoard {
   /** Samples that missed a criterion, by the criterion's number without prefix. */
-  readonly missed = new Float64Array(IDS.length);
-  private readonly counts: Uint8Array;
+  private readonly missed = new Float64Array(IDS.length);
+  /** Numbers of the criteria that count. */
+  private readonly asked: Uint8Array;
 
   /**
    * @param criteria of the stage at its corners: those without a computed value do not count
@@ -22,20 +21,25 @@ export class SampleTally implements FigureSink {
     criteria: readonly Criterion[],
     readonly prefix: '' | typeof PRE,
   ) {
+    super();
     const computed = new Set(criteria.filter(isComputed).map(({ id }) => id));
-    this.counts = Uint8Array.from(IDS, (id) => (computed.has(prefix + id) ? 1 : 0));
+    this.asked = Uint8Array.from(IDS.flatMap((id, k) => (computed.has(prefix + id) ? [k] : [])));
+    // What a sample does not come to asks nothing of it.
+    this.limits.fill(NaN);
   }
 
-  note(k: number, value: number, limit: number): void {
-    if (this.counts[k] === 1 && !meets(SIGN[k] ?? 1, value, limit)) {
-      this.met = false;
-      this.missed[k] = (this.missed[k] ?? 0) + 1;
+  /** Whether the figures noted for a sample meet everything; counts those that do not. */
+  judge(): boolean {
+    const { asked, figures, limits, missed } = this;
+    let met = true;
+    for (let at = asked.length - 1; at >= 0; at--) {
+      const k = asked[at] ?? 0;
+      if (!meets(SIGN[k] ?? 1, figures[k] ?? NaN, limits[k] ?? NaN)) {
+        met = false;
+        missed[k] = (missed[k] ?? 0) + 1;
+      }
     }
-  }
-
-  /** Only margins need a unit. */
-  measureIn(): void {
-    return;
+    return met;
   }
 
   /** How many samples missed which criterion, by id; those nobody missed are left out. */

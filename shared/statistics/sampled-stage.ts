@@ -35,8 +35,7 @@ class OneSampledTransistor implements SampledStage {
 
   judge(draws: Draws, k: number): boolean {
     this.transistor.settleAt(draws, k);
-    this.transistor.judge();
-    return this.transistor.tally.met;
+    return this.transistor.judge();
   }
 
   misses(): [string, number][] {
@@ -67,12 +66,11 @@ class TwoSampledTransistors implements SampledStage {
     output.settleAt(draws, k);
     front.seriesV = output.point.vbeV;
     front.settleAt(draws, k);
-    front.judge();
+    const frontMet = front.judge();
     output.dropV = front.point.vceV;
     output.holdingLeakA = front.offA;
     output.settleAt(draws, k);
-    output.judge();
-    return front.tally.met && output.tally.met;
+    return output.judge() && frontMet;
   }
 
   misses(): [string, number][] {

@@ -21,7 +21,7 @@ import type { Draws } from './quantities.ts';
 import { SampleTally } from './sample-tally.ts';
 
 /** How near a sample's junction is brought to its balance, K. */
-const NEAR_K = 1e-4;
+const NEAR_K = 1e-3;
 
 /**
  * One transistor of a stage, put into one sample after another. A sample is the same stage without any tolerance: every
@@ -110,11 +110,11 @@ export class SampledTransistor {
     point.settle(ends.ambientDegC + this.usualRiseK, NEAR_K, this.usualFeedback);
   }
 
-  /** Judges the sample it stands at. */
-  judge(): void {
-    this.tally.met = !this.point.runaway && !failsByItself(this.model);
+  /** Judges the sample it stands at; tells whether it meets everything. */
+  judge(): boolean {
     this.checks.begin();
-    this.checks.visit(this.point, 0, true);
+    this.checks.visit(this.point, true);
+    return this.tally.judge() && !this.point.runaway && !failsByItself(this.model);
   }
 
   /** Current the transistor still lets through when off, A; needs `judge` first. */
