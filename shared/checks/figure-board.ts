@@ -8,7 +8,7 @@ export const UNSET = -Infinity;
  * The figures of one corner, or of one sample, with their limits, by the number of the criterion: what the families of
  * criteria write. Kept so small that a call costs two stores.
  */
-export class FigureBoard {
+export abstract class FigureBoard {
   protected readonly figures = new Float64Array(criterionIds().length).fill(NaN);
   protected readonly limits = new Float64Array(criterionIds().length).fill(UNSET);
 
@@ -19,14 +19,8 @@ export class FigureBoard {
   }
 
   /** Notes a figure that stands at one corner only, whichever is being judged. */
-  noteAt(k: number, value: number, limit: number, corner: number): void {
-    void corner;
-    this.note(k, value, limit);
-  }
+  abstract noteAt(k: number, value: number, limit: number, corner: number): void;
 
   /** Measures a criterion in another unit than the table's. */
-  measureIn(id: CriterionId, unit: Unit): void {
-    void id;
-    void unit;
-  }
+  abstract measureIn(id: CriterionId, unit: Unit): void;
 }

@@ -56,7 +56,7 @@ export class WorstCases extends FigureBoard {
     for (let k = 0; k < OWN_COUNT; k++) if (this.limits[k] !== UNSET) this.takeOne(k, corner);
   }
 
-  override noteAt(k: number, value: number, limit: number, corner: number): void {
+  noteAt(k: number, value: number, limit: number, corner: number): void {
     this.note(k, value, limit);
     this.takeOne(k, corner);
   }
@@ -95,7 +95,7 @@ export class WorstCases extends FigureBoard {
     return this.standings.get(criterionNumber(id)) ?? 'judged';
   }
 
-  override measureIn(id: CriterionId, unit: Unit): void {
+  measureIn(id: CriterionId, unit: Unit): void {
     this.units[criterionNumber(id)] = unit;
     this.least[criterionNumber(id)] = leastLimit(unit);
   }

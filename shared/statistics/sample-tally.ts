@@ -28,6 +28,15 @@ export class SampleTally extends FigureBoard {
     this.limits.fill(NaN);
   }
 
+  noteAt(k: number, value: number, limit: number): void {
+    this.note(k, value, limit);
+  }
+
+  /** Only margins need a unit. */
+  measureIn(): void {
+    return;
+  }
+
   /** Whether the figures noted for a sample meet everything; counts those that do not. */
   judge(): boolean {
     const { asked, figures, limits, missed } = this;
