@@ -14,31 +14,35 @@ const LOOK = [
   'word-spacing',
 ] as const;
 
+const SVG_NAMES = 'http://www.w3.org/2000/svg';
+
 /** Pixels of a picture per CSS pixel: sharp at 150 to 200 dpi on paper. */
 const PICTURE_SCALE = 3;
 
 /** The chart as a file of its own, in the light scheme whatever the screen shows. */
 export function saveChartSvg(host: HTMLElement, name: string): void {
-  const file = new Blob([standalone(host, name).outerHTML], { type: 'image/svg+xml' });
-  saveAs(file, `${fileName(name)}.svg`);
+  saveAs(new Blob([chartXml(host, name)], { type: 'image/svg+xml' }), `${fileName(name)}.svg`);
 }
 
 /** @throws Error where the browser cannot turn the drawing into a picture */
 export async function saveChartPng(host: HTMLElement, name: string): Promise<void> {
-  const svg = standalone(host, name);
-  const [width, height] = [svg.width.baseVal.value, svg.height.baseVal.value];
-  const image = new Image(width, height);
-  image.src = `data:image/svg+xml;charset=utf-8,${encodeURIComponent(svg.outerHTML)}`;
+  const image = new Image();
+  image.src = `data:image/svg+xml;charset=utf-8,${encodeURIComponent(chartXml(host, name))}`;
   await image.decode();
   const canvas = document.createElement('canvas');
-  canvas.width = width * PICTURE_SCALE;
-  canvas.height = height * PICTURE_SCALE;
+  canvas.width = image.naturalWidth * PICTURE_SCALE;
+  canvas.height = image.naturalHeight * PICTURE_SCALE;
   canvas.getContext('2d')?.drawImage(image, 0, 0, canvas.width, canvas.height);
   const blob = await new Promise<Blob | null>((done) => {
     canvas.toBlob(done, 'image/png');
   });
   if (blob === null) throw new Error('The browser made no picture of the chart.');
   saveAs(blob, `${fileName(name)}.png`);
+}
+
+/** The drawing as XML: in HTML's own spelling a no-break space is an entity that XML does not know. */
+export function chartXml(host: HTMLElement, name: string): string {
+  return new XMLSerializer().serializeToString(standalone(host, name));
 }
 
 /** "Output characteristics, load line" gives `output-characteristics-load-line`. */
@@ -54,7 +58,11 @@ function standalone(host: HTMLElement, name: string): SVGSVGElement {
   if (shown === null) throw new Error('The chart is not drawn.');
   const paper = document.createElement('div');
   paper.className = `${host.className} chart-paper`;
-  const copy = shown.cloneNode(true) as SVGSVGElement;
+  const copy = document.createElementNS(SVG_NAMES, 'svg');
+  for (const attribute of ['width', 'height', 'viewBox']) {
+    copy.setAttribute(attribute, shown.getAttribute(attribute) ?? '');
+  }
+  copy.append(...[...shown.children].map((child) => child.cloneNode(true)));
   copy.querySelector('.cursor')?.remove();
   paper.append(copy);
   document.body.append(paper);
@@ -68,17 +76,15 @@ function standalone(host: HTMLElement, name: string): SVGSVGElement {
     paper.remove();
   }
   for (const element of copy.querySelectorAll('[class]')) element.removeAttribute('class');
-  copy.removeAttribute('aria-hidden');
   copy.setAttribute('role', 'img');
   copy.setAttribute('aria-label', name);
-  copy.setAttribute('xmlns', 'http://www.w3.org/2000/svg');
   return copy;
 }
 
 function background(svg: SVGSVGElement, colour: string): SVGRectElement {
-  const rect = document.createElementNS('http://www.w3.org/2000/svg', 'rect');
-  rect.setAttribute('width', String(svg.width.baseVal.value));
-  rect.setAttribute('height', String(svg.height.baseVal.value));
+  const rect = document.createElementNS(SVG_NAMES, 'rect');
+  rect.setAttribute('width', svg.getAttribute('width') ?? '');
+  rect.setAttribute('height', svg.getAttribute('height') ?? '');
   rect.setAttribute('fill', colour);
   return rect;
 }

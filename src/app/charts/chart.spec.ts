@@ -6,6 +6,7 @@ import {
 } from '@angular/core';
 import { TestBed, type ComponentFixture } from '@angular/core/testing';
 import { axis, series, type ChartModel } from './chart-model.ts';
+import { chartXml, fileName } from './chart-export.ts';
 import { Chart } from './chart.ts';
 
 const CHART: ChartModel = {
@@ -20,7 +21,7 @@ const CHART: ChartModel = {
       [0.05, 0.3],
     ]),
   ],
-  points: [{ x: 0.011, y: 0.2025, label: 'operating point', shape: 'square' }],
+  points: [{ x: 0.011, y: 0.2025, label: 'operating point 0.203\u00a0V', shape: 'square' }],
 };
 
 @Component({
@@ -113,5 +114,17 @@ describe('Chart', () => {
     expect(plot().getAttribute('aria-label')).toBe('Another');
     expect(page().querySelectorAll('svg')).toHaveLength(2);
     expect(plot().querySelectorAll('.square')).toHaveLength(0);
+  });
+
+  it('leaves as a file that needs no style sheet and is well-formed XML', () => {
+    const text = chartXml(plot(), 'Saturation line');
+    const file = new DOMParser().parseFromString(text, 'image/svg+xml');
+    expect(file.querySelector('parsererror')).toBeNull();
+    expect(file.documentElement.getAttribute('aria-label')).toBe('Saturation line');
+    expect(file.querySelectorAll('[class]')).toHaveLength(0);
+    expect(file.querySelectorAll('path').length).toBeGreaterThan(3);
+    expect(text).not.toContain('&nbsp;');
+    expect(plot().querySelectorAll('svg .axis')).toHaveLength(1);
+    expect(fileName('VCE(sat) over IC, Q12')).toBe('vce-sat-over-ic-q12');
   });
 });
