@@ -87,7 +87,7 @@ export function kneeChart(
   return {
     kind: 'plot',
     name: 'Foot of the output characteristics',
-    x: axis('VCE', 'V', [0, toV]),
+    x: axis('VCE', 'V', [0, toV], { exact: true }),
     y: axis('IC', 'A', [0, toA]),
     series: [
       series('expected', footOfCurve(at, toV)),
