@@ -1,10 +1,10 @@
 /**
- * V. K. Mehta, R. Mehta, Principles of Electronics: Examples 18.1 (p. 472), 18.3 (pp. 475-476), 12.16 and 12.17
+ * V. K. Mehta, R. Mehta, Principles of Electronics: Examples 18.1 (p. 472), 18.2 (p. 475), 18.3 (pp. 475-476), 12.16 and 12.17
  * (pp. 323-324). Printed results by way of a public transcription.
  */
 import { describe, expect, it } from 'vitest';
 import { nominalFigures } from '../../shared/checks/corner-figures.ts';
-import { textbookStage } from './textbook-stage.ts';
+import { textbookOffV, textbookStage } from './textbook-stage.ts';
 import { powerShare } from '../../shared/physics/thermal.ts';
 
 describe('Mehta, Principles of Electronics', () => {
@@ -68,5 +68,9 @@ describe('Mehta, Principles of Electronics', () => {
   ])('allows at %d °C, VCE 4 V and 20 K/W %d A in Example 12.17', (ambientDegC, icA) => {
     const ratedW = (200 - 25) / 20;
     expect((ratedW * powerShare(ambientDegC, 200)) / 4).toBeCloseTo(icA, 2);
+  });
+
+  it('stands at 9.99 V off in Example 18.2: ICBO 10 µA across 1 kΩ', () => {
+    expect(textbookOffV({ supplyV: 10, loadOhm: 1000, leakageA: 1e-5 })).toBeCloseTo(9.99, 4);
   });
 });

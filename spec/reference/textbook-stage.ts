@@ -1,3 +1,4 @@
+import { evaluateStage } from '../../shared/checks/evaluate-stage.ts';
 import { StageInput } from '../../shared/stage/stage-input.ts';
 
 /** A stage as textbooks draw it: ideal output, exact parts, constant VBE, VCE(sat) and gain, no heating. */
@@ -53,4 +54,40 @@ export function textbookStage(book: TextbookStage): StageInput {
     },
     policy: { name: 'General practice' },
   });
+}
+
+/**
+ * What a switched-off stage leaves at its collector: the high level of an inverter without a load of its own, whose collector
+ * leakage is all that drops across RC.
+ *
+ * @param leakageA ICBO or ICEO as the text uses it
+ */
+export function textbookOffV(book: { supplyV: number; loadOhm: number; leakageA: number }): number {
+  const stage = textbookStage({
+    ...book,
+    ...{ driveV: 5, rbOhm: 1000, gain: 100, vbeV: 0.7, vceSatV: 0.2 },
+  });
+  const judged = StageInput.parse({
+    ...stage,
+    topology: 'level-translator',
+    load: {
+      kind: 'logic-input',
+      pullUpOhm: book.loadOhm,
+      tolerance: 0,
+      ratingW: null,
+      count: 1,
+      vilV: 0.8,
+      vihV: 2,
+      leakageA: 0,
+      lowCurrentA: 0,
+      capacitanceF: null,
+      wiringF: null,
+      riseTimeLimitSec: null,
+    },
+    transistor: {
+      ...stage.transistor,
+      leakage: [{ kind: 'icbo', currentA: book.leakageA, tempDegC: 25 }],
+    },
+  });
+  return evaluateStage(judged).criteria.find(({ id }) => id === 'output-high')?.value ?? NaN;
 }
