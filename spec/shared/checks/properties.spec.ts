@@ -2,8 +2,11 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { evaluateStage } from '../../../shared/checks/evaluate-stage.ts';
 import { nominalFigures } from '../../../shared/checks/corner-figures.ts';
+import { sizeStage } from '../../../shared/sizing/size-stage.ts';
+import type { Load } from '../../../shared/stage/load.ts';
 import type { StageInput } from '../../../shared/stage/stage-input.ts';
-import { relayStage, RELAY_FILE, TYPE_2N3904 } from '../relay-stage.ts';
+import { SampleRun } from '../../../shared/statistics/monte-carlo.ts';
+import { highSideStage, relayStage, RELAY_FILE, TYPE_2N3904 } from '../relay-stage.ts';
 
 const SEED = 20261201;
 const runs = (numRuns: number) => ({ seed: SEED, numRuns });
@@ -18,6 +21,25 @@ function limitFigures(input: StageInput): (id: string) => number {
 const DIGITS = 1 + 1e-9;
 
 const withRb = (valueOhm: number) => ({ ...RELAY_FILE.baseResistor, valueOhm });
+
+/** A Darlington of small size at a fitting load. */
+const DARLINGTON = {
+  topology: 'low-side-darlington',
+  drive: { ...RELAY_FILE.drive, railV: { min: 4.75, max: 5.25 } },
+  baseResistor: { ...RELAY_FILE.baseResistor, valueOhm: 2200 },
+  transistor: {
+    ...TYPE_2N3904,
+    darlington: true,
+    limits: { ...TYPE_2N3904.limits, icA: 0.5, powerW: 2 },
+    thermal: { rthJaKPerW: 62.5 },
+    gain: [
+      { icA: 0.01, vceV: 5, min: 5000 },
+      { icA: 0.3, vceV: 5, min: 10_000 },
+    ],
+    saturation: [{ icA: 0.1, ibA: 1e-4, maxV: 1.5 }],
+    baseEmitter: [{ icA: 0.1, ibA: 1e-4, minV: 1.2, maxV: 2 }],
+  },
+};
 
 /** Base resistors that keep the relay stage saturated at every corner. */
 const saturatingOhm = fc.double({ min: 250, max: 2500, noNaN: true });
@@ -117,8 +139,9 @@ describe('limit figures', { timeout: 120_000 }, () => {
     );
   });
 
-  it('enclose every point drawn inside the tolerance box of an always-saturated stage', () => {
-    const limit = limitFigures(relayStage({ baseResistor: withRb(620) }));
+  it('enclose 10 000 points drawn inside the tolerance box of an always-saturated stage', () => {
+    const stage = relayStage({ baseResistor: withRb(620) });
+    const limit = limitFigures(stage);
     const share = fc.double({ min: -1, max: 1, noNaN: true });
     const end = (middle: number, spread: number, at: number) => middle * (1 + spread * at);
     fc.assert(
@@ -127,16 +150,15 @@ describe('limit figures', { timeout: 120_000 }, () => {
         const supply = 24 + 2.4 * vs;
         const ambient = 20 + 40 * ta;
         const logic = 3.3 + 0.3 * rail;
-        const figures = nominalFigures(
-          relayStage({
-            supplyV: { min: supply, max: supply },
-            ambientDegC: { min: ambient, max: ambient },
-            drive: { ...RELAY_FILE.drive, railV: { min: logic, max: logic } },
-            load: { ...RELAY_FILE.load, resistanceOhm: end(1440, 0.1, coil), tolerance: 0 },
-            baseResistor: { ...withRb(end(620, 0.05, rb)), tolerance: 0 },
-            shuntResistor: { valueOhm: end(22000, 0.05, rbe), tolerance: 0, ratingW: 0.1 },
-          }),
-        );
+        const figures = nominalFigures({
+          ...stage,
+          supplyV: { ...stage.supplyV, min: supply, max: supply },
+          ambientDegC: { min: ambient, max: ambient },
+          drive: { ...stage.drive, railV: { min: logic, max: logic } },
+          load: { ...stage.load, resistanceOhm: end(1440, 0.1, coil), tolerance: 0 } as Load,
+          baseResistor: { ...withRb(end(620, 0.05, rb)), tolerance: 0 },
+          shuntResistor: { valueOhm: end(22000, 0.05, rbe), tolerance: 0, ratingW: 0.1 },
+        });
         expect(figures.overdriveFactor * DIGITS).toBeGreaterThanOrEqual(limit('overdrive-factor'));
         expect(figures.forcedBeta).toBeLessThanOrEqual(limit('forced-beta') * DIGITS);
         expect(figures.icA).toBeLessThanOrEqual(limit('collector-current') * DIGITS);
@@ -144,7 +166,76 @@ describe('limit figures', { timeout: 120_000 }, () => {
         expect(figures.vceV).toBeLessThanOrEqual(limit('saturation-voltage') * DIGITS);
         expect(figures.tjDegC).toBeLessThanOrEqual(limit('junction-temperature') * DIGITS);
       }),
-      runs(2000),
+      runs(10_000),
     );
+  });
+
+  it('enclose 10 000 drawn specimens: gain, VBE and VCE(sat) too, expected figures throughout', () => {
+    const resistor = { kind: 'resistor', resistanceOhm: 1500, tolerance: 0.05 };
+    const stages = [
+      relayStage({ baseResistor: withRb(620) }),
+      relayStage({ baseResistor: withRb(620), load: resistor, clamp: null }),
+      highSideStage(),
+      relayStage({ ...DARLINGTON, load: { ...resistor, resistanceOhm: 120 }, clamp: null }),
+    ];
+    for (const stage of stages) {
+      const limit = limitFigures(stage);
+      expect(limit('overdrive-factor')).toBeGreaterThan(1);
+      const run = new SampleRun(stage, { samples: 10_000, seed: SEED });
+      while (run.step());
+      const { samples, figures } = run.share();
+      expect(samples).toBe(10_000);
+      const { overdriveFactor, icA, vceSatV, powerW, tjDegC } = figures;
+      expect(Math.min(...overdriveFactor)).toBeGreaterThanOrEqual(limit('overdrive-factor'));
+      expect(Math.max(...icA)).toBeLessThanOrEqual(limit('collector-current'));
+      expect(Math.max(...vceSatV)).toBeLessThanOrEqual(limit('saturation-voltage'));
+      expect(Math.max(...powerW)).toBeLessThanOrEqual(limit('dissipation'));
+      expect(Math.max(...tjDegC)).toBeLessThanOrEqual(limit('junction-temperature'));
+    }
+  });
+});
+
+describe('sizing', { timeout: 120_000 }, () => {
+  it('recommends what then passes: size, then check, over drawn stages', () => {
+    let sized = 0;
+    fc.assert(
+      fc.property(
+        fc.double({ min: 5, max: 36, noNaN: true }),
+        fc.double({ min: 0.002, max: 0.06, noNaN: true }),
+        fc.double({ min: 2.5, max: 12, noNaN: true }),
+        fc.double({ min: 0.004, max: 0.03, noNaN: true }),
+        fc.boolean(),
+        (supply, loadA, rail, pinA, guaranteedOnly) => {
+          const input = relayStage({
+            supplyV: { min: supply * 0.95, max: supply * 1.05 },
+            load: { kind: 'resistor', resistanceOhm: supply / loadA, tolerance: 0.05 },
+            clamp: null,
+            drive: {
+              ...RELAY_FILE.drive,
+              railV: { min: rail * 0.95, max: rail * 1.05 },
+              high: { dropV: 0.6, currentA: pinA / 2 },
+              sourceLimitA: pinA,
+            },
+            baseResistor: withRb(1000),
+            policy: { name: 'General practice', guaranteedOnly },
+          });
+          const { recommendedOhm, candidates, rbMinOhm, rbMaxOhm } = sizeStage(input);
+          if (recommendedOhm === null) return;
+          sized++;
+          expect(recommendedOhm).toBeGreaterThanOrEqual(rbMinOhm ?? Infinity);
+          expect(recommendedOhm).toBeLessThanOrEqual(rbMaxOhm ?? 0);
+          const chosen = candidates.find(({ valueOhm }) => valueOhm === recommendedOhm);
+          const { criteria } = evaluateStage({ ...input, baseResistor: withRb(recommendedOhm) });
+          const deciding = ['overdrive-factor', 'forced-beta', 'drive-current', 'rb-dissipation'];
+          for (const { id, status, margin } of criteria) {
+            if (!deciding.includes(id)) continue;
+            expect(['pass', 'marginal'], id).toContain(status);
+            expect(margin ?? NaN, id).toBeGreaterThanOrEqual((chosen?.margin ?? NaN) - 1e-9);
+          }
+        },
+      ),
+      runs(80),
+    );
+    expect(sized).toBeGreaterThan(20);
   });
 });
