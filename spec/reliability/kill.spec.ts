@@ -2,6 +2,8 @@ import path from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { repeats, seed } from '../long-run.ts';
+import { Designators, PartLinks } from '../../shared/contract/revision.ts';
+import { allNull } from '../server/http/route-examples.ts';
 import { GENERAL, projectFields } from '../server/project-floor.ts';
 import { relayDriver } from '../shared/relay-stage.ts';
 import type { TestClient } from '../server/test-client.ts';
@@ -133,14 +135,10 @@ class Saver {
   }
 
   #body(title: string): object {
-    const none = (names: string): object =>
-      Object.fromEntries(names.split(' ').map((name) => [name, null]));
     return {
       definition: relayDriver({ reference: `Q${this.number + 1}`, title }),
-      designators: none(
-        'baseResistor shuntResistor pullUp speedUpCapacitor load clamp clampZener drive preDriver preBaseResistor preShuntResistor',
-      ),
-      parts: none('transistor preDriver load drive clamp'),
+      designators: allNull(Designators),
+      parts: allNull(PartLinks),
     };
   }
 }

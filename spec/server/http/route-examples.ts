@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import type { Endpoint } from '../../../server/http/endpoint.ts';
+import { Designators, PartLinks } from '../../../shared/contract/revision.ts';
 import { done, projectFields, type ProjectFloor } from '../project-floor.ts';
 import { relayDriver } from '../../shared/relay-stage.ts';
 import type { Reply } from '../test-client.ts';
@@ -12,11 +13,9 @@ export type Ids = Readonly<Record<string, string>>;
 
 const NO_ID = '00000000-0000-4000-8000-000000000000';
 const text = 'Because of the bench.';
-const allNull = (names: string): object =>
-  Object.fromEntries(names.split(' ').map((name) => [name, null]));
-const DESIGNATORS = allNull(
-  'baseResistor shuntResistor pullUp speedUpCapacitor load clamp clampZener drive preDriver preBaseResistor preShuntResistor',
-);
+/** Every member of the schema, empty. */
+export const allNull = ({ shape }: { readonly shape: object }): object =>
+  Object.fromEntries(Object.keys(shape).map((name) => [name, null]));
 const partFields = (partNumber: string): object => ({
   record: {
     ...{ kind: 'transistor', partNumber, confidence: 'high', polarity: 'npn' },
@@ -25,7 +24,6 @@ const partFields = (partNumber: string): object => ({
   },
   comment: 'Entered from the data sheet.',
 });
-const PARTS = allNull('transistor preDriver load drive clamp');
 
 /** A well-formed body for each route that takes one. A route that is missing here fails the matrix. */
 const BODIES: Record<string, () => unknown> = {
@@ -50,7 +48,7 @@ const BODIES: Record<string, () => unknown> = {
     definition: relayDriver({ reference: `Q${1000 + Math.floor(performance.now() % 9000)}` }),
   }),
   'PUT /api/revisions/:revisionId': () => ({
-    ...{ definition: relayDriver(), designators: DESIGNATORS, parts: PARTS },
+    ...{ definition: relayDriver(), designators: allNull(Designators), parts: allNull(PartLinks) },
   }),
   'POST /api/revisions/:revisionId/return': () => ({ reason: text }),
   'POST /api/revisions/:revisionId/withdrawal': () => ({ reason: text }),
