@@ -3,6 +3,7 @@ import {
   endSessionsOfPerson,
   findColleagues,
   invitePerson,
+  invitePersonAgain,
   listMailbox,
   listPeople,
   type Person,
@@ -35,6 +36,11 @@ export function peopleEndpoints({ people, mailbox }: PeopleServices): Endpoint[]
     endpoint(invitePerson, 'administrator', async (call) => {
       const person = await people.invite(call, call.body);
       return { body: toPerson(person), etag: person };
+    }),
+
+    endpoint(invitePersonAgain, 'administrator', async (call) => {
+      await people.inviteAgain(call, call.params.personId);
+      return { body: null };
     }),
 
     endpoint(readPerson, 'administrator', async (call) => {

@@ -62,10 +62,7 @@ export class PeopleService {
           ...{ passwordVersion: 0, failedSignIns: 0, createdAtMs: act.atMs, lastSignInAtMs: null },
         }),
       );
-      const token = await issueToken(manager, 'invitation', person, act.atMs);
-      const workspace = await manager.findOneBy(WorkspaceEntity, { id: 1 });
-      const letter = invitation(this.origin, person, workspace?.name ?? '', token);
-      await queueLetter(manager, letter, act.atMs);
+      await this.#mailInvitation(manager, person, act.atMs);
       const { email, administrator } = person;
       await recordAudit(
         manager,
@@ -76,6 +73,29 @@ export class PeopleService {
     });
     this.outbox.wake();
     return invited;
+  }
+
+  /**
+   * A new link for somebody who let the first one expire; an older one that still lives goes on doing so.
+   *
+   * @throws {ApiError} conflict when the person has an account in use, or is disabled
+   */
+  async inviteAgain(act: Act<Actor>, id: string): Promise<void> {
+    await this.database.transaction(async (manager) => {
+      const person = await existing(manager, id);
+      if (person.state !== 'invited') {
+        throw new ApiError('conflict', `${person.name} has no invitation to take up.`);
+      }
+      await this.#mailInvitation(manager, person, act.atMs);
+      const summary = `invited ${person.name} again`;
+      const { email } = person;
+      await recordAudit(
+        manager,
+        act,
+        personAudit(person, 'person.invited-again', summary, { email }),
+      );
+    });
+    this.outbox.wake();
   }
 
   /** A person disabled, or with other rights, has to sign in anew. */
@@ -115,6 +135,13 @@ export class PeopleService {
       const summary = `ended all sessions of ${person.name}`;
       await recordAudit(manager, act, personAudit(person, 'session.ended', summary));
     });
+  }
+
+  async #mailInvitation(manager: EntityManager, person: PersonEntity, atMs: number): Promise<void> {
+    const token = await issueToken(manager, 'invitation', person, atMs);
+    const workspace = await manager.findOneBy(WorkspaceEntity, { id: 1 });
+    const letter = invitation(this.origin, person, workspace?.name ?? '', token);
+    await queueLetter(manager, letter, atMs);
   }
 }
 

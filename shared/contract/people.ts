@@ -40,6 +40,16 @@ export const invitePerson = {
   status: 201,
 } as const satisfies Route;
 
+/** For whoever let the 24 h pass; refused once the invitation was taken up. */
+export const invitePersonAgain = {
+  method: 'POST',
+  path: '/api/people/:personId/invitation',
+  summary: 'Mail an invited person a new link that lives 24 h (administrator)',
+  params: z.strictObject({ personId: Id }),
+  reply: null,
+  status: 202,
+} as const satisfies Route;
+
 export const readPerson = {
   method: 'GET',
   path: '/api/people/:personId',

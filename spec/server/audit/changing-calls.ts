@@ -79,6 +79,11 @@ export const CHANGING_CALLS: Readonly<Record<string, (floor: ProjectFloor) => Pr
       ...{ client: administrator.client, path: '/api/people', action: 'person.invited' },
       body: { name: 'Ina', email: `${randomUUID()}@works.example`, administrator: false },
     }),
+  'POST /api/people/:personId/invitation': async (floor) => ({
+    client: floor.administrator.client,
+    path: `/api/people/${idOf(await invited(floor))}/invitation`,
+    action: 'person.invited-again',
+  }),
   'PATCH /api/people/:personId': async (floor) => {
     const person = await invited(floor);
     return {

@@ -159,6 +159,28 @@ describe('an account', () => {
       expect((await accept(token)).status).toBe(422);
     });
 
+    it('S-09: can be sent again when it has expired, until it is taken up', async () => {
+      await ask();
+      server.pass(24 * 60 * MINUTE_MS);
+      const chief = await server.signIn(admin);
+      const people = (await chief.get('/api/people')).body.people as {
+        id: string;
+        email: string;
+      }[];
+      const { id } = people.find(({ email }) => email === invite.email)!;
+      const again = async () => (await chief.post(`/api/people/${id}/invitation`)).status;
+      const token = await server.tokenFor(invite, async () => {
+        expect(await again()).toBe(202);
+      });
+      expect((await accept(token)).status).toBe(204);
+      expect(await who(await server.signIn(invite, NEXT))).toBe(id);
+      expect(await again()).toBe(409);
+      const client = await server.signIn(person);
+      expect((await client.post(`/api/people/${id}/invitation`)).status).toBe(403);
+      const { lines } = (await chief.get('/api/audit?search=invited-again')).body;
+      expect(lines).toMatchObject([{ summary: 'invited Ina Invited again', objectId: id }]);
+    });
+
     it('is refused for an address that has an account, and to whoever is no administrator', async () => {
       const chief = await server.signIn(admin);
       const twice = await chief.post('/api/people', { ...invite, email: person.email });

@@ -4,6 +4,7 @@ import { MatTableModule } from '@angular/material/table';
 import {
   changePerson,
   endSessionsOfPerson,
+  invitePersonAgain,
   listPeople,
   readPerson,
   type Person,
@@ -64,6 +65,15 @@ export class PeoplePage {
       const { value } = await this.api.send(changePerson, { params, body, etag });
       this.people.update((people) => people?.map((each) => (each.id === value.id ? value : each)));
       this.tell(done);
+    } catch (error) {
+      this.tell(toApiProblem(error).detail);
+    }
+  }
+
+  protected async inviteAgain(person: Person): Promise<void> {
+    try {
+      await this.api.send(invitePersonAgain, { params: { personId: person.id } });
+      this.tell(`A new link is on its way to ${person.email}; it lives 24 h.`);
     } catch (error) {
       this.tell(toApiProblem(error).detail);
     }
