@@ -11,18 +11,54 @@ export interface LockedValue {
 /** The values an approver wants to see before signing, in words with units. */
 export function lockedValues({ definition, evaluation }: Revision): LockedValue[] {
   const { baseResistor, shuntResistor, supplyV, ambientDegC, drive, transistor } = definition;
+  const { topology } = definition;
   const valueOhm = evaluation.baseResistorOhm ?? baseResistor.valueOhm;
   const chosen = valueOhm === null ? null : { valueOhm, tolerance: baseResistor.tolerance };
   return [
-    { label: 'RB', text: resistorText(chosen) },
+    { label: 'Topology', text: choiceWords(topology) },
+    { label: 'RB', text: chosen?.valueOhm === 0 ? 'none' : resistorText(chosen) },
     { label: 'RBE', text: resistorText(shuntResistor) },
     { label: 'Transistor', text: transistor.partNumber },
+    ...insideValues(definition),
+    ...frontValues(definition),
     { label: 'Clamp', text: clampText(definition) },
     { label: 'Supply', text: rangeText(supplyV, 'V') },
     { label: 'Ambient', text: rangeText(ambientDegC, '°C') },
     { label: choiceWords(definition.load.kind), text: loadText(definition) },
     { label: 'Drive pin', text: rangeText(drive.railV, 'V') },
+    ...switchingValues(definition),
   ];
+}
+
+/** The transistor in front of a two-transistor high side, with its network. */
+function frontValues({ topology, preDriver }: StageInput): LockedValue[] {
+  if (topology !== 'two-transistor-high-side' || preDriver === null) return [];
+  return [
+    { label: 'Pre-driver', text: preDriver.transistor.partNumber },
+    { label: 'RB1', text: resistorText(preDriver.baseResistor) },
+    { label: 'RBE1', text: resistorText(preDriver.shuntResistor) },
+  ];
+}
+
+function insideValues({ topology, transistor: { internal } }: StageInput): LockedValue[] {
+  if (topology !== 'low-side-pre-biased' || internal === null) return [];
+  const { r1Ohm, r2Ohm } = internal;
+  const ohm = (value: number | null) => (value === null ? 'none' : formatQuantity(value, 'Ohm'));
+  return [{ label: 'R1 and R2 inside', text: `${ohm(r1Ohm)}, ${ohm(r2Ohm)}` }];
+}
+
+function switchingValues({ frequencyHz, duty, speedUpCapacitorF }: StageInput): LockedValue[] {
+  return [
+    frequencyHz === 0
+      ? []
+      : {
+          label: 'Switching',
+          text: `${formatQuantity(frequencyHz, 'Hz')}, ${formatPercent(duty)} on`,
+        },
+    speedUpCapacitorF === null
+      ? []
+      : { label: 'Speed-up capacitor', text: formatQuantity(speedUpCapacitorF, 'F') },
+  ].flat();
 }
 
 function resistorText(resistor: { valueOhm: number; tolerance: number } | null): string {
@@ -54,10 +90,10 @@ function loadText({ load }: StageInput): string {
     case 'resistor':
       return resistorText({ valueOhm: load.resistanceOhm, tolerance: load.tolerance });
     case 'led-string':
-      return `${load.count} LEDs, ${formatQuantity(load.resistanceOhm, 'Ohm')}`;
+      return `${load.count} LEDs, ${resistorText({ valueOhm: load.resistanceOhm, tolerance: load.tolerance })}`;
     case 'lamp':
       return `${formatQuantity(load.nominalV, 'V')}, ${formatQuantity(load.currentA, 'A')}`;
     case 'logic-input':
-      return `${load.count} inputs, RC ${formatQuantity(load.pullUpOhm, 'Ohm')}`;
+      return `${load.count} × input, RC ${resistorText({ valueOhm: load.pullUpOhm, tolerance: load.tolerance })}`;
   }
 }
