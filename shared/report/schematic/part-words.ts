@@ -43,8 +43,7 @@ export function designatorRuns(
 }
 
 /** `2 inputs` */
-export const inputsText = (count: number): string =>
-  count === 1 ? 'logic input' : `${count} inputs`;
+export const inputsText = (count: number): string => `${count} ${count === 1 ? 'input' : 'inputs'}`;
 
 /** `620 Ω ±5 %` */
 export function resistorText(valueOhm: number | null, tolerance: number): string {
@@ -73,11 +72,13 @@ export function loadLines({ stage }: SchematicSubject): readonly string[] {
   }
 }
 
-/** Splits a part number that is too long for one line; what still does not fit ends in an ellipsis. */
+/** Splits a part number that is too long for one line, at a space if it can; what still does not fit ends in an ellipsis. */
 export function wrapped(text: string, perLine: number): readonly string[] {
   if (text.length <= perLine) return [text];
-  const rest = text.slice(perLine);
-  return [text.slice(0, perLine), rest.length <= perLine ? rest : `${rest.slice(0, perLine - 1)}…`];
+  const space = text.lastIndexOf(' ', perLine);
+  const end = space > 0 ? space : perLine;
+  const rest = text.slice(end).trimStart();
+  return [text.slice(0, end), rest.length <= perLine ? rest : `${rest.slice(0, perLine - 1)}…`];
 }
 
 /** A node voltage; from 10 mV up in volts, so that voltages of one drawing compare at sight. */

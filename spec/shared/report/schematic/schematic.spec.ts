@@ -8,6 +8,7 @@ import {
   type DrawingWire,
   type Point,
 } from '../../../../shared/report/schematic/drawing.ts';
+import { wrapped } from '../../../../shared/report/schematic/part-words.ts';
 import { schematicSvg } from '../../../../shared/report/schematic/schematic-svg.ts';
 import { drawSchematic } from '../../../../shared/report/schematic/schematic.ts';
 import { placed, SYMBOLS } from '../../../../shared/report/schematic/symbols.ts';
@@ -399,6 +400,12 @@ describe('schematic', () => {
       'load-0': '12.1 kΩ ±1 %',
     });
     expect(drawing.name).toContain('load RC 12.1');
+  });
+
+  it('breaks a long name at its space, else where the line ends', () => {
+    expect(wrapped('not chosen', 8)).toEqual(['not', 'chosen']);
+    expect(wrapped('MMBT2222ALT1G', 8)).toEqual(['MMBT2222', 'ALT1G']);
+    expect(wrapped('MMBT2222ALT1G', 5)).toEqual(['MMBT2', '222A…']);
   });
 
   it('gives the LEDs and their resistor a name each', () => {
