@@ -17,10 +17,9 @@ import {
  */
 export function withTopology(draft: Draft, topology: Topology): Draft {
   const { load } = draft.definition;
-  const moved = withTransistors(draft, topology);
-  const next = { ...moved, definition: { ...moved.definition, topology } };
   const { loads } = needsOf(topology);
-  return loads.includes(load.kind) ? next : withLoad(next, loads[0] ?? load.kind);
+  const loaded = loads.includes(load.kind) ? draft : withLoad(draft, loads[0] ?? load.kind);
+  return withTransistors(loaded, topology);
 }
 
 /** The draft with a load of another kind; the clamp follows. */
@@ -40,6 +39,8 @@ export function withLoad(draft: Draft, kind: Load['kind']): Draft {
 }
 
 const TWO = 'two-transistor-high-side';
+/** Stands for a base resistor left to be sized. */
+const SOME_OHM = 4700;
 
 function withTransistors(draft: Draft, topology: Topology): Draft {
   const from = draft.definition.topology;
@@ -52,7 +53,9 @@ function withTransistors(draft: Draft, topology: Topology): Draft {
 function toTwo(draft: Draft): Draft {
   const { definition, parts, designators } = draft;
   const { transistor, baseResistor, shuntResistor } = definition;
-  const start = startingPreDriver();
+  const behind = refitted(draft, TWO);
+  const rbOhm = behind.definition.baseResistor.valueOhm ?? SOME_OHM;
+  const start = startingPreDriver(behind.definition, rbOhm);
   const front = transistorSuits(transistor, FRONT_NEEDS);
   const valueOhm = baseResistor.valueOhm ?? start.baseResistor.valueOhm;
   const preDriver = front
@@ -66,14 +69,11 @@ function toTwo(draft: Draft): Draft {
         ...{ baseResistor: null, shuntResistor: null },
       }
     : {};
-  return refitted(
-    {
-      definition: { ...definition, preDriver },
-      parts: front ? { ...parts, preDriver: parts.transistor } : parts,
-      designators: { ...designators, ...pre },
-    },
-    TWO,
-  );
+  return {
+    definition: { ...behind.definition, preDriver },
+    parts: { ...behind.parts, preDriver: front ? parts.transistor : null },
+    designators: { ...designators, ...pre },
+  };
 }
 
 /** The transistor in front as the only one. */
@@ -98,13 +98,14 @@ function refitted(draft: Draft, topology: Topology): Draft {
   const { definition, parts } = draft;
   const suits = transistorSuits(definition.transistor, needsOf(topology));
   const driven = drives(definition, topology);
+  const drive = driven ? definition.drive : startingDrive(topology);
+  const around = { ...definition, topology, drive };
   return {
     ...draft,
     definition: {
-      ...definition,
+      ...around,
+      ...(suits ? {} : startingNetwork(around)),
       transistor: suits ? definition.transistor : startingTransistor(topology),
-      ...(suits ? {} : startingNetwork(topology)),
-      drive: driven ? definition.drive : startingDrive(topology),
     },
     parts: {
       ...parts,

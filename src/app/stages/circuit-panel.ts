@@ -49,11 +49,15 @@ export class CircuitPanel {
       .criteria.filter(({ corner }) => corner !== null)
       .map(({ id }) => ({ id, text: `${criterionName(id)}, worst corner` })),
   );
+  /** What the figures are shown at: a criterion that this stage does not have leaves the middle. */
+  protected readonly shownAt = computed(() =>
+    this.corners().some(({ id }) => id === this.at()) ? this.at() : NOMINAL,
+  );
   private readonly judged = computed(() => judgedStage(this.stage(), this.evaluation()));
   private readonly figures = computed<CornerFigures | null>(() => {
     const stage = this.judged();
     if (!hasFigures(stage, this.evaluation())) return null;
-    const corner = shownCorner(this.evaluation(), this.at());
+    const corner = shownCorner(this.evaluation(), this.shownAt());
     return corner === null ? nominalFigures(stage) : figuresAtCorner(stage, corner);
   });
   protected readonly drawing = computed(() =>

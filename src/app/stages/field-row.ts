@@ -8,6 +8,9 @@ import type { ChoiceSpec, FieldSpec } from './field-spec.ts';
 import { rangeLine, valueText } from './field-words.ts';
 import { fieldSpec, type FieldPath } from './stage-fields.ts';
 
+/** Letters of a choice that fit beside its label. */
+const LONGEST_BESIDE = 16;
+
 /** One row of the sheet's form: label and range at the left, the field at the right, faults below both. */
 @Component({
   selector: 'app-field-row',
@@ -15,7 +18,11 @@ import { fieldSpec, type FieldPath } from './stage-fields.ts';
   templateUrl: './field-row.html',
   styleUrl: './field-row.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  host: { '[class.selected]': 'selected()', '[class.read-only]': 'readOnly()' },
+  host: {
+    '[class.selected]': 'selected()',
+    '[class.read-only]': 'readOnly()',
+    '[class.stacked]': 'stacked()',
+  },
 })
 export class FieldRow {
   readonly path = input.required<FieldPath>();
@@ -35,6 +42,12 @@ export class FieldRow {
   readonly range = input<string | null>(null);
 
   protected readonly spec = computed<FieldSpec>(() => fieldSpec(this.path()));
+  /** Long words of a choice take the whole width, below the label. */
+  protected readonly stacked = computed(() => {
+    const spec = this.spec();
+    if (spec.kind !== 'choice' || this.readOnly()) return false;
+    return (this.options() ?? spec.options).some(([, text]) => text.length > LONGEST_BESIDE);
+  });
   protected readonly id = computed(() => fieldId(this.path()));
   protected readonly fullLabel = computed(() => {
     const designator = this.designator();

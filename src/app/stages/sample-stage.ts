@@ -39,13 +39,6 @@ export function startingTransistor(topology: Topology): TransistorData {
   return noTransistor(polarity, kinds[0]);
 }
 
-/** The transistor in front of a two-transistor high side, with its base network. */
-export const startingPreDriver = (): PreDriver => ({
-  transistor: noTransistor('npn'),
-  baseResistor: { valueOhm: 4700, tolerance: 0.05, ratingW: 0.1 },
-  shuntResistor: { valueOhm: 22_000, tolerance: 0.05, ratingW: 0.1 },
-});
-
 /** A 3.3 V output; an open collector where only that can turn a PNP off. */
 export function startingDrive(topology: Topology): Drive {
   const common = {
@@ -123,20 +116,64 @@ export function clampFor(load: Load, clamp: Clamp): Clamp {
   return clamp.kind === 'none' ? { ...NO_CLAMP, kind: 'diode', forwardV: 1 } : clamp;
 }
 
-/** The base network a topology starts with: RB to be sized, nothing outside a pre-biased part. */
+type Surroundings = Pick<StageInput, 'topology' | 'drive' | 'load'> & { readonly supplyV: Span };
+
+/** The base network a stage starts with: forced β 10 at its load, nothing outside a pre-biased part. */
 export function startingNetwork(
-  topology: Topology,
+  stage: Surroundings,
 ): Pick<StageInput, 'baseResistor' | 'shuntResistor'> {
-  return topology === 'low-side-pre-biased'
-    ? { baseResistor: { valueOhm: 0, tolerance: 0.05, ratingW: 0.1 }, shuntResistor: null }
-    : {
-        baseResistor: { valueOhm: null, tolerance: 0.05, ratingW: ratingOf(topology) },
-        shuntResistor: { valueOhm: 22_000, tolerance: 0.05, ratingW: 0.1 },
-      };
+  if (stage.topology === 'low-side-pre-biased') {
+    return { baseResistor: { valueOhm: 0, tolerance: 0.05, ratingW: 0.1 }, shuntResistor: null };
+  }
+  const baseA = startingLoadA(stage) / STARTING_BETA;
+  return {
+    baseResistor: { valueOhm: below(acrossBaseV(stage) / baseA), tolerance: 0.05, ratingW: 0.25 },
+    shuntResistor: { valueOhm: 22_000, tolerance: 0.05, ratingW: 0.1 },
+  };
 }
 
-/** RB of a PNP lies at the whole supply. */
-const ratingOf = (topology: Topology) => (needsOf(topology).polarity === 'pnp' ? 0.25 : 0.1);
+/** The transistor in front of a two-transistor high side: its load is the base resistor behind it. */
+export function startingPreDriver({ drive, supplyV }: Surroundings, rbOhm: number): PreDriver {
+  const baseA = supplyV.max / rbOhm / STARTING_BETA;
+  return {
+    transistor: noTransistor('npn'),
+    baseResistor: {
+      valueOhm: below((highV(drive) - VBE_V) / baseA),
+      ...{ tolerance: 0.05, ratingW: 0.1 },
+    },
+    shuntResistor: { valueOhm: 22_000, tolerance: 0.05, ratingW: 0.1 },
+  };
+}
+
+/** The rule of thumb of saturated switches (common practice). */
+const STARTING_BETA = 10;
+const VBE_V = 0.8;
+
+const highV = ({ railV, high }: Drive) => railV.min - (high?.dropV ?? 0);
+
+/** What is left for RB with the output on. */
+function acrossBaseV({ topology, supplyV, drive }: Surroundings): number {
+  if (needsOf(topology).polarity === 'pnp') return supplyV.min - VBE_V - drive.low.levelV;
+  return highV(drive) - VBE_V * (topology === 'low-side-darlington' ? 2 : 1);
+}
+
+/** The most the load takes, roughly. */
+function startingLoadA({ load, supplyV }: Surroundings): number {
+  switch (load.kind) {
+    case 'coil':
+    case 'resistor':
+      return supplyV.max / load.resistanceOhm;
+    case 'led-string':
+      return Math.max(0.1, supplyV.max - load.count * load.forwardV.min) / load.resistanceOhm;
+    case 'lamp':
+      return load.currentA;
+    case 'logic-input':
+      return supplyV.max / load.pullUpOhm + load.count * load.lowCurrentA;
+  }
+}
+
+/** The E24 value next below, at least 10 Ω. */
+const below = (ohm: number) => preferredValues('E24', 10, Math.max(10, ohm)).at(-1) ?? 10;
 
 /**
  * A stage to start from: 24 V (a level translator: 5 V), a small load and a 3.3 V output, usual values of the trade that
@@ -147,14 +184,17 @@ export function startingStage(asked: NewStageWords, policy: Policy = GENERAL_PRA
   const supplyV =
     topology === 'level-translator' ? { min: 4.75, max: 5.25 } : { min: 21.6, max: 26.4 };
   const load = startingLoad(loadKind, supplyV);
+  const drive = startingDrive(topology);
+  const around = { topology, supplyV, load, drive };
+  const network = startingNetwork(around);
+  const { valueOhm } = network.baseResistor;
+  const two = topology === 'two-transistor-high-side' && valueOhm !== null;
   return StageInput.parse({
     format: STAGE_FORMAT,
-    ...{ reference, title, topology, supplyV, load, policy },
+    ...{ reference, title, ...around, ...network, policy },
     ambientDegC: { min: 0, max: 50 },
-    drive: startingDrive(topology),
-    ...startingNetwork(topology),
     clamp: clampFor(load, NO_CLAMP),
     transistor: startingTransistor(topology),
-    preDriver: topology === 'two-transistor-high-side' ? startingPreDriver() : null,
+    preDriver: two ? startingPreDriver(around, valueOhm) : null,
   });
 }

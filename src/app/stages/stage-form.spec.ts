@@ -127,12 +127,9 @@ describe('another topology or load', () => {
     expect(StageInput.parse(definition)).toEqual(definition);
     expect(definition.topology).toBe(topology);
     expect(transistorSuits(definition.transistor, needsOf(topology))).toBe(true);
-    const { findings, verdict } = evaluateStage({
-      ...definition,
-      baseResistor: { ...definition.baseResistor, valueOhm: 1000 },
-    });
-    expect(findings.map(({ id }) => id)).not.toContain('not-judged');
-    expect(verdict).not.toBe('pass');
+    const { criteria, corners } = evaluateStage(definition);
+    expect(corners).toBeGreaterThan(0);
+    expect(criteria.length).toBeGreaterThan(10);
     expect(definition.supplyV).toEqual(relay.supplyV);
   });
 
@@ -159,6 +156,19 @@ describe('another topology or load', () => {
     const darlington = withTopology(draftOfRelay, 'low-side-darlington');
     expect(darlington.definition.transistor).toMatchObject({ darlington: true });
     expect(darlington.parts.transistor).toBeNull();
+  });
+
+  it.each([
+    ['low-side-npn', 820],
+    ['high-side-pnp', 11_000],
+    ['low-side-darlington', 430],
+  ] as const)('starts RB of %s at forced β 10', (topology, valueOhm) => {
+    expect(startingStage({ ...asked, topology }).baseResistor.valueOhm).toBe(valueOhm);
+  });
+
+  it('starts RB1 from what RB behind it draws', () => {
+    const { preDriver } = startingStage({ ...asked, topology: 'two-transistor-high-side' });
+    expect(preDriver?.baseResistor.valueOhm).toBe(6200);
   });
 
   it('has no resistor outside a pre-biased part', () => {
