@@ -27,15 +27,30 @@ export function sampledStage(input: StageInput, criteria: readonly Criterion[]):
 class OneSampledTransistor implements SampledStage {
   readonly point: OperatingPoint;
   private readonly transistor: SampledTransistor;
+  private met = false;
+  /** Called from a list, each step is compiled by itself: together they are more than the compiler takes in one piece. */
+  private readonly steps: readonly ((draws: Draws, k: number) => void)[];
 
   constructor(input: StageInput, criteria: readonly Criterion[]) {
-    this.transistor = new SampledTransistor(input, criteria, '');
-    this.point = this.transistor.point;
+    const transistor = new SampledTransistor(input, criteria, '');
+    this.transistor = transistor;
+    this.point = transistor.point;
+    this.steps = [
+      (draws, k) => {
+        transistor.place(draws, k);
+      },
+      () => {
+        transistor.settle();
+      },
+      () => {
+        this.met = transistor.judge();
+      },
+    ];
   }
 
   judge(draws: Draws, k: number): boolean {
-    this.transistor.settleAt(draws, k);
-    return this.transistor.judge();
+    for (const step of this.steps) step(draws, k);
+    return this.met;
   }
 
   misses(): [string, number][] {

@@ -93,6 +93,12 @@ export class SampledTransistor {
 
   /** Puts the transistor into sample k of the drawn columns and settles its junction. */
   settleAt(draws: Draws, k: number): void {
+    this.place(draws, k);
+    this.settle();
+  }
+
+  /** Puts the transistor into sample k of the drawn columns; `settle` or `judge` then make use of it. */
+  place(draws: Draws, k: number): void {
     this.drawSurroundings(draws, k);
     // In front of another transistor, that one's base resistor is the load.
     const load = this.prefix === '' ? draws.load : draws.baseResistor;
@@ -107,7 +113,11 @@ export class SampledTransistor {
     }
     if (this.clamp !== null) setClampVoltages(this.clamp, stage);
     point.placeNominal(stage.baseResistor.valueOhm ?? Infinity);
-    point.settle(ends.ambientDegC + this.usualRiseK, NEAR_K, this.usualFeedback);
+  }
+
+  /** Finds the junction temperature of the sample it was put into. */
+  settle(): void {
+    this.point.settle(this.ends.ambientDegC + this.usualRiseK, NEAR_K, this.usualFeedback);
   }
 
   /** Judges the sample it stands at; tells whether it meets everything. */
