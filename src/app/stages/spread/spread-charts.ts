@@ -125,6 +125,8 @@ function marksOf(criterion: Criterion | undefined, unit: string): Mark[] {
 }
 
 const MOST_BARS = 8;
+/** A bar below this share of the longest would not be seen. */
+const LEAST_BAR = 0.003;
 
 /** What a figure answers to, strongest first; in per cent of the figure, temperatures in K. Null where unknown. */
 export function sensitivityChart(
@@ -142,8 +144,10 @@ export function sensitivityChart(
         ? []
         : [{ label: INPUT_WORDS[input], value: by / per }];
     })
-    .filter(({ value }) => Math.abs(value) >= (inKelvin ? 5e-4 : 5e-5))
     .sort((a, b) => Math.abs(b.value) - Math.abs(a.value))
+    .filter(
+      ({ value }, _, [longest]) => Math.abs(value) >= LEAST_BAR * Math.abs(longest?.value ?? 0),
+    )
     .slice(0, MOST_BARS);
   if (bars.length === 0) return null;
   const values = bars.map(({ value }) => value);
