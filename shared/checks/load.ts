@@ -44,9 +44,7 @@ export class LoadChecks {
     const { currentDerating } = this.model.input.policy;
     const limitA = load.maximumA === null ? NaN : load.maximumA * currentDerating;
     this.worst.note(LOAD_CURRENT, point.icA, limitA);
-    if (load.minimumA !== null) {
-      this.worst.note(LEAST_LOAD_CURRENT, point.icA, load.minimumA);
-    }
+    this.worst.note(LEAST_LOAD_CURRENT, point.icA, load.minimumA ?? NaN);
   }
 
   private visitLamp(load: LampLoad, point: OperatingPoint): void {

@@ -70,8 +70,8 @@ export class OnStateChecks {
     if (this.byBaseCurrent) {
       worst.note(OVERDRIVE, point.overdrive, policy.overdriveFactor);
       worst.note(FORCED_BETA, point.forcedBeta, this.forcedBetaLimit(point));
-      worst.note(BASE, point.ibA, this.baseLimitA);
     }
+    worst.note(BASE, point.ibA, this.baseLimitA);
     worst.note(SATURATION, point.vceV, this.model.input.saturationLimitV ?? NaN);
     worst.note(COLLECTOR, point.icA, this.collectorLimitA);
     if (this.model.input.load.kind !== 'lamp') {
@@ -84,11 +84,14 @@ export class OnStateChecks {
     if (this.model.input.load.kind === 'coil') this.visitCoil(point);
   }
 
+  /** A Darlington is held to the IC/IB of its rows: a policy's forced β is one for single transistors. */
   private forcedBetaLimit(point: OperatingPoint): number {
     const { policy } = this.model.input;
-    const { saturation } = this.model.part;
-    if (!policy.guaranteedOnly || saturation === null) return policy.forcedBeta;
-    return Math.min(policy.forcedBeta, saturation.testBeta[point.piece] ?? Infinity);
+    const { saturation, junctions } = this.model.part;
+    if (saturation === null) return policy.forcedBeta;
+    const testBeta = saturation.testBeta[point.piece] ?? Infinity;
+    if (junctions > 1) return testBeta;
+    return policy.guaranteedOnly ? Math.min(policy.forcedBeta, testBeta) : policy.forcedBeta;
   }
 
   private visitResistors(point: OperatingPoint): void {

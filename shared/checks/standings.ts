@@ -76,7 +76,9 @@ export function standOffState(model: StageModel, worst: WorstCases, baseOpen: bo
 function standReset({ part, input }: StageModel, worst: WorstCases, currentUnknown: boolean): void {
   const { reset } = input.drive;
   const pinUnknown = reset?.kind === 'pull-up' && reset.pullUpOhm === null;
-  if (worst.takesPart('reset-off') && (part.leakage === null || pinUnknown)) {
+  const baseOpen = !worst.takesPart('reset-off-current');
+  const leakUnknown = part.leakage === null && (part.junctions === 1 || baseOpen);
+  if (worst.takesPart('reset-off') && (leakUnknown || pinUnknown)) {
     worst.stand('reset-off', 'unknown');
   }
   if (worst.takesPart('reset-off-current') && (currentUnknown || pinUnknown)) {

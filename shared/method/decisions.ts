@@ -41,7 +41,7 @@ export const DECISIONS: readonly MethodDecision[] = [
   {
     id: 'equal-corners',
     title: 'Equal worst corners',
-    text: 'Corners whose margins differ by less than one part in a thousand million count as equal and the first in the stated order is reported. The junction temperature is solved to 0.1 µK, far finer than the 1 mK asked for, so that numerical noise decides nothing.',
+    text: 'Corners whose margins differ by less than one part in a thousand million count as equal and the first in the stated order is reported. A margin that only rounding keeps off the edge of its status lies on it: exactly 10 % is a pass. The junction temperature is solved to 0.1 µK, far finer than the 1 mK asked for, so that numerical noise decides nothing.',
   },
   {
     id: 'junction-balance',
@@ -202,6 +202,11 @@ export const DECISIONS: readonly MethodDecision[] = [
     id: 'reset-turns-on',
     title: 'A reset that turns the load on',
     text: 'The criteria of reset judge an NPN whose pin leaks or is pulled up. A PNP whose pin starts up low, and an NPN on an open output with a pull-up, are on until the controller has started: the finding on-in-reset says so.',
+  },
+  {
+    id: 'darlington-forced-beta',
+    title: 'Forced β of a Darlington',
+    text: 'It is held to the smaller IC/IB of the VCE(sat) rows in use, whatever the policy’s forced β: that is a figure for single transistors.',
   },
   {
     id: 'darlington-leakage',

@@ -17,9 +17,11 @@ export type CriterionLines = (source: CriterionSource) => SymbolId | null;
 function forcedBeta(source: CriterionSource): SymbolId {
   const { sheet, input, point, criterion } = source;
   const { policy } = input;
-  const { saturation } = point.model.part;
+  const { saturation, junctions } = point.model.part;
   cite(source, 'b_f');
-  if (!policy.guaranteedOnly || saturation === null) {
+  if (junctions > 1 && saturation !== null) {
+    givenLimit(source, saturation.testBeta[point.piece] ?? 0, 'VCE(sat) rows in use: IC/IB');
+  } else if (!policy.guaranteedOnly || saturation === null) {
     givenLimit(source, policy.forcedBeta, 'Policy, forced β');
   } else if (criterion.limit !== null) {
     sheet.apply('forced-beta-limit', {
@@ -206,10 +208,10 @@ function leastLoadCurrent(source: CriterionSource): SymbolId | null {
 }
 
 function baseCurrent(source: CriterionSource): SymbolId {
-  const { input } = source;
-  cite(source, 'I_B');
+  const { input, point } = source;
+  const figure = cite(source, point.model.inside?.byInput === true ? 'I_I' : 'I_B');
   deratedLimit(source, input.transistor.limits.ibA, input.policy.currentDerating, 'Part, IB');
-  return 'I_B';
+  return figure;
 }
 
 function junction(source: CriterionSource): SymbolId {

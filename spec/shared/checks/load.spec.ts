@@ -42,6 +42,12 @@ describe('LED string', () => {
     expect(least).toBeGreaterThan((21.6 - 3 * cold - 0.3) / 1050);
   });
 
+  it('states the least current where the LEDs ask for none', () => {
+    const found = judged({ load: { ...load, minimumA: null } }).criterion('load-current-low');
+    expect(found).toMatchObject({ limit: null, margin: null, status: 'stated' });
+    expect(found?.value).toBe(judged({ load }).criterion('load-current-low')?.value);
+  });
+
   it('fails where the string takes the whole supply', () => {
     const { evaluation, findings } = judged({ load: { ...load, count: 9 } });
     expect(evaluation.verdict).toBe('fail');
@@ -185,6 +191,28 @@ describe('low-side Darlington', () => {
     const gain = 1000 * (253.15 / 298.15) ** 4.8;
     expect(corner?.value).toBeCloseTo((gain * ib) / full, 9);
     expect(corner?.corner).toMatchObject({ ambient: 'min', drive: 'weak' });
+  });
+
+  it('is held to the IC/IB of its rows and not to a forced β meant for single transistors', () => {
+    // Rows at 3 A/12 mA and 5 A/20 mA: 250 either way.
+    for (const guaranteedOnly of [true, false]) {
+      const beta = darlington({
+        policy: { name: 'General practice', guaranteedOnly },
+      }).criterion('forced-beta');
+      const ib = (4.75 - (2.5 + 0.05 + 0.004 * 45)) / 1125 - (2.5 + 0.05 + 0.004 * 45) / 20_900;
+      expect(beta?.limit).toBeCloseTo(250, 9);
+      expect(beta?.value).toBeCloseTo(26.4 / (24 * 0.95) / ib, 6);
+    }
+  });
+
+  it('is held in reset by RBE against the pin alone where the sheet prints ICBO only', () => {
+    const reset = { kind: 'high-z' as const, leakageA: 1e-5 };
+    const found = darlington({
+      transistor: { ...transistor, leakage: transistor.leakage.slice(1) },
+      drive: { ...RELAY_FILE.drive, railV: { min: 4.75, max: 5.25 }, reset },
+    });
+    expect(found.criterion('reset-off')?.value).toBeCloseTo(1e-5 * 23_100, 12);
+    expect(found.criterion('reset-off-current')?.status).toBe('open');
   });
 
   it('is held off by the plain divider and to twice the base voltage', () => {

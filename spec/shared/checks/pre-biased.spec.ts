@@ -53,6 +53,13 @@ describe('pre-biased part with a printed VI(on)', () => {
     expect(criterion('input-on')?.relation).toBe('>=');
   });
 
+  it('states its input current as base current, for which such sheets print no limit', () => {
+    // Strong output 3.6 V behind 9.5 Ω and the smallest R1, 4700 · 0.7.
+    const { criterion } = judged();
+    expect(criterion('base-current')).toMatchObject({ limit: null, status: 'stated' });
+    expect(criterion('base-current')?.value).toBeCloseTo((3.6 - 0.55) / (9.5 + 3290), 9);
+  });
+
   it('does without a resistor before it, and then judges none', () => {
     const bare = judged({ baseResistor: { valueOhm: 0, tolerance: 0 } });
     const small = judged();
