@@ -47,6 +47,15 @@ export function meets(sign: number, value: number, limit: number): boolean {
   return sign > 0 ? value <= limit && limit > 0 : value >= limit;
 }
 
+/** A margin this near to a bound differs from it by rounding alone. */
+const ROUNDING = 1e-12;
+
+/** A margin as it is reported: on the bounds of its status where only rounding keeps it off them. */
+export function roundedMargin(margin: number, band: number): number {
+  const bound = [band, 0].find((each) => Math.abs(margin - each) < ROUNDING);
+  return bound ?? margin;
+}
+
 /** Status of a margin: at least the policy's band is a pass, met at all is marginal. */
 export function statusOf(
   margin: number,

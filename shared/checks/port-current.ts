@@ -1,6 +1,6 @@
 import { CRITERIA } from './criteria.ts';
 import type { Criterion, Evaluation } from './evaluation.ts';
-import { leastLimit, marginOf, statusOf } from './margin.ts';
+import { leastLimit, marginOf, roundedMargin, statusOf } from './margin.ts';
 
 /** What the stages of one kind ask of the port of the controller that drives them. */
 export interface PortLoad {
@@ -58,7 +58,9 @@ function judged(on: readonly PortLoad[], marginalBand: number): Criterion {
     0,
   );
   const known = value !== null && limit !== null;
-  const margin = known ? marginOf(1, value, limit, leastLimit(unit)) : null;
+  const margin = known
+    ? roundedMargin(marginOf(1, value, limit, leastLimit(unit)), marginalBand)
+    : null;
   const unjudged = limit === null ? 'stated' : 'open';
   const status = margin === null ? unjudged : statusOf(margin, marginalBand);
   return { id: 'port-current', value, limit, relation, unit, margin, status, corner: null };

@@ -8,7 +8,7 @@ import {
 } from './criteria.ts';
 import type { Criterion, Unit } from './evaluation.ts';
 import { FigureBoard, UNSET } from './figure-board.ts';
-import { evenMargin, leastLimit, marginOf, statusOf } from './margin.ts';
+import { evenMargin, leastLimit, marginOf, roundedMargin, statusOf } from './margin.ts';
 
 /** Corners whose margins differ by less than this count as equally bad; the first is reported. */
 const SAME = 1e-9;
@@ -126,7 +126,7 @@ export class WorstCases extends FigureBoard {
     const corner = this.corner[k] ?? NO_CORNER;
     const known = standing !== 'unknown';
     const judged = known && standing !== 'stated' && !Number.isNaN(limit);
-    const margin = this.keys[k] ?? NaN;
+    const margin = roundedMargin(this.keys[k] ?? NaN, band);
     return {
       id,
       value: known ? finite(value) : null,

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import {
   evenMargin,
   marginOf,
+  roundedMargin,
   statusOf,
   verdictOf,
   worseOf,
@@ -33,6 +34,21 @@ describe('statusOf', () => {
     [-Infinity, 'fail'],
   ])('of a margin of %d is %s', (margin, status) => {
     expect(statusOf(margin, 0.1)).toBe(status);
+  });
+});
+
+describe('roundedMargin', () => {
+  it('puts a margin on the bound that only rounding keeps it off: 28.8 V of 0.8 · 40 V are 10 %', () => {
+    const margin = marginOf(1, 28.8, 0.8 * 40, 0.05);
+    expect(margin).toBeLessThan(0.1);
+    expect(roundedMargin(margin, 0.1)).toBe(0.1);
+    expect(roundedMargin(marginOf(1, 0.1 + 0.2, 0.3, 0), 0.1)).toBe(0);
+  });
+
+  it('leaves any other margin as it is', () => {
+    for (const margin of [0.0999999, 0.1000001, -1e-9, -1, -Infinity]) {
+      expect(roundedMargin(margin, 0.1)).toBe(margin);
+    }
   });
 });
 
