@@ -82,8 +82,14 @@ export class TwoTransistorJudge {
       outputStage(this.input, this.pre.largestOffA),
       lowLevels(this.input, dropV.most, this.pre.point.vceV),
     );
+    const leakKnown = preCriteria.some(
+      ({ id, value }) => id === 'off-collector-current' && value !== null,
+    );
     return [
-      ...this.output.criteria(rbOhm).filter(({ id }) => !NOT_OF_OUTPUT.includes(id)),
+      ...this.output
+        .criteria(rbOhm)
+        .filter(({ id }) => !NOT_OF_OUTPUT.includes(id))
+        .map((criterion) => (leakKnown ? criterion : heldOffByUnknown(criterion))),
       ...preCriteria.map((criterion) => ({ ...criterion, id: PRE + criterion.id })),
     ];
   }
@@ -120,6 +126,15 @@ export class TwoTransistorJudge {
     point.settle(point.condition.ambientDegC);
     return point.vbeV;
   }
+}
+
+/** Off-state figures of the output transistor that count the current of the transistor in front. */
+const BEHIND_LEAKAGE = ['off-base-voltage', 'off-collector-current'];
+
+/** Such a figure without that current is a part of the truth: it may fail, but never pass. */
+function heldOffByUnknown(criterion: Criterion): Criterion {
+  const counts = BEHIND_LEAKAGE.includes(criterion.id) && criterion.status !== 'fail';
+  return counts ? { ...criterion, status: 'open' } : criterion;
 }
 
 /**

@@ -50,6 +50,19 @@ describe('two-transistor high side', () => {
     expect(figures.overdriveFactor).toBeCloseTo(worst?.value ?? NaN, 12);
   });
 
+  it('is open in the off state where the NPN prints no leakage', () => {
+    const preDriver = {
+      transistor: { ...TYPE_2N3904, leakage: [] },
+      baseResistor: { valueOhm: 4700, tolerance: 0.05, ratingW: 0.1 },
+      shuntResistor: { valueOhm: 22000, tolerance: 0.05, ratingW: 0.1 },
+    };
+    const found = evaluateStage(twoTransistors({ preDriver })).criteria;
+    const status = (id: string) => found.find((each) => each.id === id)?.status;
+    expect(criterion('off-base-voltage')?.status).toBe('pass');
+    expect(status('off-base-voltage')).toBe('open');
+    expect(status('off-collector-current')).toBe('open');
+  });
+
   it('judges the pin at the NPN and nowhere else', () => {
     expect(criterion('drive-current')).toBeUndefined();
     expect(criterion('pull-up-dissipation')).toBeUndefined();
