@@ -50,14 +50,22 @@ const ASK_FOR_DRIVE = ['overdrive-factor', 'forced-beta', 'input-on'];
 class Line {
   private readonly judge: Judge;
   private readonly values: readonly number[];
+  private readonly judged = new Map<number, readonly Criterion[]>();
   private readonly first: readonly Criterion[];
   private readonly last: readonly Criterion[];
 
   constructor(judge: Judge, values: readonly number[]) {
     this.judge = judge;
     this.values = values;
-    this.first = judge.criteria(values[0] ?? NaN);
-    this.last = judge.criteria(values[values.length - 1] ?? NaN);
+    this.first = this.at(0);
+    this.last = this.at(values.length - 1);
+  }
+
+  /** All criteria at a value, judged once. */
+  private at(index: number): readonly Criterion[] {
+    const known = this.judged.get(index) ?? this.judge.criteria(this.values[index] ?? NaN);
+    this.judged.set(index, known);
+    return known;
   }
 
   /** Which way a criterion asks RB to go; null where it is met at both ends. */
@@ -78,7 +86,7 @@ class Line {
     let outside = small ? this.values.length - 1 : 0;
     while (Math.abs(inside - outside) > 1) {
       const middle = (inside + outside) >> 1;
-      if (nearnessIn(this.judge.criteria(this.values[middle] ?? NaN), id) >= 0) inside = middle;
+      if (nearnessIn(this.at(middle), id) >= 0) inside = middle;
       else outside = middle;
     }
     return this.values[inside] ?? null;

@@ -1,7 +1,9 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { judgeStage } from '../../../shared/sizing/judge-stage.ts';
+import { judgePart } from '../../../shared/sizing/rank-parts.ts';
 import { stageResult } from '../../../shared/sizing/result.ts';
+import { sizeShunt } from '../../../shared/sizing/size-shunt.ts';
 import { StageInput } from '../../../shared/stage/stage-input.ts';
 import { leaves, replaced } from '../../document-places.ts';
 import { repeats, seed } from '../../long-run.ts';
@@ -141,8 +143,15 @@ describe(`${STAGES} hostile stage files, seed ${SEED}`, () => {
         }
         judged++;
         const started = performance.now();
-        const result = stageResult(judgeStage(parsed.data));
+        const judgedStage = judgeStage(parsed.data);
+        const result = stageResult(judgedStage);
         expect(performance.now() - started).toBeLessThan(20_000);
+        expect(judgedStage.sizing.conflict?.ways.join(' ') ?? '').not.toMatch(/NaN|undefined|null/);
+        // Sizing RBE and judging a part cost several runs: one stage in eight has to do.
+        if (judged % 8 === 0) {
+          expect(unsound(sizeShunt(judgedStage.input))).toEqual([]);
+          expect(unsound(judgePart(parsed.data, parsed.data.transistor))).toEqual([]);
+        }
         expect(unsound(result)).toEqual([]);
         expect(JSON.parse(JSON.stringify(result))).toEqual(result);
       }),
