@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, inject, output, signal } from '@angular/core';
-import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
+import { type FormGroupDirective, NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { MatCheckbox } from '@angular/material/checkbox';
 import { MatFormFieldModule } from '@angular/material/form-field';
@@ -39,14 +39,18 @@ export class InvitePerson {
     administrator: [false],
   });
   protected readonly problem = signal<string | null>(null);
+  /** Whom the last mail went to. */
+  protected readonly done = signal<string | null>(null);
   protected readonly error = fieldError;
 
-  protected async invite(): Promise<void> {
+  protected async invite(entry: FormGroupDirective): Promise<void> {
+    this.done.set(null);
     this.form.markAllAsTouched();
     if (this.form.invalid) return;
     try {
       const { value } = await this.api.send(invitePerson, { body: this.form.getRawValue() });
-      this.form.reset();
+      entry.resetForm();
+      this.done.set(`The mail to ${value.email} is on its way.`);
       this.problem.set(null);
       this.invited.emit(value);
     } catch (error) {
