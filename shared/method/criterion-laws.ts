@@ -88,6 +88,7 @@ export const CRITERION_LAWS_OF: Readonly<Record<string, readonly LawId[]>> = {
   'input-voltage': ['input-voltage'],
   'load-overvoltage': ['coil-voltage', 'overvoltage-limit'],
   'holding-voltage': [],
+  'port-current': ['derated'],
   'rb-dissipation': ['rb-power', ...RESISTOR],
   'rbe-dissipation': ['rbe-power', ...RESISTOR],
   'pull-up-dissipation': ['pull-up-power', ...RESISTOR],
