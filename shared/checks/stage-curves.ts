@@ -17,7 +17,12 @@ import {
   type Device,
 } from '../physics/device-model.ts';
 import type { OperatingPoint } from '../stage/operating-point.ts';
-import { deviceOfPart, sheetSaturation, type SheetSaturation } from '../stage/part-curves.ts';
+import {
+  deviceOfPart,
+  SATURATION_STEPS,
+  sheetSaturation,
+  type SheetSaturation,
+} from '../stage/part-curves.ts';
 import type { StageInput } from '../stage/stage-input.ts';
 import { pointAt } from './corner-figures.ts';
 import type { Corner } from './evaluation.ts';
@@ -183,7 +188,6 @@ export interface SaturationAtCorner extends SheetSaturation {
   readonly expected: readonly Sample[];
 }
 
-const CURRENT_STEPS = 40;
 /** Rows far above the load current would press the stage's own part of the line into a corner. */
 const LARGEST_SPAN = 5;
 const AHEAD = 1.25;
@@ -201,7 +205,7 @@ export function saturationAtCorner(at: CurvesAtCorner): SaturationAtCorner | nul
   const condition = { tjDegC: limit.tjDegC, rceTempcoPerK, forcedBeta, gain };
   // A part judged by its input voltage takes its VO(on) rows as they stand.
   const judged = at.byInput ? { ...condition, forcedBeta: 0 } : condition;
-  const currents = currentSteps([0, toA], near, CURRENT_STEPS, 'equal');
+  const currents = currentSteps([0, toA], near, SATURATION_STEPS, 'equal');
   const corner = currents.map((icA): Sample => [icA, limitSaturationV(line, icA, judged)]);
   const sheetAt = { ...judged, tjDegC: SHEET_DEG_C, forcedBeta: 0 };
   return {

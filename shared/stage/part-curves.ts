@@ -38,7 +38,8 @@ export interface SheetSaturation {
   readonly testBeta: number;
 }
 
-const STEPS = 30;
+/** Even steps of every VCE(sat) curve, so that curves of one chart stand at the same currents. */
+export const SATURATION_STEPS = 40;
 
 export function sheetSaturation(
   line: SaturationLine,
@@ -48,7 +49,7 @@ export function sheetSaturation(
 ): SheetSaturation {
   const rowA = [...line.rowA];
   const sheetAt = { tjDegC: SHEET_DEG_C, rceTempcoPerK, forcedBeta: 0, gain: Infinity };
-  const samples = currentSteps([0, toA], rowA, STEPS, 'equal').map((icA): Sample => [
+  const samples = currentSteps([0, toA], rowA, SATURATION_STEPS, 'equal').map((icA): Sample => [
     icA,
     limitSaturationV(line, icA, sheetAt),
   ]);

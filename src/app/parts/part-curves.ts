@@ -7,6 +7,7 @@ import { SHEET_DEG_C } from '../../../shared/physics/constants.ts';
 import {
   deviceOfPart,
   gainOverCurrent,
+  SATURATION_STEPS,
   sheetSaturation,
 } from '../../../shared/stage/part-curves.ts';
 import { partModel, type PartModel } from '../../../shared/stage/part-model.ts';
@@ -26,7 +27,6 @@ const BELOW = 1e-3;
 const USUAL_IC_MAX_A = 0.1;
 /** How far above its last row a VCE(sat) line is drawn. */
 const AHEAD = 1.2;
-const STEPS = 30;
 
 const ORIGIN_WORDS: Readonly<Record<FigureOrigin, string>> = {
   part: 'model figure of the part',
@@ -152,7 +152,7 @@ function saturationOf(model: PartModel, data: TransistorData): PlotModel | null 
   const sheet = sheetSaturation(line, data, rceTempcoPerK, toA);
   const device = deviceOfPart(model, data);
   const at = { tjDegC: SHEET_DEG_C, rceTempcoPerK, forcedBeta: sheet.testBeta };
-  const expected = currentSteps([0, toA], [], STEPS, 'equal')
+  const expected = currentSteps([0, toA], [], SATURATION_STEPS, 'equal')
     .slice(1)
     .map((icA) => [icA, expectedSaturationV(device, icA, at)] as const);
   return saturationChart(sheet, {
