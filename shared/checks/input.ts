@@ -28,9 +28,8 @@ export class InputChecks {
   }
 
   visit(point: OperatingPoint): void {
-    if (!this.inside.byInput) return;
-    this.worst.note(ON, point.vbeV, this.onV(point));
-    this.worst.note(MAXIMUM, point.vbeV, this.inside.input?.maximumV ?? NaN);
+    if (this.inside.byInput) this.worst.note(ON, point.inputV, this.onV(point));
+    this.worst.note(MAXIMUM, point.inputV, this.inside.input?.maximumV ?? NaN);
   }
 
   visitOff(): void {

@@ -85,7 +85,7 @@ export const CRITERION_LAWS_OF: Readonly<Record<string, readonly LawId[]>> = {
   'output-low': ['low-level'],
   'rise-time': ['rise-constant', 'rise-time'],
   'rc-dissipation': ['rc-power', ...RESISTOR],
-  'input-voltage': ['input-voltage'],
+  'input-voltage': ['input-voltage', 'input-before-base'],
   'load-overvoltage': ['coil-voltage', 'overvoltage-limit'],
   'holding-voltage': [],
   'port-current': ['derated'],
@@ -231,6 +231,7 @@ export const SHARED_LAWS: readonly { readonly name: string; readonly laws: reado
     laws: [
       'dissipation',
       'dissipation-switched',
+      'input-before-base',
       'dissipation-input',
       'dissipation-input-switched',
       'rise-in-circuit',

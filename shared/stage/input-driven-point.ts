@@ -17,6 +17,10 @@ export class InputDrivenPoint extends OperatingPoint {
       input?.currentA == null || input.testV === null ? 0 : input.currentA / input.testV;
   }
 
+  override get inputV(): number {
+    return this.vbeV;
+  }
+
   override solve(tjDegC: number): boolean {
     const { fullA } = this.condition;
     this.tjDegC = tjDegC;

@@ -198,8 +198,15 @@ export class OperatingPoint {
     return this.saturated;
   }
 
+  /** Voltage at the input of a pre-biased part, before its R1; of any other part that at its base. V. */
+  get inputV(): number {
+    return this.vbeV + this.driveA * (this.rbOhm - this.outerRbOhm);
+  }
+
   protected sumPower(): void {
-    const conductionW = this.vceV * this.icA + this.vbeV * this.ibA;
+    const { inside } = this.model;
+    const inputW = inside === null ? this.vbeV * this.ibA : this.inputV * this.driveA;
+    const conductionW = this.vceV * this.icA + inputW;
     this.powerW = this.model.conductionShare * conductionW;
     if (this.switches) this.powerW += switchingLossW(this);
   }

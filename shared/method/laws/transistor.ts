@@ -230,6 +230,12 @@ export const TRANSISTOR_LAWS = {
     validity: 'The duty counts from 100 Hz on.',
     source: 'Power of the two terminals; the 100 Hz bound is judgement',
   }),
+  'input-before-base': law({
+    result: 'V_I',
+    formula: 'V_BE + I_R * R_1',
+    name: 'Input voltage of a pre-biased part judged by its gain',
+    source: 'Kirchhoff’s voltage law',
+  }),
   'dissipation-input': law({
     result: 'P',
     formula: 's * (V_CE * I_C + V_I * I_I)',

@@ -19,7 +19,7 @@ export function operatingLines(sheet: Worksheet, source: CornerSource): void {
   if (byInput) inputLines(sheet, source);
   else baseLines(sheet, source);
   saturationLines(sheet, source);
-  powerLines(sheet, source, byInput);
+  powerLines(sheet, source);
 }
 
 function resistorLines(sheet: Worksheet, source: CornerSource): void {

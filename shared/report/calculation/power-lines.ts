@@ -8,13 +8,19 @@ import type { Worksheet } from './worksheet.ts';
 const BALANCED_K = 1e-7;
 
 /** Dissipation with its switching loss, and the balance of the junction. */
-export function powerLines(sheet: Worksheet, source: CornerSource, byInput: boolean): void {
+export function powerLines(sheet: Worksheet, source: CornerSource): void {
   const { point } = source;
+  const { inside } = point.model;
   const lossW = switchingLossW(point);
+  const byBase = inside !== null && !inside.byInput;
+  if (byBase) sheet.apply('input-before-base', { stated: point.inputV });
   sheet.give('s', point.model.conductionShare, 'Duty where it counts, else 1');
   if (lossW > 0) lossLines(sheet, source, lossW);
-  const law = byInput ? ('dissipation-input' as const) : ('dissipation' as const);
-  sheet.apply(lossW > 0 ? `${law}-switched` : law, { stated: point.powerW });
+  const law = inside === null ? ('dissipation' as const) : ('dissipation-input' as const);
+  sheet.apply(lossW > 0 ? `${law}-switched` : law, {
+    stated: point.powerW,
+    put: byBase ? { I_I: 'I_R' } : {},
+  });
   thermalLine(sheet, source);
   const { rthJaKPerW } = point.model.part;
   const settled = atEnd(source, 'instant', 'settled');

@@ -150,6 +150,35 @@ describe('pre-biased part with gain figures only', () => {
     expect(found?.value).toBeCloseTo((inside * (0.01 / full) * ib) / full, 4);
   });
 
+  it('turns V_I·I_I into heat, R1 and R2 included, and holds V_I to its maximum', () => {
+    const maximumV = 20;
+    const found = judged(
+      { ambientDegC: { min: 25, max: 25 } },
+      {
+        ...part,
+        // No warming to speak of.
+        limits: { ...part.limits, powerW: 1e9 },
+        thermal: { rthJaKPerW: 1e-9 },
+        internal: { ...internal, input: { maximumV } },
+      },
+    );
+    // Strong output, RB − 5 %: the smallest VBE, 0.6 V held above its row, lets most current in.
+    const inA = (3.6 - 0.6) / (9.5 + 4700);
+    expect(found.criterion('drive-current')?.value).toBeCloseTo(inA, 9);
+    // Largest input voltage with the largest VBE.
+    const full = 12.6 / 950;
+    const vbe = 0.8 + 0.0256926 * Math.log(full / 0.01);
+    const lessA = (3.6 - vbe) / (10.5 + 4700);
+    const input = found.criterion('input-voltage');
+    expect(input?.limit).toBe(maximumV);
+    expect(input?.value).toBeGreaterThan(0.6 + inA * 4700);
+    expect(input?.value).toBeCloseTo(vbe + ((3.6 - vbe) / (9.5 + 4700)) * 4700, 4);
+    // VCE(sat) ≤ 0.12 V at the most, and V_I·I_I.
+    const powerW = found.criterion('dissipation')?.value ?? NaN;
+    expect(powerW).toBeGreaterThan((vbe + lessA * 4700) * lessA);
+    expect(powerW).toBeLessThan(0.15 * full + 3.6 * inA);
+  });
+
   it('is open without VBE rows', () => {
     const bare = { ...part, baseEmitter: [] };
     expect(judged({}, bare).criterion('overdrive-factor')?.status).toBe('open');
