@@ -75,7 +75,7 @@ const ENTRIES: readonly Entry[] = [
     drawn: /Low-side Darlington switch Q53, MPSA14/,
     // The sheet of this part prints no leakage of the pair through its collector.
     verdict: 'Open',
-    judged: ['Forced β', '≤\u00a020'],
+    judged: ['Forced β', '≤\u00a01000'],
     enter: async (sheet) => {
       await pick(sheet, 'Transistor', 'MPSA14');
       await sheet.enter('Supply & ambient', {

@@ -1,7 +1,6 @@
 import type { Evaluation } from '../../shared/checks/evaluation.ts';
 import type { PartRecord } from '../../shared/parts/part-record.ts';
 import { deriveTransistor } from '../../shared/parts/derive-transistor.ts';
-import { StageInput } from '../../shared/stage/stage-input.ts';
 import { CheckService } from '../checks/check-service.ts';
 import { FindingService } from '../checks/finding-service.ts';
 import { PartService } from '../parts/part-service.ts';
@@ -13,7 +12,7 @@ import { StageService } from '../stages/stage-service.ts';
 import { DEMO_PEOPLE } from './demo-accounts.ts';
 import type { DemoCrew } from './demo-crew.ts';
 import type { When } from './demo-schedule.ts';
-import type { DemoStage } from './demo-stages.ts';
+import { demoDefinition, type DemoStage } from './demo-stages.ts';
 
 const LOOPBACK = '127.0.0.1';
 
@@ -42,14 +41,15 @@ export class DemoDesk {
   /** A stage filled from the library. */
   async draft(projectId: string, stage: DemoStage, [day, clock]: When): Promise<RevisionAnswer> {
     const transistor = await this.#transistor(stage.transistor);
-    const { designator = null, transistor: frontNumber, ...network } = stage.preDriver ?? {};
-    const front = frontNumber === undefined ? null : await this.#transistor(frontNumber);
-    const preDriver = front && { ...network, transistor: front.data };
+    const { preDriver } = stage;
+    const front = preDriver === undefined ? null : await this.#transistor(preDriver.transistor);
     const load = stage.load === undefined ? null : await this.#latest(stage.load);
     const link = (id: string) => ({ partRevisionId: id, choice: {} });
     const made = await this.#stages.create(this.crew.act('designer', day, clock), projectId, {
-      definition: StageInput.parse({ ...stage.file, preDriver, transistor: transistor.data }),
-      designators: { preDriver: designator },
+      definition: demoDefinition(stage, (number) =>
+        number === preDriver?.transistor && front !== null ? front.data : transistor.data,
+      ),
+      designators: { preDriver: preDriver?.designator ?? null },
       parts: {
         transistor: link(transistor.id),
         preDriver: front && link(front.id),

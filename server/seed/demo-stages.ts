@@ -1,4 +1,5 @@
-import type { StageFile } from '../../shared/stage/stage-input.ts';
+import { type StageFile, StageInput } from '../../shared/stage/stage-input.ts';
+import type { TransistorData } from '../../shared/stage/transistor-data.ts';
 
 /**
  * Stages of the demo: an invented maker of cold-room and irrigation controllers. Relay, coil and output
@@ -18,6 +19,22 @@ export interface DemoStage {
 interface Front extends Omit<NonNullable<StageFile['preDriver']>, 'transistor'> {
   readonly designator: string;
   readonly transistor: string;
+}
+
+/** The whole definition, its transistors taken from the library by number. */
+export function demoDefinition(
+  { transistor, preDriver, file }: DemoStage,
+  dataOf: (partNumber: string) => TransistorData,
+): StageInput {
+  const { baseResistor, shuntResistor } = preDriver ?? {};
+  return StageInput.parse({
+    ...file,
+    transistor: dataOf(transistor),
+    preDriver: preDriver && {
+      ...{ baseResistor, shuntResistor },
+      transistor: dataOf(preDriver.transistor),
+    },
+  });
 }
 
 /** Part number of the invented relay that is revised after a lock. */

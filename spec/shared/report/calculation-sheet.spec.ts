@@ -1,7 +1,12 @@
 import fc from 'fast-check';
 import { all, create } from 'mathjs';
 import { describe, expect, it } from 'vitest';
-import { COLD_ROOM, IRRIGATION } from '../../../server/seed/demo-stages.ts';
+import {
+  COLD_ROOM,
+  demoDefinition,
+  type DemoStage,
+  IRRIGATION,
+} from '../../../server/seed/demo-stages.ts';
 import { criterionIds, ownCriterionIds, PRE } from '../../../shared/checks/criteria.ts';
 import { evaluateStage } from '../../../shared/checks/evaluate-stage.ts';
 import { CRITERION_LAWS_OF, SHARED_LAWS } from '../../../shared/method/criterion-laws.ts';
@@ -99,11 +104,14 @@ describe('calculation sheet', { timeout: 300_000 }, () => {
     expect(faultsOf(highSideStage())).toEqual([]);
   });
 
-  it.each(Object.values({ ...COLD_ROOM, ...IRRIGATION }))(
+  it.each<DemoStage>([...Object.values(COLD_ROOM), ...Object.values(IRRIGATION)])(
     'works the shipped demo stage $file.reference $file.title',
-    ({ transistor, file }) => {
-      const part = deriveTransistor(find(transistors, transistor));
-      const input = StageInput.parse({ ...file, transistor: part.ok ? part.data : null });
+    (stage) => {
+      const input = demoDefinition(stage, (partNumber) => {
+        const part = deriveTransistor(find(transistors, partNumber));
+        if (!part.ok) throw new Error(part.reason);
+        return part.data;
+      });
       const { baseResistorOhm } = judgeStage(input).evaluation;
       const judged = {
         ...input,
