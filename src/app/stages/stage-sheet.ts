@@ -33,7 +33,6 @@ import { SheetActs } from './sheet-acts.ts';
 import { SheetForm } from './sheet-form.ts';
 import { sheetLayout } from './sheet-layout.ts';
 import { SheetNotes } from './sheet-notes.ts';
-import { SpreadPanel } from './spread/spread-panel.ts';
 import { StageStore } from './stage-store.ts';
 import { submitNote } from './submit-note.ts';
 import type { KeepsWork } from './unsaved-guard.ts';
@@ -64,7 +63,6 @@ const TABS: readonly (readonly [Tab, string])[] = [
     RouterLink,
     SaveStatus,
     SheetNotes,
-    SpreadPanel,
     StateChip,
     StripCell,
     SymbolText,

@@ -13,6 +13,7 @@ import type { StageInput } from '../../../../shared/stage/stage-input.ts';
 import { Chart } from '../../charts/chart.ts';
 import { SymbolText } from '../../ui/symbol-text.ts';
 import { TabStrip, type Tab } from '../../ui/tab-strip.ts';
+import { SpreadPanel } from '../spread/spread-panel.ts';
 import { hasFigures, judgedStage, shownCorner } from '../shown-corner.ts';
 import { afterPaint } from './after-paint.ts';
 import { marginChart, marginCount } from './margin-chart.ts';
@@ -24,6 +25,7 @@ const TABS: readonly Tab[] = [
   { key: 'saturation', text: 'VCE(sat)' },
   { key: 'gain', text: 'Gain' },
   { key: 'temperature', text: 'Temperature' },
+  { key: 'spread', text: 'Spread' },
 ];
 
 /** Margins over temperature are followed for so many criteria, those with the least. */
@@ -37,12 +39,20 @@ interface Drawn {
 }
 
 /**
- * The curves of a stage at the corner on show. They follow the verdicts: a change is drawn once the frame with its verdicts
+ * The curves of a stage at the corner on show, and the spread of its samples. They follow the verdicts: a change is drawn once the frame with its verdicts
  * is on the screen, and of several changes in between only the last.
  */
 @Component({
   selector: 'app-curves-panel',
-  imports: [Chart, MatButtonToggle, MatButtonToggleGroup, NgTemplateOutlet, SymbolText, TabStrip],
+  imports: [
+    Chart,
+    MatButtonToggle,
+    MatButtonToggleGroup,
+    NgTemplateOutlet,
+    SpreadPanel,
+    SymbolText,
+    TabStrip,
+  ],
   templateUrl: './curves-panel.html',
   styleUrl: './curves-panel.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
