@@ -251,6 +251,8 @@ export class OperatingPoint {
       this.runaway = this.powerW > 0;
       return;
     }
+    this.solve(ambient);
+    if (this.powerW <= 0) return;
     let low = ambient;
     for (let step = 1; step <= SCAN_STEPS; step++) {
       const t = ambient + ((RUNAWAY_DEG_C - ambient) * step) / SCAN_STEPS;

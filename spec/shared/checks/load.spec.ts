@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { figuresAtCorner } from '../../../shared/checks/corner-figures.ts';
 import { evaluateStage } from '../../../shared/checks/evaluate-stage.ts';
 import { sizeStage } from '../../../shared/sizing/size-stage.ts';
 import { highSideStage, RELAY_FILE, relayStage, TYPE_2N3904 } from '../relay-stage.ts';
@@ -203,6 +204,37 @@ describe('low-side Darlington', () => {
       expect(beta?.limit).toBeCloseTo(250, 9);
       expect(beta?.value).toBeCloseTo(26.4 / (24 * 0.95) / ib, 6);
     }
+  });
+
+  it('stays cold where its drive cannot turn it on cold, though it could once hot', () => {
+    // 1.89 V at the most, against VBE = 2 + 0.05 − 0.004 · (60 − 25) = 1.91 V.
+    const stage = relayStage({
+      topology: 'low-side-darlington',
+      supplyV: { min: 48, max: 48 },
+      drive: { ...RELAY_FILE.drive, railV: { min: 1.71, max: 1.89 } },
+      load: { kind: 'resistor', resistanceOhm: 3500, tolerance: 0 },
+      baseResistor: { valueOhm: 6000, tolerance: 0 },
+      shuntResistor: null,
+      clamp: null,
+      transistor: {
+        partNumber: 'MPSA13',
+        polarity: 'npn',
+        darlington: true,
+        limits: { vceoV: 30, veboV: 10, icA: 0.5, powerW: 0.625, tjMaxDegC: 150 },
+        thermal: { rthJaKPerW: 200 },
+        gain: [
+          { icA: 0.01, vceV: 5, min: 5000 },
+          { icA: 0.1, vceV: 5, min: 10_000 },
+        ],
+        saturation: [{ icA: 0.1, ibA: 1e-4, maxV: 1.5 }],
+        baseEmitter: [{ kind: 'on', icA: 0.1, maxV: 2 }],
+        leakage: [],
+      },
+    });
+    const corner = { supply: 'max', ambient: 'max', drive: 'strong', gain: 'max', vbe: 'max' };
+    const figures = figuresAtCorner(stage, { ...corner, vceSat: '0', instant: 'settled' });
+    expect(figures.icA).toBe(0);
+    expect(figures.tjDegC).toBe(60);
   });
 
   it('is held in reset by RBE against the pin alone where the sheet prints ICBO only', () => {
