@@ -126,7 +126,7 @@ export const DECISIONS: readonly MethodDecision[] = [
   {
     id: 'rb-dependent',
     title: 'Which criteria depend on RB',
-    text: 'The window decides which criteria move between its ends, and they decide the window: the two are taken in turn, starting from what RB decides by nature, until they agree. Where the window is empty or a single value, the movement over all judged values counts. The tested range always counts.',
+    text: 'The window decides which criteria move between its ends, and they decide the window: the two are taken in turn, starting from what RB decides by nature, until they agree. Where the window is empty or a single value, the movement over all judged values counts, and overdrive, VI(on) or forced β count where they fail at every one of them. The tested range always counts.',
   },
   {
     id: 'can-pass',

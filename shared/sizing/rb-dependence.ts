@@ -21,6 +21,13 @@ export const DECIDED_BY_RB: readonly CriterionId[] = [
   'pre-tested-range',
 ];
 
+/** What no series of values leaves alone, even where the few that could be judged hardly move it. */
+export const MOVED_BY_ANY_RB: readonly CriterionId[] = [
+  'overdrive-factor',
+  'input-on',
+  'forced-beta',
+];
+
 /** Movement between the ends of the window above which a criterion counts as RB-dependent. */
 const MOVES = 0.01;
 

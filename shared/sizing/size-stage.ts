@@ -4,7 +4,7 @@ import type { StageInput } from '../stage/stage-input.ts';
 import { preferredValues } from '../units/preferred-values.ts';
 import { conflictAt } from './conflict.ts';
 import { candidateOf, type JudgedValue, nearness, obstacleAt } from './judged-value.ts';
-import { DECIDED_BY_RB, movingCriteria } from './rb-dependence.ts';
+import { DECIDED_BY_RB, MOVED_BY_ANY_RB, movingCriteria } from './rb-dependence.ts';
 import type { Candidate, Sizing } from './sizing.ts';
 
 /** Values judged beyond both ends of those that can pass, so that the ladder shows what lies outside. */
@@ -127,8 +127,18 @@ function settledDependence(judged: readonly JudgedValue[]): Set<string> {
     if (now === ends) break;
     ends = now;
     dependent = movingCriteria(judged[first]?.criteria ?? [], judged[last]?.criteria ?? []);
+    if (window === null) for (const id of missedThroughout(judged)) dependent.add(id);
   }
   return dependent;
+}
+
+/** What any RB moves over the whole series, but fails at every judged value. */
+function missedThroughout(judged: readonly JudgedValue[]): string[] {
+  return MOVED_BY_ANY_RB.filter((id) =>
+    judged.every(({ criteria }) =>
+      criteria.some((each) => each.id === id && each.status === 'fail'),
+    ),
+  );
 }
 
 const marginOf = ({ margin }: Candidate) => margin ?? -Infinity;

@@ -35,6 +35,24 @@ describe('the base resistor of the 24 V relay stage', () => {
     ]);
   });
 
+  it('has no window behind a pull-up that lets too little through whatever RB is', () => {
+    // At most 3 V over 10.5 kΩ: IC/IB near 100. From 10 to 13 Ω the figure moves by 0.03 %.
+    const sized = sizeStage(
+      relayStage({
+        ...open,
+        shuntResistor: null,
+        drive: {
+          ...RELAY_FILE.drive,
+          kind: 'open-collector',
+          high: null,
+          pullUp: { valueOhm: 10_000, tolerance: 0.05, ratingW: 0.1 },
+        },
+      }),
+    );
+    expect(sized).toMatchObject({ rbMinOhm: null, rbMaxOhm: null, recommendedOhm: null });
+    expect(sized.candidates.map(({ verdict }) => verdict)).not.toContain('pass');
+  });
+
   it('does not depend on the value in use', () => {
     expect(sizeStage(relayStage())).toEqual(sizing);
   });
