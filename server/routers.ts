@@ -1,5 +1,6 @@
 import { auditEndpoints } from './audit/audit-endpoints.ts';
 import { bomNoteEndpoints } from './bom-notes/bom-note-endpoints.ts';
+import { calculationEndpoints } from './calculations/calculation-endpoints.ts';
 import { checkEndpoints } from './checks/check-endpoints.ts';
 import { deskEndpoints } from './desk/desk-endpoints.ts';
 import type { Endpoint } from './http/endpoint.ts';
@@ -27,6 +28,7 @@ export function allEndpoints(services: Services): Endpoint[] {
     ...revisionEndpoints(services),
     ...checkEndpoints(services),
     ...bomNoteEndpoints(services),
+    ...calculationEndpoints(services),
     ...partEndpoints(services),
     ...deskEndpoints(services),
     ...searchEndpoints(services),

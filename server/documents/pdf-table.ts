@@ -14,37 +14,50 @@ interface Shown {
 }
 
 /** A table with its header repeated on every sheet; no row is torn apart. `flags`: whether red is used at all. */
-export function pdfTable({ columns, records }: TableSection, flags: boolean): Content {
+export function pdfTable(section: TableSection, flags: boolean): Content {
+  const { columns, records } = section;
   const shown = columns.flatMap((column, index): Shown[] =>
     column.widthPx === null ? [] : [{ column: { ...column, widthPx: column.widthPx }, index }],
   );
   return {
     table: {
-      headerRows: 1,
+      headerRows: headRows(section),
       dontBreakRows: true,
       keepWithHeaderRows: 1,
       widths: shown.map(({ column }) => points(column.widthPx)),
       body: [
+        ...(section.headingInTable === true ? [titleRow(section.heading, shown.length)] : []),
         shown.map(headerCell),
         ...records.map((cells) =>
           shown.map(({ column, index }) => bodyCell(column, cells[index] ?? { text: '' }, flags)),
         ),
       ],
     },
-    layout: RULED,
+    layout: ruled(headRows(section)),
   };
 }
 
-const RULED: CustomTableLayout = {
-  hLineWidth: (line) => points(line === 0 ? 0 : line === 1 ? INK_LINE_PX : HAIRLINE_PX),
-  hLineColor: (line) => (line === 1 ? COLOURS.ink : COLOURS.hairline),
+const headRows = ({ headingInTable }: TableSection) => (headingInTable === true ? 2 : 1);
+
+function titleRow(heading: string, columns: number): TableCell[] {
+  const cell: TableCell = {
+    ...paragraph(heading, { sizePx: SIZES.section, strong: true }),
+    colSpan: columns,
+  };
+  return [cell, ...Array.from({ length: columns - 1 }, (): TableCell => ({}))];
+}
+
+/** An ink line below the head, hairlines between the rows. */
+const ruled = (headRows: number): CustomTableLayout => ({
+  hLineWidth: (line) => points(line < headRows ? 0 : line === headRows ? INK_LINE_PX : HAIRLINE_PX),
+  hLineColor: (line) => (line === headRows ? COLOURS.ink : COLOURS.hairline),
   vLineWidth: () => 0,
   paddingLeft: (column) => points(column === 0 ? 0 : GAP_PX / 2),
   paddingRight: (column, node) =>
     points(column === (node.table.widths?.length ?? 0) - 1 ? 0 : GAP_PX / 2),
   paddingTop: () => points(ROW_PADDING_PX),
   paddingBottom: () => points(ROW_PADDING_PX),
-};
+});
 
 function headerCell({ column }: Shown): TableCell {
   return {

@@ -19,11 +19,12 @@ export function paragraph(text: string | readonly Run[], style: TextStyle = {}):
   const whole = runs.map((run) => run.text).join('');
   const breaks = widthPx !== undefined && hasLongWord(whole, widthPx, sizePx);
   return {
-    text: runs.map((run) =>
-      run.flagged
-        ? { text: printable(run.text), color: COLOURS.red, bold: true }
-        : { text: printable(run.text) },
-    ),
+    text: runs.map((run) => ({
+      text: printable(run.text),
+      ...(run.flagged ? { color: COLOURS.red, bold: true } : {}),
+      ...(run.level === 'sub' ? { sub: true } : {}),
+      ...(run.level === 'sup' ? { sup: true } : {}),
+    })),
     fontSize: points(sizePx),
     bold: strong,
     color: colour,

@@ -54,16 +54,19 @@ function sectionRow(row: readonly Section[], document: TechnicalDocument): Conte
     columns: row.map((section) => ({
       width: points(section.widthPx),
       stack: [
-        {
-          ...paragraph(section.heading, { sizePx: SIZES.section, strong: true }),
-          margin: [0, 0, 0, points(4)],
-        },
+        ...headingAbove(section),
         section.kind === 'table'
           ? pdfTable(section, document.stamp !== null)
           : bullets(section, document.stamp !== null),
       ],
     })),
   };
+}
+
+function headingAbove(section: Section): Content[] {
+  if (section.kind === 'table' && section.headingInTable === true) return [];
+  const heading = paragraph(section.heading, { sizePx: SIZES.section, strong: true });
+  return [{ ...heading, margin: [0, 0, 0, points(4)] }];
 }
 
 function bullets({ items, widthPx }: ListSection, flags: boolean): Content {

@@ -13,7 +13,7 @@ const SPELLED: Readonly<Record<string, string>> = { '→': '->', '∥': '||', '\
 export function printable(text: string): string {
   return Array.from(text.normalize('NFC'), (character) => {
     const code = character.codePointAt(0) ?? 0;
-    if (COVERAGE.every((covered) => covered.has(code))) return character;
+    if (character === '\n' || COVERAGE.every((covered) => covered.has(code))) return character;
     return SPELLED[character] ?? `[U+${code.toString(16).toUpperCase().padStart(4, '0')}]`;
   }).join('');
 }

@@ -36,6 +36,8 @@ export type Section = TableSection | ListSection;
 export interface TableSection {
   readonly kind: 'table';
   readonly heading: string;
+  /** Whether the heading stands in the table’s own head and so on every sheet the table goes on to. */
+  readonly headingInTable?: boolean;
   readonly widthPx: number;
   readonly columns: readonly Column[];
   readonly records: readonly (readonly Cell[])[];
@@ -70,6 +72,8 @@ export interface Cell {
 export interface Run {
   readonly text: string;
   readonly flagged: boolean;
+  /** Below or above the line; on it where left out. */
+  readonly level?: 'line' | 'sub' | 'sup';
 }
 
 /** The data fields of ISO 7200; sheet numbers are filled in by the sheet itself. */

@@ -135,7 +135,9 @@ export class Worksheet {
 
   /** The line that gave a figure, worked once more here: with its numbers, under a number of its own. */
   repeat(line: SheetLine): void {
-    this.lines.push({ ...line, number: this.counter.next() });
+    const number = this.counter.next();
+    this.lines.push({ ...line, number });
+    this.known.set(line.result, { value: line.value, source: null, line: number });
   }
 
   private input(symbol: SymbolId, put: ApplyOptions['put'] & object): SheetInput {

@@ -217,6 +217,11 @@ export const CHANGING_CALLS: Readonly<Record<string, (floor: ProjectFloor) => Pr
     const path = `/api/projects/${floor.projectId}/bom-note/files/csv`;
     return { client: floor.exporter.client, path, action: 'bom-note.downloaded' };
   },
+  'GET /api/revisions/:revisionId/calculation/files/pdf': async (floor) => {
+    const id = idOf(await floor.at('locked', reference()));
+    const path = `/api/revisions/${id}/calculation/files/pdf`;
+    return { client: floor.checker.client, path, action: 'calculation.downloaded' };
+  },
   'GET /api/bom-notes/:noteId/files/:format': async (floor) => {
     const revisionIds = [idOf(await floor.at('locked', reference()))];
     const { client } = floor.exporter;
