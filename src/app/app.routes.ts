@@ -168,6 +168,12 @@ export const routes: Routes = [
         loadComponent: () => import('./review/check-page.ts').then((m) => m.CheckPage),
       },
       {
+        path: 'p/:projectId/s/:stageId/r/:revisionId/calculation',
+        title: 'Calculation',
+        loadComponent: () =>
+          import('./calculation/calculation-page.ts').then((m) => m.CalculationPage),
+      },
+      {
         path: 'p/:projectId/s/:stageId/r/:revisionId/lock',
         title: 'Approve',
         loadComponent: () => import('./review/lock-page.ts').then((m) => m.LockPage),
