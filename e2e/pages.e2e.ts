@@ -54,6 +54,12 @@ const PAGES: readonly VisitedPage[] = [
   { name: 'new stage', who: 'designer', open: inProject('New stage'), heading: /New stage/ },
   { name: 'draft', who: 'designer', open: inProject('Q12'), heading: /Q12/ },
   { name: 'locked stage', who: 'designer', open: inProject('Q1'), heading: /Q1/ },
+  {
+    name: 'calculation',
+    who: 'designer',
+    open: inProject('Q1', 'Calculation'),
+    heading: /Calculation sheet/,
+  },
   { name: 'check', who: 'checker', open: along('/desk', /^Continue Q5/), heading: /Q5/ },
   { name: 'approval', who: 'approver', open: along('/desk', /^Read and lock Q4/), heading: /Q4/ },
   { name: 'parts', who: 'designer', open: at('/parts'), heading: /Parts/ },

@@ -250,6 +250,11 @@ const ROWS = {
 } as const satisfies Record<string, Row>;
 export type SymbolId = keyof typeof ROWS;
 
+/** All symbols, in the order the laws bring them up. */
+export function symbolIds(): readonly SymbolId[] {
+  return Object.keys(ROWS) as SymbolId[];
+}
+
 /** @throws {RangeError} for a symbol the laws do not use */
 export function lawSymbol(id: string): LawSymbol {
   if (!Object.hasOwn(ROWS, id)) throw new RangeError(`no symbol of a law: ${id}`);

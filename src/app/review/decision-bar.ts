@@ -51,6 +51,7 @@ export class DecisionBar {
     const { projectId, stageId, id } = this.revision();
     return ['/p', projectId, 's', stageId, 'r', id];
   });
+  protected readonly calculationLink = computed(() => [...this.stageLink(), 'calculation']);
   protected readonly lockLink = computed(() => [...this.stageLink(), 'lock']);
 
   protected async pass(): Promise<void> {

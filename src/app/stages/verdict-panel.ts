@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, input, output, signal } f
 import { MatButton } from '@angular/material/button';
 import type { Criterion, Evaluation } from '../../../shared/checks/evaluation.ts';
 import { MarginBar } from '../ui/margin-bar.ts';
+import { MethodLink } from '../ui/method-link.ts';
 import { SymbolText } from '../ui/symbol-text.ts';
 import { VerdictMark } from '../ui/verdict-mark.ts';
 import { criterionName } from './ladder-model.ts';
@@ -21,7 +22,7 @@ import {
 /** The verdict with its criteria: value, limit, margin and worst corner in words. */
 @Component({
   selector: 'app-verdict-panel',
-  imports: [MarginBar, MatButton, SymbolText, VerdictMark],
+  imports: [MethodLink, MarginBar, MatButton, SymbolText, VerdictMark],
   templateUrl: './verdict-panel.html',
   styleUrl: './verdict-panel.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
