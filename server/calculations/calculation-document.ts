@@ -10,9 +10,10 @@ import {
   calculationIdentification,
   calculationOccasion,
 } from '../../shared/report/calculation-facts.ts';
-import type { CalculationSheet } from '../../shared/report/calculation-sheet.ts';
+import type { CalculationSheet, CriterionBlock } from '../../shared/report/calculation-sheet.ts';
 import {
   cornerHeading,
+  cornerReference,
   cornerSentence,
   criterionHeading,
   criterionSentence,
@@ -70,12 +71,17 @@ function notJudged({ findings }: Evaluation): Section {
 function sections(sheet: CalculationSheet): Section[] {
   return [
     ...sheet.criteria.map((block) =>
-      section(criterionHeading(block), criterionSentence(block), block.lines),
+      section(criterionHeading(block), sentencesOf(block), block.lines),
     ),
     ...sheet.corners.map((block) =>
       section(cornerHeading(block), `Operating point at ${cornerSentence(block)}.`, block.lines),
     ),
   ];
+}
+
+function sentencesOf(block: CriterionBlock): string {
+  const reference = cornerReference(block);
+  return criterionSentence(block) + (reference === '' ? '' : ` ${reference}.`);
 }
 
 function section(heading: string, sentence: string, lines: readonly SheetLine[]): Section {

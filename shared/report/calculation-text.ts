@@ -90,9 +90,8 @@ export const criterionHeading = ({ criterion }: CriterionBlock): string =>
   criterionName(criterion.id);
 
 /** What a criterion comes to: figure, limit and margin, or why there is none. */
-export function criterionSentence({ criterion, corner, figure }: CriterionBlock): string {
+export function criterionSentence({ criterion, figure }: CriterionBlock): string {
   const { value, limit, relation, unit, margin, status } = criterion;
-  const where = corner === null ? '' : ` Figures of corner ${corner}.`;
   if (value === null || figure === null) {
     return `No figure: it is infinite, or the data it needs are not printed. Status ${status}.`;
   }
@@ -100,8 +99,12 @@ export function criterionSentence({ criterion, corner, figure }: CriterionBlock)
   const held = limit === null ? 'no limit is set' : `${sign} ${sheetFigure(limit, unit)}`;
   const left =
     margin === null ? '' : `, margin ${formatQuantity(margin * 100, '%', { digits: 4 })}`;
-  return `${sheetFigure(value, unit)}, ${held}${left}. Status ${status}.${where}`;
+  return `${sheetFigure(value, unit)}, ${held}${left}. Status ${status}.`;
 }
+
+/** Where a criterion’s figures go on from: `Figures of corner A`; '' where no corner moves it. */
+export const cornerReference = ({ corner }: CriterionBlock): string =>
+  corner === null ? '' : `Figures of corner ${corner}`;
 
 /** How the second computation came out. */
 export function recomputedText({ lineCount, differing }: CalculationSheet): string {

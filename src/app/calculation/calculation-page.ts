@@ -21,6 +21,7 @@ import { PRE } from '../../../shared/checks/criteria.ts';
 import { calculationSheet } from '../../../shared/report/calculation-sheet.ts';
 import {
   cornerHeading,
+  cornerReference,
   cornerSentence,
   criterionHeading,
   criterionSentence,
@@ -96,6 +97,7 @@ export class CalculationPage {
       sentence: criterionSentence(block),
       method: block.criterion.id.replace(PRE, ''),
       corner: block.corner,
+      reference: cornerReference(block),
       lines: block.lines,
     })),
   );
