@@ -42,6 +42,7 @@ export const CRITERION_LAWS_OF: Readonly<Record<string, readonly LawId[]>> = {
   'load-voltage': ['coil-voltage', 'operate-limit', 'mean-voltage'],
   'saturation-voltage': ['load-line'],
   'drive-current': ['drive-current', 'drive-beyond', 'input-current', 'pull-up-current', 'derated'],
+  'port-current': ['drive-current', 'drive-beyond', 'pull-up-current', 'derated'],
   'collector-current': [
     'saturated-current',
     'saturated-current-row',

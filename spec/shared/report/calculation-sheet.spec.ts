@@ -14,7 +14,7 @@ import { LAWS } from '../../../shared/method/laws.ts';
 import { calculationSheet } from '../../../shared/report/calculation-sheet.ts';
 import { sameFigure, type SheetLine } from '../../../shared/report/calculation/worksheet.ts';
 import { deriveTransistor } from '../../../shared/parts/derive-transistor.ts';
-import { StageInput } from '../../../shared/stage/stage-input.ts';
+import type { StageInput } from '../../../shared/stage/stage-input.ts';
 import { judgeStage } from '../../../shared/sizing/judge-stage.ts';
 import { repeats, seed } from '../../long-run.ts';
 import { find, transistors } from '../parts/library-file.ts';
@@ -94,7 +94,8 @@ describe('calculation sheet', { timeout: 300_000 }, () => {
       { seed: SEED, numRuns: STAGES, endOnFailure: true },
     );
     const own = ownCriterionIds().filter((id) => !worked.has(id));
-    expect(own).toEqual([]);
+    // A port is judged over all stages of a project: its terms are the drive currents of their sheets.
+    expect(own).toEqual(['port-current']);
     const inFront = criterionIds().filter((id) => id.startsWith(PRE) && worked.has(id));
     expect(inFront.length).toBeGreaterThan(10);
   });
