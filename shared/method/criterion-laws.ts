@@ -89,7 +89,6 @@ export const CRITERION_LAWS_OF: Readonly<Record<string, readonly LawId[]>> = {
   'input-voltage': ['input-voltage', 'input-before-base'],
   'load-overvoltage': ['coil-voltage', 'overvoltage-limit'],
   'holding-voltage': [],
-  'port-current': ['derated'],
   'rb-dissipation': ['rb-power', ...RESISTOR],
   'rbe-dissipation': ['rbe-power', ...RESISTOR],
   'pull-up-dissipation': ['pull-up-power', ...RESISTOR],
