@@ -36,6 +36,8 @@ export interface Ladder {
   readonly groups: readonly RungGroup[];
   /** First and last rung of the window, or null where it is empty. */
   readonly window: { readonly from: number; readonly to: number } | null;
+  /** Signs of the longest figure. */
+  readonly longestFigure: number;
   readonly lowerEnd: string;
   readonly upperEnd: string;
 }
@@ -73,6 +75,7 @@ export function ladder(
     rungs,
     groups: groupsOf(rungs),
     window: from < 0 ? null : { from, to },
+    longestFigure: Math.max(0, ...rungs.map(({ figure }) => figure.length)),
     lowerEnd: endText('Lower end', sizing.setBy.min),
     upperEnd: endText('Upper end', sizing.setBy.max),
   };
