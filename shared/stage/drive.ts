@@ -4,6 +4,7 @@ import {
   currentOrZero,
   line,
   optional,
+  orElse,
   power,
   resistance,
   signedVoltage,
@@ -24,7 +25,7 @@ export type FittedResistor = z.infer<typeof FittedResistor>;
 const HighOutput = z.strictObject({
   dropV: voltageOrZero,
   currentA: current,
-  unloadedDropV: voltageOrZero.default(0),
+  unloadedDropV: orElse(voltageOrZero, 0),
 });
 
 const LowOutput = z.strictObject({
@@ -35,21 +36,21 @@ const LowOutput = z.strictObject({
 
 const common = {
   railV: span(voltage),
-  railTracksSupply: z.boolean({ error: 'expected true or false' }).default(false),
+  railTracksSupply: orElse(z.boolean({ error: 'expected true or false' }), false),
   low: LowOutput,
   sourceLimitA: current.nullable(),
   sinkLimitA: current.nullable(),
-  leakageA: currentOrZero.default(0),
+  leakageA: orElse(currentOrZero, 0),
   reset: optional(
     z.strictObject({
       kind: z.enum(['driven-low', 'high-z', 'pull-up'], {
         error: 'expected "driven-low", "high-z" or "pull-up"',
       }),
-      leakageA: currentOrZero.default(1e-6),
+      leakageA: orElse(currentOrZero, 1e-6),
       pullUpOhm: optional(resistance),
     }),
   ),
-  groundShiftV: signedVoltage.default(0),
+  groundShiftV: orElse(signedVoltage, 0),
   port: optional(line(20)),
   portTotalA: optional(current),
   maximumV: optional(voltage),

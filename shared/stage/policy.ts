@@ -83,14 +83,12 @@ export const SHIPPED_POLICIES = [GENERAL_PRACTICE, HIGH_RELIABILITY] as const;
 export const PolicyOfFile = z
   .strictObject({
     name: line(60),
-    ...Object.fromEntries(Object.entries(limits).map(([key, schema]) => [key, schema.optional()])),
+    ...Object.fromEntries(Object.entries(limits).map(([key, schema]) => [key, schema.nullish()])),
   } as { name: z.ZodString } & {
-    [K in keyof typeof limits]: z.ZodOptional<(typeof limits)[K]>;
+    [K in keyof typeof limits]: z.ZodOptional<z.ZodNullable<(typeof limits)[K]>>;
   })
   .transform((given): Policy => {
     const base = SHIPPED_POLICIES.find((policy) => policy.name === given.name) ?? GENERAL_PRACTICE;
-    const set = Object.fromEntries(
-      Object.entries(given).filter(([, value]) => value !== undefined),
-    );
+    const set = Object.fromEntries(Object.entries(given).filter(([, value]) => value != null));
     return { ...base, ...set };
   });

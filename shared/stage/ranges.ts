@@ -62,3 +62,7 @@ export const line = (max: number) =>
     .max(max, `expected at most ${max} characters`)
     // eslint-disable-next-line no-control-regex -- control characters are what is refused
     .regex(/^[^\u0000-\u001f\u007f]*$/, 'expected one line of text without control characters');
+
+/** A key that may be left out or null and then has the given value. */
+export const orElse = <T extends z.ZodType>(schema: T, value: z.output<T>) =>
+  schema.nullish().transform((given): z.output<T> => given ?? value);

@@ -11,6 +11,7 @@ import {
   frequency,
   line,
   optional,
+  orElse,
   power,
   resistanceOrZero,
   span,
@@ -57,7 +58,7 @@ export const StageInput = z
       .string({ error: 'expected a designator such as Q12' })
       .regex(/^[A-Za-z][A-Za-z0-9._/-]{0,19}$/, 'expected a designator such as Q12'),
     title: line(120),
-    quantity: count.default(1),
+    quantity: orElse(count, 1),
     topology: z.enum(TOPOLOGIES, { error: `expected one of ${TOPOLOGIES.join(', ')}` }),
     supplyV: z
       .strictObject({
@@ -68,8 +69,8 @@ export const StageInput = z
       })
       .refine((supply) => supply.min <= supply.max, { error: 'expected min not above max' }),
     ambientDegC: span(celsius),
-    frequencyHz: frequency.default(0),
-    duty: fraction.default(1),
+    frequencyHz: orElse(frequency, 0),
+    duty: orElse(fraction, 1),
     storageTimeLimitSec: optional(time),
     drive: Drive,
     load: Load,

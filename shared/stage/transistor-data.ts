@@ -7,6 +7,7 @@ import {
   gainFigure,
   line,
   optional,
+  orElse,
   power,
   resistance,
   thermalResistance,
@@ -22,7 +23,7 @@ export const GainRow = z.strictObject({
   min: optional(gainFigure),
   typ: optional(gainFigure),
   max: optional(gainFigure),
-  tempDegC: celsius.default(25),
+  tempDegC: orElse(celsius, 25),
 });
 export type GainRow = z.infer<typeof GainRow>;
 
@@ -37,7 +38,7 @@ export type SaturationRow = z.infer<typeof SaturationRow>;
 
 /** Printed VBE, saturated (`sat`) or at a given VCE (`on`), 25 °C. */
 export const BaseEmitterRow = z.strictObject({
-  kind: z.enum(['sat', 'on'], { error: 'expected "sat" or "on"' }).default('sat'),
+  kind: orElse(z.enum(['sat', 'on'], { error: 'expected "sat" or "on"' }), 'sat'),
   icA: current,
   ibA: optional(current),
   minV: optional(voltage),
@@ -52,7 +53,7 @@ export const LeakageRow = z.strictObject({
   }),
   currentA: currentOrZero,
   voltageV: optional(voltage),
-  tempDegC: celsius.default(25),
+  tempDegC: orElse(celsius, 25),
 });
 export type LeakageRow = z.infer<typeof LeakageRow>;
 
@@ -71,8 +72,8 @@ export type SwitchingRow = z.infer<typeof SwitchingRow>;
 export const InternalResistors = z.strictObject({
   r1Ohm: resistance,
   r2Ohm: optional(resistance),
-  r1Tolerance: tolerance.default(0.3),
-  ratioTolerance: tolerance.default(0.2),
+  r1Tolerance: orElse(tolerance, 0.3),
+  ratioTolerance: orElse(tolerance, 0.2),
   input: optional(
     z.strictObject({
       onV: optional(voltage),
@@ -90,7 +91,7 @@ export const InternalResistors = z.strictObject({
 export const TransistorData = z.strictObject({
   partNumber: line(60),
   polarity: z.enum(['npn', 'pnp'], { error: 'expected "npn" or "pnp"' }),
-  darlington: z.boolean({ error: 'expected true or false' }).default(false),
+  darlington: orElse(z.boolean({ error: 'expected true or false' }), false),
   package: optional(line(40)),
   source: optional(line(400)),
   limits: z.strictObject({
@@ -110,7 +111,7 @@ export const TransistorData = z.strictObject({
   gain: z.array(GainRow).max(200),
   saturation: z.array(SaturationRow).max(200),
   baseEmitter: z.array(BaseEmitterRow).max(200),
-  leakage: z.array(LeakageRow).max(200).default([]),
+  leakage: orElse(z.array(LeakageRow).max(200), []),
   switching: optional(SwitchingRow),
   capacitanceF: optional(capacitance),
   model: z

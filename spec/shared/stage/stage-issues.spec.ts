@@ -31,4 +31,45 @@ describe('stageIssues', () => {
   it.each([null, 7, 'text', []])('refuses %j as a whole', (document) => {
     expect(issuesOf(document)[0]?.path).toBe('$');
   });
+
+  it('takes null for any key that may be left out, and reads the same from both', () => {
+    const { drive, load, transistor } = RELAY_FILE;
+    const withNulls = {
+      ...RELAY_FILE,
+      quantity: null,
+      frequencyHz: null,
+      duty: null,
+      drive: {
+        ...drive,
+        railTracksSupply: null,
+        leakageA: null,
+        groundShiftV: null,
+        high: { ...drive.high, unloadedDropV: null },
+        reset: { kind: 'high-z', leakageA: null },
+      },
+      load: { ...load, temperatureRiseK: null },
+      transistor: {
+        ...transistor,
+        darlington: null,
+        leakage: null,
+        gain: transistor.gain.map((row) => ({ ...row, tempDegC: null })),
+        baseEmitter: transistor.baseEmitter.map((row) => ({ ...row, kind: null })),
+      },
+      policy: { name: 'High reliability', overdriveFactor: null },
+    };
+    const left = (from: object, key: string) =>
+      Object.fromEntries(Object.entries(from).filter(([each]) => each !== key));
+    const without = {
+      ...RELAY_FILE,
+      drive: { ...drive, reset: { kind: 'high-z' } },
+      load: left(load, 'temperatureRiseK'),
+      transistor: left(transistor, 'leakage'),
+      policy: { name: 'High reliability' },
+    };
+    expect(issuesOf(withNulls)).toEqual([]);
+    const read = StageInput.parse(withNulls);
+    expect(read).toEqual(StageInput.parse(without));
+    expect(read).toMatchObject({ quantity: 1, duty: 1, policy: { overdriveFactor: 3 } });
+    expect(read.drive.reset?.leakageA).toBe(1e-6);
+  });
 });
