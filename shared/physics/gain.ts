@@ -148,7 +148,6 @@ function coldExponent(rows: readonly GainPoint[]): number | null {
     if (cold.tempDegC >= SHEET_DEG_C || cold.min === null) continue;
     for (const warm of rows) {
       if (warm.tempDegC !== SHEET_DEG_C || warm.icA !== cold.icA || warm.min === null) continue;
-      if (warm.vceV !== cold.vceV && warm.vceV !== null && cold.vceV !== null) continue;
       const own =
         Math.log(warm.min / cold.min) / Math.log(SHEET_K / (cold.tempDegC + ZERO_CELSIUS_K));
       exponent = Math.max(exponent ?? 0, own);

@@ -73,7 +73,10 @@ export function partModel(
       ? leakageTable(part.leakage, policy.leakageDoublingK, DARLINGTON_LEAKAGE)
       : leakageTable(part.leakage, policy.leakageDoublingK),
     junctions,
-    anchor: limits.icA === null ? null : cutOffAnchor(part.baseEmitter, limits.icA, vbeMinV),
+    anchor:
+      limits.icA === null
+        ? null
+        : cutOffAnchor(inside === null ? part.baseEmitter : [], limits.icA, vbeMinV),
     vbeTempcoVPerK: policy.vbeTempcoVPerK * junctions,
     rthJaKPerW: thermalResistanceInUse(part.thermal.rthJaKPerW, limits.powerW, limits.tjMaxDegC),
   };

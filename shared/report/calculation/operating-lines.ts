@@ -85,12 +85,11 @@ function coldPair({ input, inside }: CornerSource['point']['model']) {
   const printed = input.transistor.gain;
   const rows = inside === null ? printed : insideGain(printed, inside);
   let best: { warm: number; cold: number; degC: number; steep: number } | null = null;
-  for (const { tempDegC, min, icA, vceV } of rows) {
+  for (const { tempDegC, min, icA } of rows) {
     if (tempDegC >= SHEET_DEG_C || min === null) continue;
     for (const row of rows) {
       const fits = row.tempDegC === SHEET_DEG_C && row.icA === icA && row.min !== null;
-      const sameV = row.vceV === vceV || row.vceV === null || vceV === null;
-      if (!fits || !sameV) continue;
+      if (!fits) continue;
       const steep = Math.log(row.min / min) / Math.log(298.15 / (tempDegC + 273.15));
       if (best === null || steep > best.steep) {
         best = { warm: row.min, cold: min, degC: tempDegC, steep };

@@ -110,6 +110,14 @@ describe('pre-biased part with a printed VI(on)', () => {
     expect(judged({ drive }).criterion('input-on')?.status).toBe('fail');
   });
 
+  it('cuts off from 0.55 V at a hundredth of its rating, whatever VBE row it prints', () => {
+    const rows = [{ kind: 'on', icA: 0.01, ibA: 0.001, minV: 0.2, typV: null, maxV: 0.8 }];
+    const printed = judged({}, { ...transistor, baseEmitter: rows });
+    expect(printed.criterion('off-collector-current')?.value).toBe(
+      judged().criterion('off-collector-current')?.value,
+    );
+  });
+
   it('holds the low level to VI(off) and the input to its maximum', () => {
     expect(judged().criterion('input-off')).toMatchObject({ value: 0.2, limit: 0.3 });
     const drive = { ...RELAY_FILE.drive, low: { levelV: 0.4, currentA: 0.008 } };
@@ -157,7 +165,7 @@ describe('pre-biased part with gain figures only', () => {
       {
         ...part,
         // No warming to speak of.
-        limits: { ...part.limits, powerW: 1e9 },
+        limits: { ...part.limits, powerW: 1e5 },
         thermal: { rthJaKPerW: 1e-9 },
         internal: { ...internal, input: { maximumV } },
       },

@@ -72,5 +72,8 @@ describe('gainTable', () => {
     expect(table([row(0.01, 100)]).exponent).toBe(2.4);
     const own = table([row(0.01, 100), row(0.01, 50, { tempDegC: -55 })]);
     expect(100 * gainRatio(-55, own.exponent)).toBeCloseTo(50, 9);
+    // Pairs are of equal IC, whatever VCE they were measured at.
+    const other = table([row(0.01, 100), row(0.01, 50, { vceV: 10, tempDegC: -55 })]);
+    expect(other.exponent).toBe(own.exponent);
   });
 });
