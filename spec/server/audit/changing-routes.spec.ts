@@ -137,19 +137,20 @@ async function watched<T>(
   const seen: { changed: boolean; lines: number }[] = [];
   const { database } = server;
   const plain = database.transaction.bind(database);
-  const spy = vi.spyOn(database, 'transaction').mockImplementation(((
-    inner: (manager: EntityManager) => Promise<unknown>,
-  ) =>
-    plain(async (manager) => {
-      const [before, linesBefore] = [
-        await contentsOf(manager, ASIDE),
-        await manager.count(AuditLineEntity),
-      ];
-      const result = await inner(manager);
-      const changed = (await contentsOf(manager, ASIDE)) !== before;
-      seen.push({ changed, lines: (await manager.count(AuditLineEntity)) - linesBefore });
-      return result;
-    })));
+  const spy = vi
+    .spyOn(database, 'transaction')
+    .mockImplementation((inner: (manager: EntityManager) => Promise<unknown>) =>
+      plain(async (manager) => {
+        const [before, linesBefore] = [
+          await contentsOf(manager, ASIDE),
+          await manager.count(AuditLineEntity),
+        ];
+        const result = await inner(manager);
+        const changed = (await contentsOf(manager, ASIDE)) !== before;
+        seen.push({ changed, lines: (await manager.count(AuditLineEntity)) - linesBefore });
+        return result;
+      }),
+    );
   try {
     return [await work(), seen];
   } finally {
