@@ -54,10 +54,14 @@ export class OffStateChecks {
     this.largestA = 0;
   }
 
+  /** Finds the off state after a point; `visit` then takes it in. */
+  solve(point: OperatingPoint): void {
+    this.off.solve(point);
+  }
+
   visit(point: OperatingPoint): void {
     const { worst, off } = this;
     const { policy, transistor, drive } = this.model.input;
-    off.solve(point);
     this.largestA = Math.max(this.largestA, off.collectorA);
     const vbeLimitV =
       policy.offBaseV * this.model.part.junctions +

@@ -80,8 +80,6 @@ export class OnStateChecks {
     const share = powerShare(ambientDegC, transistor.limits.tjMaxDegC);
     worst.note(POWER, point.powerW, this.powerLimitW * share);
     worst.note(JUNCTION, point.tjDegC, this.junctionLimitDegC);
-    this.visitResistors(point);
-    if (this.model.input.load.kind === 'coil') this.visitCoil(point);
   }
 
   /** A Darlington is held to the IC/IB of its rows: a policy's forced β is one for single transistors. */
@@ -94,7 +92,7 @@ export class OnStateChecks {
     return policy.guaranteedOnly ? Math.min(policy.forcedBeta, testBeta) : policy.forcedBeta;
   }
 
-  private visitResistors(point: OperatingPoint): void {
+  visitResistors(point: OperatingPoint): void {
     const { worst } = this;
     const { drive, shuntResistor } = this.model.input;
     const share = resistorShare(point.condition.ambientDegC);
@@ -116,7 +114,7 @@ export class OnStateChecks {
     }
   }
 
-  private visitCoil(point: OperatingPoint): void {
+  visitCoil(point: OperatingPoint): void {
     const { load, frequencyHz, duty } = this.model.input;
     if (load.kind !== 'coil') return;
     const { supplyV, ambientDegC, coilDegC } = point.condition;

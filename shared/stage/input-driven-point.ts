@@ -21,9 +21,8 @@ export class InputDrivenPoint extends OperatingPoint {
     return this.vbeV;
   }
 
-  override solve(tjDegC: number): boolean {
+  protected override fill(): void {
     const { fullA } = this.condition;
-    this.tjDegC = tjDegC;
     this.solveInput();
     this.ibA = this.driveA;
     this.gain = Infinity;
@@ -31,14 +30,13 @@ export class InputDrivenPoint extends OperatingPoint {
     this.forcedBeta = this.ibA > 0 ? fullA / this.ibA : Infinity;
     this.overdrive = Infinity;
     this.piece = this.condition.piece;
-    this.rceSatOhm = this.slopeOhm(tjDegC);
-    if (this.fullDrop && this.model.part.saturation !== null) this.dropAcross(tjDegC, 0);
+    this.warmSlope();
+    if (this.fullDrop && this.model.part.saturation !== null) this.dropAcross(true);
     else {
       this.icA = fullA;
       this.vceV = 0;
     }
     this.sumPower();
-    return this.saturated;
   }
 
   /** V_I behind the output and the outer RB, with the larger of the two input currents the sheet allows. */

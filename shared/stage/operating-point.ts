@@ -14,7 +14,7 @@ import type { LoadCondition, StageModel } from './stage-model.ts';
 import { switchingLossW } from './switching-loss.ts';
 
 /** A junction above this has run away, °C. */
-const RUNAWAY_DEG_C = 400;
+export const RUNAWAY_DEG_C = 400;
 
 /** How near the junction is brought to its fixed point, K; the rule asks for 1 mK. */
 const NEAR_K = 1e-7;
@@ -166,36 +166,57 @@ export class OperatingPoint {
 
   /** Fills the figures for a junction at `tjDegC`; tells whether the corner is saturated there. */
   solve(tjDegC: number): boolean {
-    const { fullA, availableV } = this.condition;
     this.tjDegC = tjDegC;
-    this.vbeV = Math.max(0, this.vbe25V + this.vbeTempco * (tjDegC - SHEET_DEG_C));
-    this.gain = this.gain25 * this.gainFactor(tjDegC);
-    this.driveA = this.driveCurrent();
+    this.fill();
+    return this.saturated;
+  }
+
+  /**
+   * Fills the figures for the junction at hand. Its steps neither take nor return a number: between functions that are
+   * compiled apart, each would cost an allocation.
+   */
+  protected fill(): void {
+    this.warmJunction();
+    this.findDrive();
     this.ibA = Math.max(0, this.driveA - this.vbeV / this.rbeOhm);
     this.piece = this.condition.piece;
-    this.rceSatOhm = this.slopeOhm(tjDegC);
-    if (this.ibA <= 0) {
-      this.saturated = false;
-      this.forcedBeta = Infinity;
-      this.overdrive = 0;
-      this.icA = 0;
-      this.vceV = Math.max(0, Math.min(availableV, this.condition.supplyV));
-    } else {
-      this.forcedBeta = fullA / this.ibA;
-      this.overdrive = fullA > 0 ? (this.gain * this.ibA) / fullA : Infinity;
-      this.saturated = this.forcedBeta < this.gain;
-      if (!this.saturated) {
-        this.icA = this.gain * this.ibA;
-        this.vceV = Math.max(0, availableV - this.icA * this.condition.loadOhm);
-      } else if (this.fullDrop && this.saturation !== null) {
-        this.dropAcross(tjDegC, this.forcedBeta);
-      } else {
-        this.icA = fullA;
-        this.vceV = 0;
-      }
-    }
+    this.warmSlope();
+    if (this.ibA <= 0) this.cutOff();
+    else this.conduct();
     this.sumPower();
-    return this.saturated;
+  }
+
+  private warmJunction(): void {
+    const warmerK = this.tjDegC - SHEET_DEG_C;
+    this.vbeV = Math.max(0, this.vbe25V + this.vbeTempco * warmerK);
+    // Minima take the cold penalty, maxima the hot one; neither takes a credit. Specimens take both.
+    const penalty = this.highGain ? warmerK > 0 : warmerK < 0;
+    this.gain = this.gain25 * this.ratioWhere(penalty || this.bothWays);
+  }
+
+  private cutOff(): void {
+    const { availableV, supplyV } = this.condition;
+    this.saturated = false;
+    this.forcedBeta = Infinity;
+    this.overdrive = 0;
+    this.icA = 0;
+    this.vceV = Math.max(0, Math.min(availableV, supplyV));
+  }
+
+  private conduct(): void {
+    const { fullA, availableV, loadOhm } = this.condition;
+    this.forcedBeta = fullA / this.ibA;
+    this.overdrive = fullA > 0 ? (this.gain * this.ibA) / fullA : Infinity;
+    this.saturated = this.forcedBeta < this.gain;
+    if (!this.saturated) {
+      this.icA = this.gain * this.ibA;
+      this.vceV = Math.max(0, availableV - this.icA * loadOhm);
+    } else if (this.fullDrop && this.saturation !== null) {
+      this.dropAcross(false);
+    } else {
+      this.icA = fullA;
+      this.vceV = 0;
+    }
   }
 
   /** Voltage at the input of a pre-biased part, before its R1; of any other part that at its base. V. */
@@ -278,12 +299,6 @@ export class OperatingPoint {
     this.solve(high);
   }
 
-  /** Minima take the cold penalty, maxima the hot one; neither takes a credit. Specimens take both. */
-  private gainFactor(tjDegC: number): number {
-    const penalty = this.highGain ? tjDegC > SHEET_DEG_C : tjDegC < SHEET_DEG_C;
-    return this.ratioWhere(penalty || this.bothWays);
-  }
-
   private ratioWhere(applies: boolean): number {
     if (!applies) return 1;
     if (this.tjDegC !== this.ratioDegC) {
@@ -293,27 +308,34 @@ export class OperatingPoint {
     return this.ratio;
   }
 
-  private driveCurrent(): number {
+  private findDrive(): void {
     const { openV, sourceOhm, testedA, beyondOhm } = this.drive;
     const current = (openV - this.vbeV) / (sourceOhm + this.rbOhm);
     this.beyondPin = current > testedA * (1 + 1e-12);
-    if (!this.beyondPin) return Math.max(0, current);
-    const bentV = openV + (beyondOhm - sourceOhm) * testedA;
-    return (bentV - this.vbeV) / (beyondOhm + this.rbOhm);
+    if (!this.beyondPin) this.driveA = Math.max(0, current);
+    else {
+      const bentV = openV + (beyondOhm - sourceOhm) * testedA;
+      this.driveA = (bentV - this.vbeV) / (beyondOhm + this.rbOhm);
+    }
   }
 
-  protected slopeOhm(tjDegC: number): number {
-    const { saturation, rceTempco: tempco } = this;
-    if (saturation === null) return 0;
+  /** RCE(sat) of the piece in use at the junction temperature. */
+  protected warmSlope(): void {
+    const { saturation, rceTempco, tjDegC } = this;
+    if (saturation === null) return;
     const ratio = this.bothWays
-      ? expectedResistanceRatio(tjDegC, tempco)
-      : resistanceRatio(tjDegC, tempco);
-    return (saturation.slopeOhm[this.piece] ?? 0) * ratio;
+      ? expectedResistanceRatio(tjDegC, rceTempco)
+      : resistanceRatio(tjDegC, rceTempco);
+    this.rceSatOhm = (saturation.slopeOhm[this.piece] ?? 0) * ratio;
   }
 
-  /** Load line against the saturation line: piece by piece downwards from the full load current. */
-  protected dropAcross(tjDegC: number, forcedBeta: number): void {
-    const { saturation } = this;
+  /**
+   * Load line against the saturation line: piece by piece downwards from the full load current.
+   *
+   * @param asTested whether the drive is taken for the rows' own
+   */
+  protected dropAcross(asTested: boolean): void {
+    const { saturation, tjDegC } = this;
     const { availableV, loadOhm, fullA } = this.condition;
     if (saturation === null) return;
     let current = 0;
@@ -324,13 +346,13 @@ export class OperatingPoint {
       const interceptV =
         plainV +
         forcedBetaStepV(
-          forcedBeta,
+          asTested ? 0 : this.forcedBeta,
           saturation.testBeta[this.piece] ?? 0,
           this.gain,
           saturation.reverseGain,
           tjDegC,
         );
-      this.rceSatOhm = this.slopeOhm(tjDegC);
+      this.warmSlope();
       current = (availableV - interceptV) / (loadOhm + this.rceSatOhm);
       const lowerA = this.piece > 0 ? (saturation.upToA[this.piece - 1] ?? 0) : 0;
       if (this.piece === 0 || current > lowerA) break;
