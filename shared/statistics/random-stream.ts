@@ -6,6 +6,9 @@
  */
 export class RandomStream {
   private readonly state = new Int32Array(4);
+  /** Words drawn ahead: the generator runs in the variables of one loop. */
+  private readonly ahead = new Int32Array(AHEAD);
+  private at = AHEAD;
 
   /** Starts the stream that a seed and two numbers name. */
   start(seed: number, stream: number, block: number): void {
@@ -19,22 +22,37 @@ export class RandomStream {
     }
     // All zero is the one state the generator does not leave.
     if (this.state.every((word) => word === 0)) this.state[0] = 1;
+    this.at = AHEAD;
   }
 
   /** 32 random bits as a signed integer. */
   next(): number {
-    const { state } = this;
-    const s0 = state[0] ?? 0;
-    const s1 = state[1] ?? 0;
-    const s2 = (state[2] ?? 0) ^ s0;
-    const s3 = (state[3] ?? 0) ^ s1;
-    const sum = (s0 + (s3 ^ s1)) | 0;
-    const bits = (((sum << 7) | (sum >>> 25)) + s0) | 0;
-    state[0] = s0 ^ s3;
-    state[1] = s1 ^ s2;
-    state[2] = s2 ^ (s1 << 9);
-    state[3] = (s3 << 11) | (s3 >>> 21);
-    return bits;
+    if (this.at === AHEAD) this.drawAhead();
+    return this.ahead[this.at++] ?? 0;
+  }
+
+  private drawAhead(): void {
+    const { state, ahead } = this;
+    let s0 = state[0] ?? 0;
+    let s1 = state[1] ?? 0;
+    let s2 = state[2] ?? 0;
+    let s3 = state[3] ?? 0;
+    for (let k = 0; k < AHEAD; k++) {
+      const sum = (s0 + s3) | 0;
+      ahead[k] = (((sum << 7) | (sum >>> 25)) + s0) | 0;
+      const shifted = s1 << 9;
+      s2 ^= s0;
+      s3 ^= s1;
+      s1 ^= s2;
+      s0 ^= s3;
+      s2 ^= shifted;
+      s3 = (s3 << 11) | (s3 >>> 21);
+    }
+    state[0] = s0;
+    state[1] = s1;
+    state[2] = s2;
+    state[3] = s3;
+    this.at = 0;
   }
 
   /** Fills a column with numbers evenly spread between 0 and 1, neither included. */
@@ -78,6 +96,9 @@ export class RandomStream {
     return low + this.uniform() * (high - low) < 1;
   }
 }
+
+/** Few, since what is drawn ahead of the end of a column is thrown away. */
+const AHEAD = 128;
 
 /** Tolerances are read as ±3 σ; nothing lies beyond. */
 const CUT_SIGMA = 3;
