@@ -170,7 +170,26 @@ export function minimumVbeV(table: BaseEmitterTable, icA: number): number {
  */
 export function vbeBetweenV(table: BaseEmitterTable, icA: number, share: number): number {
   if (table.maximum.icA.length === 0) return table.usualMinV;
-  const logA = Math.log(icA);
+  return vbeBetweenAtV(table, icA, Math.log(icA), share);
+}
+
+function vbeBetweenAtV(table: BaseEmitterTable, icA: number, logA: number, share: number): number {
   const gapV = table.gap.icA.length === 0 ? USUAL_GAP_V : between(table.gap, logA);
   return highestV(table.maximum, icA, logA) - (1 - share) * gapV;
+}
+
+/** `vbeBetweenV` for a column of currents, given with their logarithms, and of shares. */
+export function fillVbeBetweenV(
+  vbeV: Float64Array,
+  table: BaseEmitterTable,
+  icA: Float64Array,
+  logA: Float64Array,
+  share: Float64Array,
+): void {
+  if (table.maximum.icA.length === 0) vbeV.fill(table.usualMinV);
+  else {
+    for (let k = 0; k < vbeV.length; k++) {
+      vbeV[k] = vbeBetweenAtV(table, icA[k] ?? 0, logA[k] ?? 0, share[k] ?? 0);
+    }
+  }
 }

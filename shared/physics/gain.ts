@@ -223,9 +223,24 @@ export function maximumGain(table: GainTable, icA: number): number {
  * @param share −1 at the guaranteed minimum, 1 at the maximum
  */
 export function gainBetween(table: GainTable, icA: number, share: number): number {
-  const logA = Math.log(icA);
+  return gainBetweenAt(table, Math.log(icA), share);
+}
+
+function gainBetweenAt(table: GainTable, logA: number, share: number): number {
   const low = logMinimum(table, logA);
   return Math.exp(low + ((1 + share) / 2) * (held(table.maximum, logA) - low));
+}
+
+/** `gainBetween` for a column of currents, given by their logarithms, and of shares. */
+export function fillGainBetween(
+  gain: Float64Array,
+  table: GainTable,
+  logA: Float64Array,
+  share: Float64Array,
+): void {
+  for (let k = 0; k < gain.length; k++) {
+    gain[k] = gainBetweenAt(table, logA[k] ?? 0, share[k] ?? 0);
+  }
 }
 
 /** X of hFE(T) for expected figures, both ways. */

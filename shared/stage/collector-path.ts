@@ -29,7 +29,7 @@ export function loadDegC(input: StageInput, { ambientDegC, settled }: LoadEnds):
 }
 
 /** Smallest resistance a load is taken for, Ω: copper near absolute zero must not divide by nothing. */
-const SMALLEST_LOAD_OHM = 1e-9;
+export const SMALLEST_LOAD_OHM = 1e-9;
 
 /** Writes what the collector sees. */
 export function setCollectorPath(

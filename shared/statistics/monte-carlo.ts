@@ -93,6 +93,7 @@ export class SampleRun {
     const { draws } = this.drawing;
     const { overdriveFactor, vceSatV, icA, powerW, tjDegC } = this.figures;
     const { point } = stage;
+    stage.take(draws);
     for (let k = 0; k < count; k++) {
       if (stage.judge(draws, k)) this.met++;
       const at = this.done + k;

@@ -12,6 +12,8 @@ export class SampleTally extends FigureBoard {
   private readonly missed = new Float64Array(IDS.length);
   /** Numbers of the criteria that count. */
   private readonly asked: Uint8Array;
+  /** 1 for figures that must not exceed their limit, −1 for those that must reach it. */
+  private readonly sign: Int8Array;
 
   /**
    * @param criteria of the stage at its corners: those without a computed value do not count
@@ -24,6 +26,7 @@ export class SampleTally extends FigureBoard {
     super();
     const computed = new Set(criteria.filter(isComputed).map(({ id }) => id));
     this.asked = Uint8Array.from(IDS.flatMap((id, k) => (computed.has(prefix + id) ? [k] : [])));
+    this.sign = Int8Array.from(this.asked, (k) => SIGN[k] ?? 1);
     // What a sample does not come to asks nothing of it.
     this.limits.fill(NaN);
   }
@@ -39,11 +42,11 @@ export class SampleTally extends FigureBoard {
 
   /** Whether the figures noted for a sample meet everything; counts those that do not. */
   judge(): boolean {
-    const { asked, figures, limits, missed } = this;
+    const { asked, sign, figures, limits, missed } = this;
     let met = true;
     for (let at = asked.length - 1; at >= 0; at--) {
       const k = asked[at] ?? 0;
-      if (!meets(SIGN[k] ?? 1, figures[k] ?? NaN, limits[k] ?? NaN)) {
+      if (!meets(sign[at] ?? 1, figures[k] ?? NaN, limits[k] ?? NaN)) {
         met = false;
         missed[k] = (missed[k] ?? 0) + 1;
       }

@@ -7,11 +7,13 @@ import { frontStage, outputStage, type PreDriver } from '../stage/two-transistor
 import type { Draws } from './quantities.ts';
 import { SampledTransistor } from './sampled-transistor.ts';
 
-/** A stage that is judged at one sample after another. */
+/** A stage that is judged at one block of samples after another. */
 export interface SampledStage {
   /** The output transistor at the sample judged last. */
   readonly point: OperatingPoint;
-  /** Judges sample k of the drawn columns; tells whether it meets every criterion with a computed value. */
+  /** Takes a block of drawn columns. */
+  take(draws: Draws): void;
+  /** Judges sample k of the columns it took; tells whether it meets every criterion with a computed value. */
   judge(draws: Draws, k: number): boolean;
   /** Samples that missed a criterion, by id. */
   misses(): [string, number][];
@@ -27,30 +29,19 @@ export function sampledStage(input: StageInput, criteria: readonly Criterion[]):
 class OneSampledTransistor implements SampledStage {
   readonly point: OperatingPoint;
   private readonly transistor: SampledTransistor;
-  private met = false;
-  /** Called from a list, each step is compiled by itself: together they are more than the compiler takes in one piece. */
-  private readonly steps: readonly ((draws: Draws, k: number) => void)[];
 
   constructor(input: StageInput, criteria: readonly Criterion[]) {
-    const transistor = new SampledTransistor(input, criteria, '');
-    this.transistor = transistor;
-    this.point = transistor.point;
-    this.steps = [
-      (draws, k) => {
-        transistor.place(draws, k);
-      },
-      () => {
-        transistor.settle();
-      },
-      () => {
-        this.met = transistor.judge();
-      },
-    ];
+    this.transistor = new SampledTransistor(input, criteria, '');
+    this.point = this.transistor.point;
+  }
+
+  take(draws: Draws): void {
+    this.transistor.take(draws);
   }
 
   judge(draws: Draws, k: number): boolean {
-    for (const step of this.steps) step(draws, k);
-    return this.met;
+    this.transistor.goTo(draws, k);
+    return this.transistor.judge();
   }
 
   misses(): [string, number][] {
@@ -73,6 +64,11 @@ class TwoSampledTransistors implements SampledStage {
       nominalSeriesV: 0,
     });
     this.point = this.output.point;
+  }
+
+  /** Each waits for what the other comes to: sample by sample. */
+  take(): void {
+    return;
   }
 
   judge(draws: Draws, k: number): boolean {

@@ -7,7 +7,7 @@ import { expectedForwardV } from '../stage/collector-path.ts';
 import { type DriveSource, isHighSide, setDriveSource } from '../stage/drive-source.ts';
 import { drawSpecimen } from '../physics/saturation.ts';
 import { operatingPoint } from '../stage/input-driven-point.ts';
-import type { OperatingPoint } from '../stage/operating-point.ts';
+import { type OperatingPoint, RUNAWAY_DEG_C } from '../stage/operating-point.ts';
 import type { StageInput } from '../stage/stage-input.ts';
 import {
   type LoadCondition,
@@ -19,6 +19,7 @@ import {
 import type { Writable } from '../stage/writable.ts';
 import type { Draws } from './quantities.ts';
 import { SampleTally } from './sample-tally.ts';
+import { at, SettledBlock } from './settled-block.ts';
 
 /** How near a sample's junction is brought to its balance, K. */
 const NEAR_K = 1e-3;
@@ -48,6 +49,7 @@ export class SampledTransistor {
   /** Rise of the junction at the stage's own nominal point, and how it answers to the junction itself: where to look first. */
   private readonly usualRiseK: number;
   private readonly usualFeedback: number;
+  private block: SettledBlock | null = null;
 
   /**
    * @param given the stage with its tolerances
@@ -95,6 +97,67 @@ export class SampledTransistor {
   settleAt(draws: Draws, k: number): void {
     this.place(draws, k);
     this.settle();
+  }
+
+  /** Finds the samples of a block of drawn columns together, where the stage's kind allows it; `goTo` then has less to do. */
+  take(draws: Draws): void {
+    this.block ??= SettledBlock.of(this.given, this.model, draws.supply.length, {
+      riseK: this.usualRiseK,
+      feedback: this.usualFeedback,
+      nearK: NEAR_K,
+      belowDegC: RUNAWAY_DEG_C,
+    });
+    this.block?.settle(draws);
+  }
+
+  /** How many samples of the columns it took were found together; null where the stage's kind does not allow it. */
+  get foundTogether(): number | null {
+    return this.block?.found.reduce((sum, found) => sum + found, 0) ?? null;
+  }
+
+  /** Puts the transistor into sample k of the columns it took. */
+  goTo(draws: Draws, k: number): void {
+    if (this.block?.found[k] === 1) this.copy(this.block, k, draws.gain);
+    else this.settleAt(draws, k);
+  }
+
+  /** Writes what the block found for a sample: everything the checks read. */
+  private copy({ columns, piece }: SettledBlock, k: number, gain: Float64Array): void {
+    const { stage, condition, point, specimen, clamp } = this;
+    const supplyV = at(columns.supplyV, k);
+    stage.supplyV.min = supplyV;
+    stage.supplyV.max = supplyV;
+    const railV = at(columns.railV, k);
+    stage.drive.railV.min = railV;
+    stage.drive.railV.max = railV;
+    if (clamp !== null) setClampVoltages(clamp, stage);
+    condition.supplyV = supplyV;
+    condition.availableV = supplyV;
+    condition.ambientDegC = at(columns.ambientDegC, k);
+    condition.coilDegC = at(columns.loadDegC, k);
+    condition.loadOhm = at(columns.loadOhm, k);
+    condition.fullA = at(columns.fullA, k);
+    specimen.gain = at(gain, k);
+    const rbOhm = at(columns.rbOhm, k);
+    point.chosenRbOhm = rbOhm;
+    point.outerRbOhm = rbOhm;
+    point.rbOhm = rbOhm;
+    point.rbeOhm = at(columns.rbeOhm, k);
+    point.tjDegC = at(columns.tjDegC, k);
+    point.vbeV = at(columns.vbeV, k);
+    point.gain = at(columns.gain, k);
+    point.driveA = at(columns.driveA, k);
+    point.ibA = at(columns.ibA, k);
+    point.forcedBeta = at(columns.forcedBeta, k);
+    point.overdrive = at(columns.overdrive, k);
+    point.rceSatOhm = at(columns.rceSatOhm, k);
+    point.icA = at(columns.icA, k);
+    point.vceV = at(columns.vceV, k);
+    point.powerW = at(columns.powerW, k);
+    point.piece = piece[k] ?? 0;
+    point.saturated = true;
+    point.beyondPin = false;
+    point.runaway = false;
   }
 
   /** Puts the transistor into sample k of the drawn columns; `settle` or `judge` then make use of it. */

@@ -89,9 +89,11 @@ describe.each(Object.entries(STAGES))('%s', (_, document) => {
   it('gives each sample the figures it has by itself, whatever was judged before', () => {
     const { draws } = drawn(input);
     const reused = sampledStage(input, criteria);
+    reused.take(draws);
     for (let k = 0; k < 200; k++) {
       const met = reused.judge(draws, k);
       const fresh = sampledStage(input, criteria);
+      fresh.take(draws);
       expect(fresh.judge(draws, k)).toBe(met);
       for (const figure of ['overdrive', 'vceV', 'icA', 'powerW', 'tjDegC'] as const) {
         expect(reused.point[figure]).toBe(fresh.point[figure]);
