@@ -3,6 +3,7 @@ import type { EntityManager } from 'typeorm';
 import type * as z from 'zod';
 import type { createStage, readStage, RevisionSummary } from '../../shared/contract/stage.ts';
 import { revisionLetter } from '../../shared/review/revision-state.ts';
+import { policyDifference } from '../../shared/stage/policy.ts';
 import type { Act, Actor } from '../audit/act.ts';
 import { ApiError, notFound } from '../http/api-error.ts';
 import type { Database } from '../persistence/database.ts';
@@ -15,7 +16,6 @@ import { auditRevision } from '../revisions/revision-audit.ts';
 import { insertRevision } from '../revisions/insert-revision.ts';
 import { linesOfStage, type RevisionLine } from '../revisions/revision-line.ts';
 import { answerRevision } from '../revisions/revision-reply.ts';
-import { policyDifference } from './policy-difference.ts';
 import { designatorsFor } from './project-designators.ts';
 import { StageEntity } from './stage-entity.ts';
 

@@ -85,12 +85,11 @@ export const listStages = {
 } as const satisfies Route;
 
 /** The definition's own policy is put aside for the project's; `policyDifference` names what that changed. */
-export const PolicyDifference = z.object({
+const PolicyDifference = z.object({
   key: z.string(),
   given: z.union([z.number(), z.string(), z.boolean()]),
   adopted: z.union([z.number(), z.string(), z.boolean()]),
 });
-export type PolicyDifference = z.infer<typeof PolicyDifference>;
 
 export const createStage = {
   method: 'POST',

@@ -77,6 +77,20 @@ export const HIGH_RELIABILITY: Policy = {
   driveDerating: 0.8,
 };
 
+/** A limit that two policies set differently. */
+export interface PolicyDifference {
+  readonly key: string;
+  readonly given: Policy[keyof Policy];
+  readonly adopted: Policy[keyof Policy];
+}
+
+/** What putting one policy in place of the given one changes, key by key. */
+export function policyDifference(given: Policy, adopted: Policy): PolicyDifference[] {
+  return (Object.keys(adopted) as (keyof Policy)[])
+    .filter((key) => given[key] !== adopted[key])
+    .map((key) => ({ key, given: given[key], adopted: adopted[key] }));
+}
+
 export const SHIPPED_POLICIES = [GENERAL_PRACTICE, HIGH_RELIABILITY] as const;
 
 /** The policy as a stage file gives it: a name, and whatever differs from the shipped one of that name. */

@@ -20,7 +20,7 @@ import { NotAllowed } from '../ui/not-allowed.ts';
 import { StatusAnnouncer } from '../ui/status-announcer.ts';
 import { SymbolText } from '../ui/symbol-text.ts';
 import { usePageTrail } from '../ui/page-title.ts';
-import { limitText, POLICY_LIMITS } from './policy-limits.ts';
+import { limitText, POLICY_LIMITS } from '../ui/policy-limits.ts';
 import { projectTrail } from './project-trail.ts';
 import { ProjectStore } from './project-store.ts';
 

@@ -1,14 +1,15 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogModule } from '@angular/material/dialog';
-import { createStage, type PolicyDifference } from '../../../shared/contract/stage.ts';
+import { createStage } from '../../../shared/contract/stage.ts';
 import type { Project } from '../../../shared/contract/project.ts';
+import type { PolicyDifference } from '../../../shared/stage/policy.ts';
 import { ApiClient } from '../api/api-client.ts';
 import { toApiProblem } from '../api/api-problem.ts';
 import { Icon } from '../ui/icon.ts';
 import { NotAllowed } from '../ui/not-allowed.ts';
+import { PolicyDifferenceTable } from '../ui/policy-difference-table.ts';
 import { counted } from '../ui/time-text.ts';
-import { limitName, limitText } from './policy-limits.ts';
 import { readStageFile, type FileStage } from './read-stage-file.ts';
 
 interface Row extends FileStage {
@@ -22,7 +23,7 @@ interface Row extends FileStage {
 /** Takes stage files, says what is wrong with each by field, and imports those that are right. */
 @Component({
   selector: 'app-stage-import',
-  imports: [Icon, MatButton, MatDialogModule, NotAllowed],
+  imports: [Icon, MatButton, MatDialogModule, NotAllowed, PolicyDifferenceTable],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './stage-import.html',
   styleUrl: './stage-import.scss',
@@ -46,8 +47,6 @@ export class StageImport {
   protected readonly act = computed(() =>
     this.ready().length === 0 ? 'Import' : `Import ${counted(this.ready().length, 'stage')}`,
   );
-  protected readonly limitName = limitName;
-  protected readonly limitText = limitText;
 
   protected async choose(input: HTMLInputElement): Promise<void> {
     const stages = await Promise.all(

@@ -6,6 +6,7 @@ import { firstValueFrom } from 'rxjs';
 import type { Revision } from '../../../shared/contract/revision.ts';
 import { toApiProblem } from '../api/api-problem.ts';
 import type { PartRole } from '../../../shared/parts/part-fit.ts';
+import { policyDifference, type PolicyDifference } from '../../../shared/stage/policy.ts';
 import { ReasonDialog, type ReasonAsked } from '../ui/reason-dialog.ts';
 import { linked } from './apply-part.ts';
 import { CompareDialog, comparedRevision, type ComparedPair } from './compare-dialog.ts';
@@ -99,6 +100,12 @@ export class SheetActs {
     if (draft !== null) downloadStageFile(revision, draft.definition, new Date());
   }
 
+  /** What the policy of the file taken over said otherwise than the project's. */
+  readonly policyDifference = signal<readonly PolicyDifference[]>(
+    (this.router.currentNavigation()?.extras.state?.['policyDifference'] as
+      PolicyDifference[] | undefined) ?? [],
+  );
+
   /** Takes over a stage file; the project's policy stays, and parts count as typed by hand. */
   async importFile(files: HTMLInputElement): Promise<void> {
     const file = files.files?.[0];
@@ -108,6 +115,7 @@ export class SheetActs {
     files.value = '';
     this.importFaults.set(reading.ok ? [] : reading.faults.slice(0, 8));
     if (!reading.ok) return;
+    this.policyDifference.set(policyDifference(reading.stage.policy, draft.definition.policy));
     this.store.replace({
       definition: { ...reading.stage, policy: draft.definition.policy },
       parts: { transistor: null, preDriver: null, load: null, drive: null, clamp: null },

@@ -20,6 +20,7 @@ import { usePageTrail } from '../ui/page-title.ts';
 import { StateChip } from '../ui/state-chip.ts';
 import { SymbolText } from '../ui/symbol-text.ts';
 import { StatusAnnouncer } from '../ui/status-announcer.ts';
+import { PolicyDifferenceTable } from '../ui/policy-difference-table.ts';
 import { StripCell, TitleStrip } from '../ui/title-strip.ts';
 import { VerdictMark } from '../ui/verdict-mark.ts';
 import { BrowserEngine } from './browser-engine.ts';
@@ -60,6 +61,7 @@ const TABS: readonly (readonly [Tab, string])[] = [
     MatMenuModule,
     NotAllowed,
     PartsForStage,
+    PolicyDifferenceTable,
     RouterLink,
     SaveStatus,
     SheetNotes,
