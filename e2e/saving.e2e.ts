@@ -42,6 +42,21 @@ test('a second save of the same stage meets the first one, and nothing is lost',
   await expect(first.field('Base network', 'RBE')).toHaveValue('15');
 });
 
+test('a file with a policy of its own says what the project put in its place', async ({
+  signedIn,
+}) => {
+  const page = await signedIn('designer');
+  await page.goto('/projects');
+  await page.getByRole('link', { name: 'IR-8', exact: true }).click();
+  // The file says General practice, the project High reliability.
+  const sheet = await StageSheet.fromFile(page, relayDriver('Q65', 620));
+  const told = page.getByRole('table', { name: 'The project’s policy was put in:' });
+  await expect(told.getByRole('row', { name: /^Largest forced β/ })).toContainText(/20\s*10/);
+  await page.getByRole('button', { name: 'Understood' }).click();
+  await expect(told).toBeHidden();
+  await expect(sheet.criterion('Forced β')).toContainText('≤\u00a010');
+});
+
 test('text that is no quantity is explained at its field and is not saved', async ({
   signedIn,
 }) => {
