@@ -65,11 +65,12 @@ async function design(page: Page): Promise<void> {
   });
   const sheet = new StageSheet(page);
   await expect(sheet.criterion('Forced β')).toContainText('13.9');
-  await keyboard.reach(sheet.rung('620 Ω'));
-  await page.keyboard.press('ArrowRight');
-  await expect(sheet.rung('680 Ω')).toBeFocused();
-  await page.keyboard.press('ArrowLeft');
-  await expect(sheet.rung('620 Ω')).toBeFocused();
+  // The value in use is the ladder's stop, and arrow keys go along its values.
+  await keyboard.reach(sheet.rung('1 kΩ'));
+  for (const value of ['910 Ω', '820 Ω', '750 Ω', '680 Ω', '620 Ω']) {
+    await page.keyboard.press('ArrowLeft');
+    await expect(sheet.rung(value)).toBeFocused();
+  }
   await page.keyboard.press('Enter');
   await expect(sheet.criterion('Overdrive factor')).toContainText('5.73');
   await sheet.saved();
