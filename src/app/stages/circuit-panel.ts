@@ -16,9 +16,9 @@ import { describeSchematic } from '../../../shared/report/schematic/describe-sch
 import type { PartKey } from '../../../shared/report/schematic/drawing.ts';
 import { drawSchematic } from '../../../shared/report/schematic/schematic.ts';
 import type { StageInput } from '../../../shared/stage/stage-input.ts';
+import { criterionName } from '../../../shared/report/criterion-name.ts';
 import { SchematicView } from '../schematic/schematic-view.ts';
 import { Icon } from '../ui/icon.ts';
-import { criterionName } from './ladder-model.ts';
 import { storedResistorStyle, storeResistorStyle, type ResistorStyle } from './resistor-style.ts';
 import { hasFigures, judgedStage, NOMINAL, shownCorner } from './shown-corner.ts';
 

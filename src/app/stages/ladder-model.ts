@@ -1,5 +1,5 @@
 import type { CriterionStatus, Evaluation } from '../../../shared/checks/evaluation.ts';
-import { CRITERIA, type CriterionId } from '../../../shared/checks/criteria.ts';
+import { criterionName } from '../../../shared/report/criterion-name.ts';
 import { candidateOf } from '../../../shared/sizing/judged-value.ts';
 import { DECIDED_BY_RB } from '../../../shared/sizing/rb-dependence.ts';
 import type { Candidate, Sizing } from '../../../shared/sizing/sizing.ts';
@@ -48,10 +48,6 @@ export const BAND_HEIGHT = Math.sqrt(0.1 / FULL_MARGIN);
 
 const near = (a: number | null, b: number | null) =>
   a !== null && b !== null && Math.abs(a - b) <= 1e-6 * Math.abs(b);
-
-/** What a criterion is called on the sheet; its id where it has no name. */
-export const criterionName = (id: string): string =>
-  Object.hasOwn(CRITERIA, id) ? CRITERIA[id as CriterionId].name : id;
 
 /**
  * The window as it is drawn. A value in use that was not sized stands in at its place, with what the verdicts say of it.

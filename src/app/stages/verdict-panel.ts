@@ -1,11 +1,11 @@
 import { ChangeDetectionStrategy, Component, computed, input, output, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import type { Criterion, Evaluation } from '../../../shared/checks/evaluation.ts';
+import { criterionName } from '../../../shared/report/criterion-name.ts';
 import { MarginBar } from '../ui/margin-bar.ts';
 import { MethodLink } from '../ui/method-link.ts';
 import { SymbolText } from '../ui/symbol-text.ts';
 import { VerdictMark } from '../ui/verdict-mark.ts';
-import { criterionName } from './ladder-model.ts';
 import {
   cornerText,
   countWords,

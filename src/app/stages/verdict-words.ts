@@ -1,4 +1,3 @@
-import { criterionName } from './ladder-model.ts';
 import {
   CRITERIA,
   type CriterionGroup,
@@ -14,6 +13,7 @@ import {
   formatPercent,
   formatQuantity,
 } from '../../../shared/units/engineering-notation.ts';
+import { criterionName } from '../../../shared/report/criterion-name.ts';
 
 export const GROUP_NAMES: Readonly<Record<CriterionGroup, string>> = {
   'on-state': 'On state',
